@@ -1,0 +1,5 @@
+'use client';
+
+export function Board() {
+  return null;
+}

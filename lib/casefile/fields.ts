@@ -1,0 +1,139 @@
+import type { Dimension } from '@/lib/units/dimension';
+import { nodeAt } from './quantities';
+import type { CaseFile, VehicleId } from './schema';
+import { VEHICLE_IDS } from './schema';
+
+/**
+ * Every value of a case that a person can enter, as one list: the ledger's rows, the report's input table, the words a
+ * check uses to point at a value. Adding a field to the case file means adding its line here.
+ */
+export interface Field {
+  path: string;
+  label: string;
+  group: GroupId;
+  kind: 'quantity' | 'number' | 'text';
+  /** Of the value; a text has none. */
+  dimension: Dimension | null;
+  /** May be null: the row then offers to add it. */
+  optional: boolean;
+  /** The thing on the board that it belongs to. */
+  thing: ThingId;
+}
+
+export const GROUPS = [
+  { id: 'A', title: 'Vehicle A' },
+  { id: 'B', title: 'Vehicle B' },
+  { id: 'contact', title: 'Contact' },
+  { id: 'before', title: 'Before contact' },
+  { id: 'after.A', title: 'After contact, A' },
+  { id: 'after.B', title: 'After contact, B' },
+] as const;
+export type GroupId = (typeof GROUPS)[number]['id'];
+
+/** What can be selected on the board and in the ledger. */
+export type ThingId =
+  | `vehicle.${VehicleId}`
+  | 'contact.point'
+  | 'contact.plane'
+  | `approach.${VehicleId}`
+  | `departure.${VehicleId}`
+  | `leg.${VehicleId}.${number}`
+  | `rest.${VehicleId}`
+  | `mark.${number}`;
+
+type Line = [key: string, label: string, dimension: Dimension | null, optional?: 'optional'];
+
+const VEHICLE: Line[] = [
+  ['name', 'Name', null],
+  ['mass', 'Mass', 'mass'],
+  ['length', 'Length', 'length'],
+  ['width', 'Width', 'length'],
+  ['wheelbase', 'Wheelbase', 'length'],
+  ['track', 'Track', 'length'],
+  ['frontOverhang', 'Front overhang', 'length'],
+  ['frontAxleToMassCentre', 'Front axle to mass centre', 'length'],
+  ['yawInertia', 'Yaw inertia', 'yawInertia', 'optional'],
+];
+
+const CONTACT: Line[] = [
+  ['plane', 'Contact plane, direction', 'angle'],
+  ['restitution', 'Restitution', 'ratio', 'optional'],
+  ['impulseRatio', 'Impulse ratio (tangential / normal)', 'ratio', 'optional'],
+];
+
+const APPROACH: Line[] = [
+  ['direction', 'direction of approach', 'angle', 'optional'],
+  ['yawRate', 'yaw rate before contact', 'yawRate'],
+  ['speed', 'known approach speed', 'speed', 'optional'],
+];
+
+const LEG: Line[] = [
+  ['distance', 'distance', 'length'],
+  ['friction', 'friction', 'ratio'],
+  ['share', 'retardation share', 'ratio'],
+  ['grade', 'grade (uphill positive)', 'ratio'],
+];
+
+/** Plain numbers of a vehicle's drawing, without a spread. */
+const PLAIN = new Set(['length', 'width', 'wheelbase', 'track', 'frontOverhang']);
+
+function field(path: string, [key, label, dimension, optional]: Line, group: GroupId, thing: ThingId, prefix = ''): Field {
+  const kind = dimension === null ? 'text' : PLAIN.has(key) ? 'number' : 'quantity';
+  const spoken = prefix === '' ? label : `${prefix} ${label}`;
+  return { path, label: spoken, group, kind, dimension, optional: optional === 'optional', thing };
+}
+
+/** All rows of a case, in reading order. */
+export function fieldsOf(casefile: CaseFile): Field[] {
+  return [
+    ...VEHICLE_IDS.flatMap((id) => [
+      ...VEHICLE.map((line) => field(`vehicles.${id}.${line[0]}`, line, id, `vehicle.${id}`)),
+      ...poseFields(id),
+    ]),
+    field('impact.point.x', ['x', 'Contact point, x', 'length'], 'contact', 'contact.point'),
+    field('impact.point.y', ['y', 'Contact point, y', 'length'], 'contact', 'contact.point'),
+    ...CONTACT.map((line) => field(`impact.${line[0]}`, line, 'contact', 'contact.plane')),
+    field('pulse', ['pulse', 'Contact duration', 'time', 'optional'], 'contact', 'contact.plane'),
+    ...VEHICLE_IDS.flatMap((id) =>
+      APPROACH.map((line) => field(`approach.${id}.${line[0]}`, line, 'before', `approach.${id}`, `${id}:`)),
+    ),
+    ...VEHICLE_IDS.flatMap((id) => departureFields(casefile, id)),
+  ];
+}
+
+function poseFields(id: VehicleId): Field[] {
+  const lines: Line[] = [
+    ['x', 'Mass centre at contact, x', 'length'],
+    ['y', 'Mass centre at contact, y', 'length'],
+    ['heading', 'Heading at contact', 'angle'],
+  ];
+  return lines.map((line) => field(`impact.${id}.${line[0]}`, line, id, `vehicle.${id}`));
+}
+
+function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
+  const departure = casefile.departure[id];
+  if (departure?.kind !== 'legs') return [];
+  const group: GroupId = `after.${id}`;
+  const at = `departure.${id}`;
+  const whole: Line[] = [
+    ['direction', 'Direction of departure', 'angle'],
+    ['yawRate', 'Yaw rate after contact', 'yawRate', 'optional'],
+    ['endSpeed', 'Speed at the end of the travel', 'speed'],
+  ];
+  return [
+    ...whole.map((line) => field(`${at}.${line[0]}`, line, group, `departure.${id}`)),
+    ...departure.legs.flatMap((_, k) =>
+      LEG.map((line) => field(`${at}.legs.${k}.${line[0]}`, line, group, `leg.${id}.${k}`, `Leg ${k + 1}:`)),
+    ),
+  ];
+}
+
+/** The words for the value at a path, for checks and refusals; the path itself where no row has it. */
+export function labelOf(casefile: CaseFile, path: string): string {
+  const found = fieldsOf(casefile).find((f) => path === f.path || path.startsWith(`${f.path}.`));
+  if (!found) return path;
+  return /^[AB]$/.test(found.group) ? `${found.group}: ${found.label}` : found.label;
+}
+
+/** Whether the case states a value for the field. */
+export const isStated = (casefile: CaseFile, f: Field): boolean => (nodeAt(casefile, f.path) ?? null) !== null;

@@ -1,0 +1,97 @@
+import * as z from 'zod';
+
+/** The result file, version 1: what command, HTTP route and browser worker all answer. Units as in names.ts. */
+
+const number = z.number();
+
+export const bandSchema = z
+  .strictObject({
+    mean: number,
+    sd: number,
+    median: number,
+    /** Ends of the probabilistically symmetric interval at the stated coverage. */
+    low: number,
+    high: number,
+    /** Ends of the shortest interval at the stated coverage. */
+    shortest: z.tuple([number, number]),
+  })
+  .meta({ id: 'Band' });
+
+export const LEVELS = ['pass', 'note', 'caution', 'fail'] as const;
+
+export const checkSchema = z
+  .strictObject({
+    id: z.string(),
+    level: z.enum(LEVELS),
+    /** The number that was held against the limit; left out where there is none. */
+    value: number.optional(),
+    limit: number.optional(),
+    /** What was found, with the case's own numbers, and what to do about it. */
+    says: z.string(),
+    advice: z.string().optional(),
+    /** Where the limit comes from. */
+    source: z.string(),
+    /** The values of the case that it is about, as dotted paths. */
+    paths: z.array(z.string()),
+  })
+  .meta({ id: 'Check' });
+
+const named = z.record(z.string(), number);
+const bands = z.record(z.string(), bandSchema);
+const seatResult = z.strictObject({ name: z.string(), central: named, bands });
+
+export const resultSchema = z
+  .strictObject({
+    format: z.literal('retrodict-result'),
+    version: z.literal(1),
+    case: z.string(),
+    engine: z.string(),
+    method: z.enum(['directions', 'restitution', 'fit']),
+    seed: number,
+    draws: number,
+    coverage: number,
+    central: named,
+    bands,
+    impossible: z.record(z.string(), number),
+    checks: z.array(checkSchema),
+    sensitivity: z.record(z.string(), z.record(z.string(), z.strictObject({ first: number, total: number }))),
+    fit: z.null(),
+    hypotheses: z.array(z.never()),
+    seats: z.strictObject({ A: z.array(seatResult), B: z.array(seatResult) }),
+    more: z.strictObject({
+      /** 1-norm condition number of [mA hA, mB hB], scaled by the masses (directions). */
+      condition: number.optional(),
+      /** Sine of the angle between the approach directions (directions). */
+      sinBetween: number.optional(),
+      /** 1/e (restitution). */
+      amplification: number.optional(),
+      /** The most energy that the contact could take, J, and the share of it that was lost. */
+      closingEnergy: number.optional(),
+      shareLost: number.optional(),
+      /** Peak of a haversine pulse, m/s^2: twice the mean acceleration. */
+      'A.peakAcceleration': number.optional(),
+      'B.peakAcceleration': number.optional(),
+      /** Yaw inertia used, kg m^2. */
+      'A.yawInertia': number.optional(),
+      'B.yawInertia': number.optional(),
+      /** Yaw rate after contact that the impulse predicts from that before, deg/s. */
+      'A.predictedYawRate': number.optional(),
+      'B.predictedYawRate': number.optional(),
+      /** Momentum (kg m/s) and angular momentum about the contact point (kg m^2/s), before and after. */
+      momentumBefore: z.tuple([number, number]).optional(),
+      momentumAfter: z.tuple([number, number]).optional(),
+      angularMomentumBefore: number.optional(),
+      angularMomentumAfter: number.optional(),
+      /** Tyre impulse over contact impulse, an upper bound (models.md section 9). */
+      tyreShare: number.optional(),
+      /** Draws that JCGM 101 7.9 asked for, and whether it was reached (draws 'auto'). */
+      settled: z.boolean().optional(),
+    }),
+  })
+  .meta({ id: 'RetrodictResult', title: 'Retrodict result file, version 1' });
+
+export type Result = z.infer<typeof resultSchema>;
+export type Band = z.infer<typeof bandSchema>;
+export type Check = z.infer<typeof checkSchema>;
+export type Level = (typeof LEVELS)[number];
+export type SeatResult = z.infer<typeof seatResult>;

@@ -1,0 +1,5 @@
+import { getRevision } from '@/lib/entry/http-cases';
+import { overStore } from '@/lib/entry/http-door';
+
+export const dynamic = 'force-dynamic';
+export const GET = overStore(getRevision);

@@ -132,7 +132,8 @@ function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
 export function labelOf(casefile: CaseFile, path: string): string {
   const found = fieldsOf(casefile).find((f) => path === f.path || path.startsWith(`${f.path}.`));
   if (!found) return path;
-  return /^[AB]$/.test(found.group) ? `${found.group}: ${found.label}` : found.label;
+  const vehicle = /^(?:after\.)?([AB])$/.exec(found.group)?.[1];
+  return vehicle ? `${vehicle}: ${found.label}` : found.label;
 }
 
 /** Whether the case states a value for the field. */

@@ -15,4 +15,3 @@ export const problems = (status: number, error: readonly Issue[], more: Record<s
   answer(status, { error, ...more });
 
 export const problem = (status: number, says: string, path = REQUEST): Response => problems(status, [{ path, says }]);
-

@@ -19,7 +19,10 @@ const tag = (revision: number): Record<string, string> => ({ etag: `"${revision}
 /** GET /api/cases */
 export async function getCases(_request: Request, store: Store): Promise<Response> {
   const lines = await listCases(store);
-  return answer(200, lines.map((line) => ({ ...line, changed: iso(line.changed) })));
+  return answer(
+    200,
+    lines.map((line) => ({ ...line, changed: iso(line.changed) })),
+  );
 }
 
 /** POST /api/cases: 201 { id, revision, sha256 } */
@@ -37,7 +40,8 @@ export const getCase = async (_request: Request, store: Store, { id }: Place): P
 /** PUT /api/cases/<id> with If-Match: "<revision>": 200 { revision, sha256 }, or 412 with the current ones. */
 export async function putCase(request: Request, store: Store, { id }: Place): Promise<Response> {
   const match = request.headers.get('if-match');
-  if (match === null) return problem(428, 'If-Match is missing: send the revision that you changed, for example If-Match: "3"');
+  if (match === null)
+    return problem(428, 'If-Match is missing: send the revision that you changed, for example If-Match: "3"');
   const parsed = await readCaseBody(request);
   if (!parsed.ok) return problems(422, parsed.issues);
   return savedAnswer(await saveCase(store, id, matchedRevision(match), parsed.casefile), id);
@@ -54,7 +58,12 @@ export const undeleteCase = async (_request: Request, store: Store, { id }: Plac
 /** GET /api/cases/<id>/revisions: [{ revision, sha256, created }], newest first */
 export async function getRevisions(_request: Request, store: Store, { id }: Place): Promise<Response> {
   const revisions = await listRevisions(store, id);
-  return revisions ? answer(200, revisions.map((r) => ({ ...r, created: iso(r.created) }))) : noSuchCase(id);
+  return revisions
+    ? answer(
+        200,
+        revisions.map((r) => ({ ...r, created: iso(r.created) })),
+      )
+    : noSuchCase(id);
 }
 
 /** GET /api/cases/<id>/revisions/<n>: { id, revision, sha256, case } */
@@ -77,7 +86,8 @@ function revisionAnswer(found: Revision | null, what: string): Response {
 
 function savedAnswer(saved: Saved, id: string): Response {
   if (saved.kind === 'unknown') return noSuchCase(id);
-  if (saved.kind === 'deleted') return problem(410, 'The case was deleted; nothing was written. Restore it, or keep this as a new case.');
+  if (saved.kind === 'deleted')
+    return problem(410, 'The case was deleted; nothing was written. Restore it, or keep this as a new case.');
   const { revision, sha256 } = saved;
   if (saved.kind === 'saved') return answer(200, { revision, sha256 }, tag(revision));
   const says = `The case was changed meanwhile: its revision is now ${revision}. Nothing was written.`;

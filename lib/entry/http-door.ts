@@ -29,7 +29,11 @@ async function guarded(request: Request, handle: () => Promise<Response>): Promi
   } catch (error) {
     console.error(error);
     return isStoreTrouble(error)
-      ? problem(503, 'The cases on disk cannot be reached or written; nothing was saved. Is the disk full, or the folder read-only?', '(store)')
+      ? problem(
+          503,
+          'The cases on disk cannot be reached or written; nothing was saved. Is the disk full, or the folder read-only?',
+          '(store)',
+        )
       : problem(500, 'The server made a mistake; nothing was saved. Its log says more.', '(server)');
   }
 }

@@ -10,7 +10,10 @@ export function refused(request: Request, host = process.env.HOST): Response | n
   const asked = request.headers.get('host') ?? new URL(request.url).host;
   const open = host !== undefined && host !== '' && !LOOPBACK.test(host);
   if (!open && !LOOPBACK.test(asked))
-    return problem(403, `This server answers to localhost only, not to ${asked}. Start it with HOST set to open it to others.`);
+    return problem(
+      403,
+      `This server answers to localhost only, not to ${asked}. Start it with HOST set to open it to others.`,
+    );
   if (request.method === 'GET' || request.method === 'HEAD') return null;
   const origin = request.headers.get('origin');
   const foreign = origin !== null && !sameHost(origin, asked);
@@ -21,7 +24,10 @@ export function refused(request: Request, host = process.env.HOST): Response | n
 
 function sameHost(origin: string, host: string): boolean {
   try {
-    return new URL(origin).host === host.toLowerCase().replace(/:(80|443)$/, '') || new URL(origin).host === host.toLowerCase();
+    return (
+      new URL(origin).host === host.toLowerCase().replace(/:(80|443)$/, '') ||
+      new URL(origin).host === host.toLowerCase()
+    );
   } catch {
     return false;
   }

@@ -120,7 +120,10 @@ async function insertRevision(
   casefile: CaseFile,
 ): Promise<Written> {
   const sha256 = hashOf(casefile);
-  await trx.insertInto('revisions').values({ case_id: id, revision, sha256, body: canonical(casefile), created }).execute();
+  await trx
+    .insertInto('revisions')
+    .values({ case_id: id, revision, sha256, body: canonical(casefile), created })
+    .execute();
   return { id, revision, sha256 };
 }
 

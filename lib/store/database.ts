@@ -63,4 +63,6 @@ export async function openDatabase(folder: string): Promise<Kysely<Tables>> {
 
 /** Whether an error says that the disk or the database refused, rather than that the program is wrong. */
 export const isStoreTrouble = (error: unknown): boolean =>
-  error instanceof Error && 'code' in error && /^(SQLITE_(FULL|BUSY|READONLY|IOERR|CANTOPEN|LOCKED)|EACCES|EROFS|ENOSPC)/.test(String(error.code));
+  error instanceof Error &&
+  'code' in error &&
+  /^(SQLITE_(FULL|BUSY|READONLY|IOERR|CANTOPEN|LOCKED)|EACCES|EROFS|ENOSPC)/.test(String(error.code));

@@ -11,7 +11,8 @@ export async function loadExamples(store: Store, folder: string): Promise<void> 
   const files = (await readdir(folder)).filter((name) => name.endsWith(ENDING)).sort();
   for (const file of files) {
     const parsed = parseCase(await readFile(join(folder, file)));
-    if (!parsed.ok) throw new Error(`The example ${file} is not a valid case: ${parsed.issues[0]?.path} ${parsed.issues[0]?.says}`);
+    if (!parsed.ok)
+      throw new Error(`The example ${file} is not a valid case: ${parsed.issues[0]?.path} ${parsed.issues[0]?.says}`);
     await createExample(store, file.slice(0, -ENDING.length), parsed.casefile);
   }
 }

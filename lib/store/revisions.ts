@@ -13,7 +13,8 @@ export interface Revision extends Written {
 export const readCase = (store: Store, id: string): Promise<Revision | null> => read(store, id, null);
 
 /** One revision of a case that stands, or null. */
-export const readRevision = (store: Store, id: string, revision: number): Promise<Revision | null> => read(store, id, revision);
+export const readRevision = (store: Store, id: string, revision: number): Promise<Revision | null> =>
+  read(store, id, revision);
 
 /** All revisions of a case that stands, newest first, without their bodies; null if there is no such case. */
 export async function listRevisions({ db }: Store, id: string): Promise<Omit<Revision, 'case' | 'id'>[] | null> {
@@ -45,6 +46,7 @@ async function read({ db }: Store, id: string, revision: number | null): Promise
 /** What was kept was valid when it was kept: anything else is a damaged file, and said as such. */
 function parsed(body: string): CaseFile {
   const checked = parseCaseText(body);
-  if (!checked.ok) throw new Error(`A kept revision is not a valid case: ${checked.issues[0]?.path} ${checked.issues[0]?.says}`);
+  if (!checked.ok)
+    throw new Error(`A kept revision is not a valid case: ${checked.issues[0]?.path} ${checked.issues[0]?.says}`);
   return checked.casefile;
 }

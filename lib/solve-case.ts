@@ -1,7 +1,20 @@
+import { DEFAULT_COVERAGE, DEFAULT_DRAWS, DEFAULT_SEED } from '@/lib/casefile/defaults';
 import type { Issue } from '@/lib/casefile/issue';
+import { needsOf } from '@/lib/casefile/needs';
 import type { CaseFile, Method } from '@/lib/casefile/schema';
-import type { ResultName } from '@/lib/results/names';
+import type { SolvedMethod } from '@/lib/evidence/problem';
+import { notYetSolved, readEvidence } from '@/lib/evidence/read-evidence';
+import type { Shapes } from '@/lib/results/bands';
+import { HEADLINES } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
+import { summarise } from '@/lib/results/summarise';
+import { solveCentral } from '@/lib/solve/central';
+import { refusalOf } from '@/lib/solve/refusal';
+import { here, runOn } from '@/lib/solve/lanes';
+import { solve } from '@/lib/solve/solve';
+import type { RunTasks } from '@/lib/solve/task';
+
+export type { Shape, Shapes } from '@/lib/results/bands';
 
 /** Which of the case's settings to override, and how to run. */
 export interface SolveOptions {
@@ -10,28 +23,42 @@ export interface SolveOptions {
   seed?: number;
   /** Left out: true. Off while a drag is under way. */
   sensitivity?: boolean;
-  /** 0..1, at most some tens of times a second. */
+  /** How tasks are run; left out: one after another, here. */
+  run?: RunTasks;
+  /** 0..1, once a finished task. */
   onProgress?: (done: number) => void;
-  signal?: AbortSignal;
 }
 
-/** How the draws of one result are distributed: counts in equal bins from low to high. For pictures only. */
-export interface Shape {
-  low: number;
-  high: number;
-  counts: number[];
-}
-export type Shapes = Partial<Record<ResultName, Shape>>;
-
-/** What became of a case. Never throws for a case, whatever stands in it. */
+/** What became of a case. */
 export type Outcome =
   | { kind: 'solved'; result: Result; shapes: Shapes }
-  /** The case is invalid, or lacks what its method needs. */
+  /** The case lacks what its method needs, or is invalid. */
   | { kind: 'invalid'; issues: Issue[] }
   /** Valid, but nothing can be computed: the reason, with the path it hangs on. */
-  | { kind: 'unsolved'; reason: Issue }
-  | { kind: 'cancelled' };
+  | { kind: 'unsolved'; reason: Issue };
 
-export async function solveCase(_casefile: CaseFile, _options: SolveOptions = {}): Promise<Outcome> {
-  return { kind: 'unsolved', reason: { path: 'analysis.method', says: 'not built yet' } };
+/**
+ * The whole computation: a valid case to its result. Never throws for a case, whatever stands in it; rejects only when
+ * `run` does (cancelled, a worker lost).
+ */
+export async function solveCase(casefile: CaseFile, options: SolveOptions = {}): Promise<Outcome> {
+  const { analysis } = casefile;
+  const method = options.method ?? analysis.method;
+  const lacking = needsOf(casefile, method);
+  if (lacking.length > 0) return { kind: 'invalid', issues: lacking };
+  const missing = notYetSolved(casefile, method);
+  if (missing) return { kind: 'unsolved', reason: missing };
+
+  const problem = readEvidence(casefile, method as SolvedMethod, options.seed ?? analysis.seed ?? DEFAULT_SEED);
+  const central = solveCentral(problem);
+  const refusal = refusalOf(problem, central);
+  if (refusal) return { kind: 'unsolved', reason: refusal };
+
+  const settings = {
+    draws: options.draws ?? analysis.draws ?? DEFAULT_DRAWS,
+    coverage: analysis.coverage ?? DEFAULT_COVERAGE,
+    traced: options.sensitivity === false ? [] : [...HEADLINES],
+  };
+  const solution = await solve(problem, central, settings, options.run ?? runOn([here]), options.onProgress);
+  return { kind: 'solved', ...summarise(casefile, solution, settings.coverage) };
 }

@@ -1,9 +1,12 @@
 'use client';
-import { type ReactNode, createContext, useContext } from 'react';
+import { type ReactNode, createContext, useContext, useEffect, useState } from 'react';
 import type { Issue } from '@/lib/casefile/issue';
 import type { CaseFile } from '@/lib/casefile/schema';
 import type { Shapes } from '@/lib/solve-case';
 import type { Result } from '@/lib/results/result';
+import { createWorkerPool } from '@/lib/entry/worker-pool';
+import { NO_ANSWER, startAnswering } from './answer-controller';
+import { useSessionStore } from './use-session';
 
 /**
  * The answer to the case as it stands now.
@@ -29,22 +32,23 @@ export interface Answer {
   again: () => void;
 }
 
-const NOTHING: Answer = {
-  status: 'working',
-  result: null,
-  shapes: {},
-  of: null,
-  stale: true,
-  issues: [],
-  progress: null,
-  cancel: () => {},
-  again: () => {},
-};
-
-const AnswerContext = createContext<Answer>(NOTHING);
+const AnswerContext = createContext<Answer>(NO_ANSWER);
 
 export const useAnswer = (): Answer => useContext(AnswerContext);
 
+/** At most this many workers; `?workers=N` in the address asks for another number. */
+const MOST_WORKERS = 4;
+
+function workersWanted(): number {
+  const asked = Number(new URLSearchParams(window.location.search).get('workers'));
+  if (Number.isInteger(asked) && asked >= 1 && asked <= 16) return asked;
+  return Math.max(1, Math.min(MOST_WORKERS, (navigator.hardwareConcurrency || 2) - 1));
+}
+
+/** Solves the session's case in workers and hands the answer to everything below. */
 export function AnswerProvider({ children }: { children: ReactNode }) {
-  return <AnswerContext value={NOTHING}>{children}</AnswerContext>;
+  const session = useSessionStore();
+  const [answer, setAnswer] = useState<Answer>(NO_ANSWER);
+  useEffect(() => startAnswering(session, createWorkerPool(workersWanted()), setAnswer), [session]);
+  return <AnswerContext value={answer}>{children}</AnswerContext>;
 }

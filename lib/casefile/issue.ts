@@ -46,7 +46,7 @@ const valueAt = (root: unknown, path: readonly PropertyKey[]): unknown =>
   path.reduce<unknown>((node, key) => (node === null || node === undefined ? undefined : (node as never)[key]), root);
 
 const sizeSays = (origin: string, limit: number | bigint, side: 'least' | 'most'): string =>
-  `must have at ${side} ${limit} ${origin === 'array' ? 'entries' : 'characters'}`;
+  `must have at ${side} ${limit} ${origin === 'array' ? (limit === 1 ? 'entry' : 'entries') : 'characters'}`;
 
 type RawIssue = z.core.$ZodIssue;
 

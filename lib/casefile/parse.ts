@@ -41,6 +41,7 @@ export function checkCase(document: unknown): Parsed {
 }
 
 function decode(bytes: Uint8Array): string | null {
+  if (bytes.includes(0)) return null; // UTF-16 of plain letters would pass as UTF-8 with zero bytes between
   try {
     return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
   } catch {
@@ -93,8 +94,9 @@ function syntaxIssues(text: string): Issue[] {
     },
     { disallowComments: true, allowTrailingComma: false, allowEmptyContent: false },
   );
-  if (issues.length > 0) return issues.slice(0, 100);
-  return strictJsonIssue(text);
+  const syntax = issues.findIndex(({ path }) => path === DOCUMENT);
+  if (syntax >= 0) return [issues[syntax]];
+  return issues.length > 0 ? issues : strictJsonIssue(text);
 }
 
 const spelled = (error: ParseError['error']): string =>

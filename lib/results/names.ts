@@ -42,7 +42,15 @@ export const RESULT_NAMES: readonly ResultName[] = [
 ];
 
 /** The results whose spread is traced back to the inputs, and that the screen and the report lead with. */
-export const HEADLINES: readonly ResultName[] = ['A.approachSpeed', 'B.approachSpeed', 'A.deltaV', 'B.deltaV', 'closingSpeed', 'restitution', 'energyLost'];
+export const HEADLINES = [
+  'A.approachSpeed',
+  'B.approachSpeed',
+  'A.deltaV',
+  'B.deltaV',
+  'closingSpeed',
+  'restitution',
+  'energyLost',
+] as const satisfies readonly ResultName[];
 
 const entry = (name: ResultName): readonly [Dimension, string] => {
   const vehicle = /^[AB]\.(.+)$/.exec(name);

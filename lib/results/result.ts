@@ -84,8 +84,6 @@ export const resultSchema = z
       angularMomentumAfter: number.optional(),
       /** Tyre impulse over contact impulse, an upper bound (models.md section 9). */
       tyreShare: number.optional(),
-      /** Draws that JCGM 101 7.9 asked for, and whether it was reached (draws 'auto'). */
-      settled: z.boolean().optional(),
     }),
   })
   .meta({ id: 'RetrodictResult', title: 'Retrodict result file, version 1' });

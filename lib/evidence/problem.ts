@@ -1,0 +1,66 @@
+import type { Method, VehicleId } from '@/lib/casefile/schema';
+import type { DrawSpread, DrawSupport } from '@/lib/numerics/spread';
+
+/**
+ * The problem: what a method uses of a case, in SI and radians, as plain data that can be sent to a worker.
+ * Every uncertain or fixed number is one input; the mechanical roles point at inputs by index.
+ */
+export interface Input {
+  /** Dotted path in the case file; also the name of its random stream. */
+  path: string;
+  value: number;
+  spread: DrawSpread;
+  support: DrawSupport;
+}
+
+/** Index into Problem.inputs. */
+export type Slot = number;
+
+export interface LegSlots {
+  distance: Slot;
+  friction: Slot;
+  share: Slot;
+  grade: Slot;
+}
+
+export interface LegsSlots {
+  direction: Slot;
+  yawRate: Slot | null;
+  endSpeed: Slot;
+  legs: LegSlots[];
+}
+
+export interface VehicleSlots {
+  mass: Slot;
+  /** The inertia itself, or the factor on the estimate when `inertiaEstimated`. */
+  yawInertia: Slot;
+  inertiaEstimated: boolean;
+  frontAxleToMassCentre: Slot;
+  /** m, fixed. */
+  wheelbase: number;
+  x: Slot;
+  y: Slot;
+  heading: Slot;
+  /** Inputs of the method directions; results of the method restitution. */
+  approachDirection: Slot | null;
+  approachYawRate: Slot | null;
+  departure: LegsSlots;
+}
+
+/** The methods that this version solves. */
+export type SolvedMethod = Exclude<Method, 'fit'>;
+
+export interface Problem {
+  method: SolvedMethod;
+  inputs: Input[];
+  vehicles: Record<VehicleId, VehicleSlots>;
+  pointX: Slot;
+  pointY: Slot;
+  plane: Slot;
+  restitution: Slot | null;
+  impulseRatio: Slot | null;
+  pulse: Slot | null;
+  /** Seat positions in vehicle axes from the mass centre, m. */
+  seats: Record<VehicleId, { name: string; x: number; y: number }[]>;
+  seed: number;
+}

@@ -1,0 +1,54 @@
+export type Point = readonly [number, number];
+
+/** Corners of a vehicle's outline in the world, m, counter-clockwise from the rear right. */
+export function outlineOf(
+  vehicle: { length: number; width: number; frontOverhang: number; frontAxleToMassCentre: number },
+  pose: { x: number; y: number; heading: number },
+): Point[] {
+  const front = vehicle.frontAxleToMassCentre + vehicle.frontOverhang;
+  const rear = front - vehicle.length;
+  const half = vehicle.width / 2;
+  const [c, s] = [Math.cos(pose.heading), Math.sin(pose.heading)];
+  const corners: Point[] = [[rear, -half], [front, -half], [front, half], [rear, half]];
+  return corners.map(([x, y]) => [pose.x + c * x - s * y, pose.y + s * x + c * y]);
+}
+
+/** Outward unit normals of the edges of a convex counter-clockwise polygon. */
+const edges = (polygon: readonly Point[]) =>
+  polygon.map((from, i) => {
+    const to = polygon[(i + 1) % polygon.length];
+    const [dx, dy] = [to[0] - from[0], to[1] - from[1]];
+    const length = Math.sqrt(dx * dx + dy * dy);
+    return { from, to, length, normal: [dy / length, -dx / length] as const };
+  });
+
+const along = ([nx, ny]: Point, p: Point, from: Point): number => nx * (p[0] - from[0]) + ny * (p[1] - from[1]);
+
+/** Distance of a point outside a convex polygon, m; inside, minus the distance to the nearest edge. */
+export function distanceOutside(point: Point, polygon: readonly Point[]): number {
+  const sides = edges(polygon);
+  const inside = Math.max(...sides.map(({ normal, from }) => along(normal, point, from)));
+  if (inside <= 0) return inside;
+  return Math.min(
+    ...sides.map(({ from, to, length }) => {
+      const t = ((point[0] - from[0]) * (to[0] - from[0]) + (point[1] - from[1]) * (to[1] - from[1])) / (length * length);
+      const s = Math.min(1, Math.max(0, t));
+      const [qx, qy] = [from[0] + s * (to[0] - from[0]) - point[0], from[1] + s * (to[1] - from[1]) - point[1]];
+      return Math.sqrt(qx * qx + qy * qy);
+    }),
+  );
+}
+
+/**
+ * How deep two convex polygons overlap, m: the least shift that parts them (separating axes). Negative where they are
+ * apart: minus the distance between them.
+ */
+export function overlapDepth(a: readonly Point[], b: readonly Point[]): number {
+  const gaps = [...gapsBeyond(a, b), ...gapsBeyond(b, a)];
+  const gap = Math.max(...gaps);
+  return gap <= 0 ? -gap : -Math.min(...a.map((p) => distanceOutside(p, b)), ...b.map((p) => distanceOutside(p, a)));
+}
+
+/** For each edge of `a`, how far all of `b` lies beyond it. */
+const gapsBeyond = (a: readonly Point[], b: readonly Point[]): number[] =>
+  edges(a).map(({ normal, from }) => Math.min(...b.map((p) => along(normal, p, from))));

@@ -1,0 +1,46 @@
+import { tyreShareOf } from '@/lib/evidence/tyre-share';
+import { peakAcceleration } from '@/lib/mechanics/pulse';
+import type { Solution } from '@/lib/solve/solve';
+import type { Result } from './result';
+
+const DEGREES_PER_RADIAN = 180 / Math.PI;
+
+/** Further figures of the central solution, as resultSchema names them; what is not finite is left out. */
+export function moreOf(solution: Solution): Result['more'] {
+  const { problem, central } = solution;
+  const { state, answer, figures } = central;
+  const { A, B } = state;
+  const peak = (meanOf: number | undefined): number | undefined => (meanOf === undefined ? undefined : peakAcceleration(meanOf));
+  const more: Result['more'] = {
+    ...(problem.method === 'directions'
+      ? { condition: answer.condition, sinBetween: answer.sinBetween }
+      : { amplification: 1 / state.e }),
+    closingEnergy: answer.closingEnergy,
+    shareLost: answer.energyLost / answer.closingEnergy,
+    'A.peakAcceleration': peak(figures['A.meanAcceleration']),
+    'B.peakAcceleration': peak(figures['B.meanAcceleration']),
+    'A.yawInertia': A.I,
+    'B.yawInertia': B.I,
+    'A.predictedYawRate': answer.A.wPredicted * DEGREES_PER_RADIAN,
+    'B.predictedYawRate': answer.B.wPredicted * DEGREES_PER_RADIAN,
+    momentumBefore: [A.m * answer.A.vx + B.m * answer.B.vx, A.m * answer.A.vy + B.m * answer.B.vy],
+    momentumAfter: [A.m * A.vx + B.m * B.vx, A.m * A.vy + B.m * B.vy],
+    angularMomentumBefore: angularMomentum(solution, 'before'),
+    angularMomentumAfter: angularMomentum(solution, 'after'),
+    tyreShare: tyreShareOf(problem, figures.impulse) ?? undefined,
+  };
+  return Object.fromEntries(
+    Object.entries(more).filter(([, value]) => [value].flat().every((x) => typeof x === 'number' && Number.isFinite(x))),
+  );
+}
+
+/** About the contact point, kg m^2/s; after contact with the yaw rates that the impulse predicts. */
+function angularMomentum({ central: { state, answer } }: Solution, when: 'before' | 'after'): number {
+  return (['A', 'B'] as const).reduce((sum, id) => {
+    const body = state[id];
+    const found = answer[id];
+    const [vx, vy, w] = when === 'before' ? [found.vx, found.vy, found.wBefore] : [body.vx, body.vy, found.wPredicted];
+    const [rx, ry] = [body.x - state.px, body.y - state.py];
+    return sum + body.I * w + body.m * (rx * vy - ry * vx);
+  }, 0);
+}

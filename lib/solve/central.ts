@@ -1,0 +1,41 @@
+import type { VehicleId } from '@/lib/casefile/schema';
+import type { Problem } from '@/lib/evidence/problem';
+import type { ImpactAnswer, ImpactState, Reason } from '@/lib/mechanics/impact-backwards';
+import { legStartSpeedSquared } from '@/lib/mechanics/legs';
+import { type FigureName, columnOf, figuresOf } from './columns';
+import { Kernel } from './kernel';
+
+/** The answer with every input at its value. */
+export interface Central {
+  /** Why it is impossible, or null. */
+  reason: Reason | null;
+  /** Where the reason is `leg`: the vehicle and the leg, counted from 0. */
+  failingLeg: { vehicle: VehicleId; leg: number } | null;
+  /** SI and radians; a value that does not exist is NaN. */
+  figures: Record<FigureName, number>;
+  state: ImpactState;
+  answer: ImpactAnswer;
+}
+
+export function solveCentral(problem: Problem): Central {
+  const kernel = new Kernel(problem);
+  const reason = kernel.solveCentral();
+  const figures = Object.fromEntries(
+    figuresOf(problem).map((name) => [name, columnOf(kernel.columns, name)[0]]),
+  ) as Central['figures'];
+  return { reason, failingLeg: reason === 'leg' ? failingLeg(problem) : null, figures, state: kernel.state, answer: kernel.answer };
+}
+
+/** The first leg, going back from rest, whose start has no real speed: A before B. */
+function failingLeg({ inputs, vehicles }: Problem): Central['failingLeg'] {
+  for (const vehicle of ['A', 'B'] as const) {
+    const { legs, endSpeed } = vehicles[vehicle].departure;
+    let squared = inputs[endSpeed].value ** 2;
+    for (let leg = legs.length - 1; leg >= 0; leg--) {
+      const { distance, friction, share, grade } = legs[leg];
+      squared = legStartSpeedSquared(squared, inputs[distance].value, inputs[friction].value, inputs[share].value, inputs[grade].value);
+      if (!(squared >= 0)) return { vehicle, leg };
+    }
+  }
+  return null;
+}

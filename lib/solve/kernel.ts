@@ -1,0 +1,185 @@
+import type { Problem, VehicleSlots } from '@/lib/evidence/problem';
+import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
+import { fillBlock } from '@/lib/numerics/spread';
+import {
+  type ImpactAnswer,
+  type ImpactState,
+  REASONS,
+  type Reason,
+  type VehicleAnswer,
+  type VehicleState,
+  emptyAnswer,
+  emptyState,
+  solveDirections,
+  solveRestitution,
+} from '@/lib/mechanics/impact-backwards';
+import { estimatedYawInertia } from '@/lib/mechanics/inertia';
+import { meanAcceleration } from '@/lib/mechanics/pulse';
+import { legStartSpeedSquared } from '@/lib/mechanics/legs';
+import { type VehicleColumns, type Columns, makeColumns } from './columns';
+
+/** Draws are made and solved in blocks of this many; draw k of an input depends on (seed, path, k) alone. */
+export const BLOCK = 1024;
+
+/** A speed below this has no direction, m/s. */
+const STANDING = 1e-9;
+
+/**
+ * The one kernel: solves a block of draws, structure of arrays, nothing allocated per draw. The central answer is a
+ * block of one. Columns are SI and radians; a value that does not exist is NaN there and is left out of the result.
+ */
+export class Kernel {
+  readonly columns: Columns;
+  /** Of the last solved block: 0, or 1 + index into REASONS. */
+  readonly reasons = new Uint8Array(BLOCK);
+  /** The records of the draw solved last: of the central one, for the worked figures. */
+  readonly state: ImpactState = emptyState();
+  readonly answer: ImpactAnswer = emptyAnswer();
+  readonly inputs: Float64Array[];
+
+  constructor(readonly problem: Problem) {
+    this.inputs = problem.inputs.map((input) => new Float64Array(BLOCK).fill(input.value));
+    this.columns = makeColumns(BLOCK);
+  }
+
+  /** Draws a block of every uncertain input. `tag` names another, independent set of streams. */
+  draw(block: number, count: number, tag = ''): void {
+    this.problem.inputs.forEach((_, slot) => this.drawInput(slot, block, count, tag));
+  }
+
+  /** Draws a block of one input. */
+  drawInput(slot: number, block: number, count: number, tag = ''): void {
+    const input = this.problem.inputs[slot];
+    if (input.spread.shape === 'fixed') return;
+    fillBlock(this.inputs[slot], count, input, this.problem.seed, input.path + tag, block);
+  }
+
+  /** Solves every input at its value; returns why it is impossible, or null. The figures are in row 0 and in the records. */
+  solveCentral(): Reason | null {
+    this.problem.inputs.forEach((input, slot) => (this.inputs[slot][0] = input.value));
+    this.solve(1);
+    return this.reasonOf(0);
+  }
+
+  solve(count: number): void {
+    for (let k = 0; k < count; k++) this.solveDraw(k);
+  }
+
+  reasonOf(k: number): Reason | null {
+    return this.reasons[k] === 0 ? null : REASONS[this.reasons[k] - 1];
+  }
+
+  private solveDraw(k: number): void {
+    const { problem, state, answer } = this;
+    const { A, B } = problem.vehicles;
+    const travelled = this.loadVehicle(k, A, state.A) && this.loadVehicle(k, B, state.B);
+    if (!travelled) {
+      this.reasons[k] = 1 + REASONS.indexOf('leg');
+      return;
+    }
+    state.px = this.inputs[problem.pointX][k];
+    state.py = this.inputs[problem.pointY][k];
+    state.plane = this.inputs[problem.plane][k];
+    let reason: Reason | null;
+    if (problem.restitution !== null && problem.impulseRatio !== null) {
+      state.e = this.inputs[problem.restitution][k];
+      state.mu = this.inputs[problem.impulseRatio][k];
+      reason = solveRestitution(state, answer);
+    } else reason = solveDirections(state, answer);
+    this.reasons[k] = reason === null ? 0 : 1 + REASONS.indexOf(reason);
+    this.write(k);
+  }
+
+  /** Masses, pose and separation velocity of one vehicle. False where a leg has no real speed at its start. */
+  private loadVehicle(k: number, slots: VehicleSlots, vehicle: VehicleState): boolean {
+    const { inputs } = this;
+    const front = inputs[slots.frontAxleToMassCentre][k];
+    const inertia = inputs[slots.yawInertia][k];
+    vehicle.m = inputs[slots.mass][k];
+    vehicle.I = slots.inertiaEstimated
+      ? inertia * estimatedYawInertia(vehicle.m, front, slots.wheelbase - front)
+      : inertia;
+    vehicle.x = inputs[slots.x][k];
+    vehicle.y = inputs[slots.y][k];
+    if (slots.approachDirection !== null) {
+      const direction = inputs[slots.approachDirection][k];
+      vehicle.hx = cos(direction);
+      vehicle.hy = sin(direction);
+    }
+    vehicle.wBefore = slots.approachYawRate === null ? 0 : inputs[slots.approachYawRate][k];
+    vehicle.wMeasured = slots.departure.yawRate === null ? NaN : inputs[slots.departure.yawRate][k];
+    return this.loadTravel(k, slots, vehicle);
+  }
+
+  private loadTravel(k: number, slots: VehicleSlots, vehicle: VehicleState): boolean {
+    const { inputs } = this;
+    const { legs, endSpeed, direction } = slots.departure;
+    let squared = inputs[endSpeed][k] * inputs[endSpeed][k];
+    for (let i = legs.length - 1; i >= 0; i--) {
+      const leg = legs[i];
+      squared = legStartSpeedSquared(
+        squared,
+        inputs[leg.distance][k],
+        inputs[leg.friction][k],
+        inputs[leg.share][k],
+        inputs[leg.grade][k],
+      );
+      if (!(squared >= 0)) return false;
+    }
+    const speed = Math.sqrt(squared);
+    vehicle.vx = speed * cos(inputs[direction][k]);
+    vehicle.vy = speed * sin(inputs[direction][k]);
+    return true;
+  }
+
+  private write(k: number): void {
+    const { answer, columns, problem, state, inputs } = this;
+    const pulse = problem.pulse === null ? NaN : inputs[problem.pulse][k];
+    const { A, B } = problem.vehicles;
+    this.writeVehicle(k, columns.A, A, state.A, answer.A, pulse);
+    this.writeVehicle(k, columns.B, B, state.B, answer.B, pulse);
+    columns.closingSpeed[k] = answer.un;
+    columns.slidingSpeed[k] = answer.ut;
+    columns.restitution[k] = answer.e;
+    columns.impulseRatio[k] = answer.mu;
+    columns.impulse[k] = hypot(answer.Jn, answer.Jt);
+    columns.energyLost[k] = answer.energyLost;
+  }
+
+  private writeVehicle(
+    k: number,
+    to: VehicleColumns,
+    slots: VehicleSlots,
+    vehicle: VehicleState,
+    found: VehicleAnswer,
+    pulse: number,
+  ): void {
+    const { inputs } = this;
+    const heading = inputs[slots.heading][k];
+    const [cosH, sinH] = [cos(heading), sin(heading)];
+    const dx = vehicle.vx - found.vx;
+    const dy = vehicle.vy - found.vy;
+    const forward = dx * cosH + dy * sinH;
+    const left = dy * cosH - dx * sinH;
+    const deltaV = hypot(dx, dy);
+    const after = hypot(vehicle.vx, vehicle.vy);
+    to.approachSpeed[k] = found.speed;
+    to.approachDirection[k] =
+      slots.approachDirection === null
+        ? directionOf(found.vx, found.vy, found.speed)
+        : inputs[slots.approachDirection][k];
+    to.approachYawRate[k] = found.wBefore;
+    to.departureSpeed[k] = after;
+    to.departureDirection[k] = after > STANDING ? inputs[slots.departure.direction][k] : NaN;
+    to.departureYawRate[k] = found.wAfter;
+    to.deltaV[k] = deltaV;
+    to.deltaVForward[k] = forward;
+    to.deltaVLeft[k] = left;
+    to.deltaVDirection[k] = directionOf(forward, left, deltaV);
+    to.meanAcceleration[k] = meanAcceleration(deltaV, pulse);
+    to.predictedYawRate[k] = found.wPredicted;
+    to.yawRateChange[k] = found.wAfter - found.wBefore;
+  }
+}
+
+const directionOf = (x: number, y: number, size: number): number => (size > STANDING ? atan2(y, x) : NaN);

@@ -1,0 +1,38 @@
+import type { Issue } from '@/lib/casefile/issue';
+import type { Problem } from '@/lib/evidence/problem';
+import type { Central } from './central';
+
+/** sin of the angle between the approach paths below which they are exactly parallel to the last digits. */
+const PARALLEL = 1e-9;
+
+/**
+ * Why nothing can be computed from the central values (what models.md section 3 and 4 refuse or call an error), with
+ * the path that it hangs on; null where there is an answer, if perhaps an impossible one that the checks speak of.
+ */
+export function refusalOf(problem: Problem, central: Central): Issue | null {
+  const { reason, failingLeg, state, answer } = central;
+  if (failingLeg) {
+    const { vehicle, leg } = failingLeg;
+    return {
+      path: `departure.${vehicle}.legs.${leg}`,
+      says: `leg ${leg + 1} of vehicle ${vehicle} cannot end as stated: going back from its end the square of the speed falls below zero, so the vehicle would speed up downhill instead of stopping; look at its grade, friction and retardation share`,
+    };
+  }
+  if (problem.method === 'directions' && Math.abs(answer.sinBetween) < PARALLEL)
+    return {
+      path: 'approach.B.direction',
+      says: 'the approach directions are parallel, so momentum alone cannot part the two speeds: use the method restitution',
+    };
+  if (problem.method === 'restitution' && reason === 'restitution')
+    return {
+      path: 'impact.restitution',
+      says: `the restitution ${state.e} is below 0.05: the speed of parting would be multiplied more than 20 times, so no answer is given`,
+    };
+  if (reason === 'notParting')
+    return {
+      path: 'impact.plane',
+      says: 'the vehicles do not part at the contact point after contact, so the restitution cannot tell how fast they closed: look at the travel after contact, the yaw rates, the contact point and the plane',
+    };
+  if (reason === 'notFinite') return { path: 'vehicles', says: 'the figures are too large or too small to compute with' };
+  return null;
+}

@@ -1,0 +1,119 @@
+import type { Problem } from '@/lib/evidence/problem';
+import type { FigureName } from './columns';
+import type { Central } from './central';
+import { BLOCK } from './kernel';
+import type { SobolIndices } from './sobol';
+import { MOST_BATCHES, batchSize, isSettled } from './adaptive';
+import type { DrawsDone, RunTasks, Task, TaskDone } from './task';
+
+/** Draws per task: what one worker does between two looks at the clock. */
+const DRAWS_PER_TASK = 16 * BLOCK;
+/** Draws of each of the two sets that the sensitivity rests on. */
+const SOBOL_BLOCKS = 8;
+const SOBOL_SLOTS_PER_TASK = 4;
+
+export interface Settings {
+  /** A number, or as many as settle the digits that are printed (adaptive.ts). */
+  draws: number | 'auto';
+  coverage: number;
+  /** Figures whose spread is traced back to the inputs; none leaves the sensitivity out. */
+  traced: FigureName[];
+}
+
+/** Everything that the draws and the central values of a problem give, before it is put into words. */
+export interface Solution {
+  problem: Problem;
+  central: Central;
+  draws: number;
+  /** Per figure, the values of the possible draws in order; NaN where the value does not exist. */
+  values: Record<FigureName, Float64Array>;
+  impossible: Record<string, number>;
+  traced: FigureName[];
+  sobol: SobolIndices[];
+}
+
+/** Solves a problem over its draws and, where asked, traces the spread of its figures back to the inputs. */
+export async function solve(
+  problem: Problem,
+  central: Central,
+  settings: Settings,
+  run: RunTasks,
+  onProgress?: (done: number) => void,
+): Promise<Solution> {
+  const sobolShare = settings.traced.length > 0 ? 0.5 : 0;
+  const parts =
+    settings.draws === 'auto'
+      ? await drawUntilSettled(problem, settings.coverage, run)
+      : await runCounted(problem, drawTasks(0, settings.draws), run, (done) => onProgress?.((1 - sobolShare) * done));
+  const traced = await runCounted(problem, sobolTasks(problem, settings.traced), run, (done) =>
+    onProgress?.(1 - sobolShare + sobolShare * done),
+  );
+  const draws = parts.filter((d) => d.kind === 'draws');
+  return {
+    problem,
+    central,
+    draws: draws.reduce((n, part) => n + part.draws, 0),
+    values: joined(draws),
+    impossible: counted(draws),
+    traced: settings.traced,
+    sobol: traced.filter((d) => d.kind === 'sobol').flatMap((d) => d.indices),
+  };
+}
+
+/** Runs tasks and says after each what share of them is done. */
+function runCounted(problem: Problem, tasks: Task[], run: RunTasks, onShare: (done: number) => void): Promise<TaskDone[]> {
+  let finished = 0;
+  return run(problem, tasks, () => onShare(++finished / tasks.length));
+}
+
+/** Batches until the printed digits have settled; the digits do not depend on how the tasks are spread. */
+async function drawUntilSettled(problem: Problem, coverage: number, run: RunTasks): Promise<TaskDone[]> {
+  const size = batchSize(coverage, DRAWS_PER_TASK);
+  let batches: DrawsDone[] = [];
+  for (let wanted = 2; wanted <= MOST_BATCHES; wanted *= 2) {
+    const more = drawTasks(batches.length * size, (wanted - batches.length) * size, size);
+    batches = [...batches, ...(await run(problem, more)).filter((d) => d.kind === 'draws')];
+    if (isSettled(batches, coverage)) break;
+  }
+  return batches;
+}
+
+/** Tasks for `draws` draws from the draw `from` on, a multiple of BLOCK. */
+function drawTasks(from: number, draws: number, perTask = DRAWS_PER_TASK): Task[] {
+  const tasks: Task[] = [];
+  for (let first = 0; first < draws; first += perTask)
+    tasks.push({ kind: 'draws', firstBlock: (from + first) / BLOCK, draws: Math.min(perTask, draws - first) });
+  return tasks;
+}
+
+function sobolTasks(problem: Problem, figures: FigureName[]): Task[] {
+  if (figures.length === 0) return [];
+  const uncertain = problem.inputs.flatMap((input, slot) => (input.spread.shape === 'fixed' ? [] : [slot]));
+  const tasks: Task[] = [];
+  for (let i = 0; i < uncertain.length; i += SOBOL_SLOTS_PER_TASK)
+    tasks.push({ kind: 'sobol', slots: uncertain.slice(i, i + SOBOL_SLOTS_PER_TASK), blocks: SOBOL_BLOCKS, figures });
+  return tasks;
+}
+
+function joined(parts: DrawsDone[]): Solution['values'] {
+  const names = Object.keys(parts[0].values) as FigureName[];
+  return Object.fromEntries(
+    names.map((name) => {
+      const whole = new Float64Array(parts.reduce((n, part) => n + part.values[name].length, 0));
+      let at = 0;
+      for (const part of parts) {
+        whole.set(part.values[name], at);
+        at += part.values[name].length;
+      }
+      return [name, whole];
+    }),
+  ) as Solution['values'];
+}
+
+function counted(parts: DrawsDone[]): Solution['impossible'] {
+  const counts: Record<string, number> = {};
+  for (const part of parts)
+    for (const [reason, count] of Object.entries(part.impossible))
+      counts[reason] = (counts[reason] ?? 0) + count;
+  return counts;
+}

@@ -40,6 +40,8 @@ export interface SessionActions {
   redo(): void;
   select(thing: ThingId | null): void;
   use(tool: ToolId): void;
+  /** Puts another document in place of this one, as one step that can be undone. */
+  replace(label: string, casefile: CaseFile): void;
   /** Opens another document; history starts anew. */
   open(casefile: CaseFile): void;
 }
@@ -117,6 +119,11 @@ export function createSession(casefile: CaseFile) {
         future: rest,
         refused: [],
       }));
+    },
+
+    replace(label, casefile) {
+      get().commit();
+      set((s) => ({ casefile, past: pushed(s.past, { label, casefile: s.casefile }), future: [], refused: [] }));
     },
 
     select: (selection) => set({ selection }),

@@ -1,42 +1,19 @@
-import { cos, sin } from '@/lib/numerics/elementary';
+import { hypot } from '@/lib/numerics/elementary';
+import { type Body, type ContactFrame, closingEnergyOf, cross, emptyFrame, setFrame } from './contact-frame';
+import type { Reason } from './reasons';
 
-/**
- * The planar impact worked backwards (models.md sections 2 and 3; Brach, Mechanical Impact Dynamics, 1991; Brach & Brach,
- * Vehicle Accident Analysis and Reconstruction Methods). SI and radians. Both methods fill a record that the caller
- * owns, so that a million draws allocate nothing.
- */
+export { REASONS, type Reason } from './reasons';
 
-/** Why an impact is impossible, in the order of precedence. */
-export const REASONS = [
-  'notClosing',
-  'notParting',
-  'backwards',
-  'pulling',
-  'restitution',
-  'energyGain',
-  'leg',
-  'noRest',
-  'neverParts',
-  'notFinite',
-] as const;
-export type Reason = (typeof REASONS)[number];
-
-/** What is known of one vehicle. */
-export interface VehicleState {
-  /** kg, kg m^2 */
-  m: number;
-  I: number;
-  /** Mass centre at contact, m. */
-  x: number;
-  y: number;
+/** One vehicle as the impact is worked backwards. SI and radians, world axes. */
+export interface VehicleState extends Body {
   /** Velocity at separation, m/s. */
   vx: number;
   vy: number;
-  /** Yaw rate after contact as measured, rad/s; NaN where it was not. */
-  wMeasured: number;
   /** Yaw rate before contact, rad/s (directions). */
   wBefore: number;
-  /** Unit vector of the direction of approach (directions). */
+  /** Yaw rate at separation as measured, rad/s; NaN where it was not (restitution needs it). */
+  wMeasured: number;
+  /** Unit vector of the approach (directions). */
   hx: number;
   hy: number;
 }
@@ -44,227 +21,230 @@ export interface VehicleState {
 export interface ImpactState {
   A: VehicleState;
   B: VehicleState;
-  /** Common contact point, m. */
+  /** Contact point, m, and direction angle of the contact plane, rad. */
   px: number;
   py: number;
-  /** Direction of the contact plane, rad; a line, so that G and G + pi are the same. */
   plane: number;
   /** Restitution and impulse ratio (restitution). */
   e: number;
   mu: number;
 }
 
-/** What was found of one vehicle. */
+/** What is found for one vehicle. */
 export interface VehicleAnswer {
-  /** Approach velocity, m/s, and its size; signed along the direction of approach for the method directions. */
+  /** Speed of approach, m/s: along the stated direction (directions; below zero is backwards), else the length of the velocity. */
+  speed: number;
   vx: number;
   vy: number;
-  speed: number;
-  /** Yaw rates used before and after contact, and that after contact which the impulse predicts, rad/s. */
+  /** Yaw rate before contact, rad/s. */
   wBefore: number;
+  /** Yaw rate at separation that the answer rests on: as measured, or else as predicted. */
   wAfter: number;
+  /** Yaw rate at separation that the impulse gives, starting from wBefore. */
   wPredicted: number;
 }
 
+/** SI. Velocities are those of the contact point of A relative to that of B; tangential figures are signed along t = perp(n). */
 export interface ImpactAnswer {
   A: VehicleAnswer;
   B: VehicleAnswer;
-  /** Unit normal, from A into B; the tangent is (-ny, nx). */
-  nx: number;
-  ny: number;
-  /** Inverse masses at the contact point, 1/kg. */
-  Knn: number;
-  Ktt: number;
-  Knt: number;
-  /** Impulse on B along normal and tangent, N s. */
+  frame: ContactFrame;
+  /** Impulse on B, N s. */
   Jn: number;
   Jt: number;
-  /** Relative velocity of the contact points, A less B, before and after contact, m/s. */
   un: number;
   ut: number;
   unAfter: number;
   utAfter: number;
   e: number;
   mu: number;
-  /** J . (u + u') / 2, J. */
+  /** J . (u + u') / 2, and the most that the contact could take, J. */
   energyLost: number;
-  /** The most that the contact could take, u . K^-1 . u / 2, J. */
   closingEnergy: number;
-  /** Sine of the angle from the approach direction of A to that of B, and the condition number of [mA hA, mB hB] (directions). */
+  /** Sine of the angle from the approach of A to that of B, and condition number (2-norm) of [mA hA, mB hB] (directions). */
   sinBetween: number;
   condition: number;
 }
 
-const vehicleState = (): VehicleState => ({ m: 0, I: 0, x: 0, y: 0, vx: 0, vy: 0, wMeasured: NaN, wBefore: 0, hx: 1, hy: 0 });
-const vehicleAnswer = (): VehicleAnswer => ({ vx: 0, vy: 0, speed: 0, wBefore: 0, wAfter: 0, wPredicted: 0 });
-
-export const emptyState = (): ImpactState => ({ A: vehicleState(), B: vehicleState(), px: 0, py: 0, plane: 0, e: 0, mu: 0 });
-export const emptyAnswer = (): ImpactAnswer => ({
-  A: vehicleAnswer(),
-  B: vehicleAnswer(),
-  nx: 0, ny: 0, Knn: 0, Ktt: 0, Knt: 0, Jn: 0, Jt: 0, un: 0, ut: 0, unAfter: 0, utAfter: 0,
-  e: 0, mu: 0, energyLost: 0, closingEnergy: 0, sinBetween: 0, condition: 0,
+const emptyVehicleState = (): VehicleState => ({
+  m: 1,
+  I: 1,
+  x: 0,
+  y: 0,
+  vx: 0,
+  vy: 0,
+  wBefore: 0,
+  wMeasured: NaN,
+  hx: 1,
+  hy: 0,
 });
 
-/** Slack against rounding, relative. */
-const SLACK = 1e-9;
+/** A state to be filled in, used again for every draw. */
+export const emptyState = (): ImpactState => ({
+  A: emptyVehicleState(),
+  B: emptyVehicleState(),
+  px: 0,
+  py: 0,
+  plane: 0,
+  e: NaN,
+  mu: NaN,
+});
 
-/** Normal, tangent and the inverse masses at the contact point. */
-function contactFrame(s: ImpactState, out: ImpactAnswer): void {
-  const { A, B } = s;
-  let nx = sin(s.plane);
-  let ny = -cos(s.plane);
-  if (nx * (B.x - A.x) + ny * (B.y - A.y) < 0) {
-    nx = -nx;
-    ny = -ny;
-  }
-  const ax = s.px - A.x;
-  const ay = s.py - A.y;
-  const bx = s.px - B.x;
-  const by = s.py - B.y;
-  // a_i = cross(d_i, n), b_i = cross(d_i, t) with t = (-ny, nx)
-  const aA = ax * ny - ay * nx;
-  const bA = ax * nx + ay * ny;
-  const aB = bx * ny - by * nx;
-  const bB = bx * nx + by * ny;
-  const inverse = 1 / A.m + 1 / B.m;
-  out.nx = nx;
-  out.ny = ny;
-  out.Knn = inverse + (aA * aA) / A.I + (aB * aB) / B.I;
-  out.Ktt = inverse + (bA * bA) / A.I + (bB * bB) / B.I;
-  out.Knt = (aA * bA) / A.I + (aB * bB) / B.I;
-}
+const emptyVehicleAnswer = (): VehicleAnswer => ({ speed: 0, vx: 0, vy: 0, wBefore: 0, wAfter: 0, wPredicted: 0 });
 
-/** Relative velocity of the contact points, A less B, along the normal: before contact. */
-const relativeX = (s: ImpactState, avx: number, aw: number, bvx: number, bw: number): number =>
-  avx - aw * (s.py - s.A.y) - (bvx - bw * (s.py - s.B.y));
-const relativeY = (s: ImpactState, avy: number, aw: number, bvy: number, bw: number): number =>
-  avy + aw * (s.px - s.A.x) - (bvy + bw * (s.px - s.B.x));
+/** An answer to be filled in, used again for every draw. */
+export const emptyAnswer = (): ImpactAnswer => ({
+  A: emptyVehicleAnswer(),
+  B: emptyVehicleAnswer(),
+  frame: emptyFrame(),
+  Jn: 0,
+  Jt: 0,
+  un: 0,
+  ut: 0,
+  unAfter: 0,
+  utAfter: 0,
+  e: 0,
+  mu: 0,
+  energyLost: 0,
+  closingEnergy: 0,
+  sinBetween: NaN,
+  condition: NaN,
+});
 
-function setBefore(s: ImpactState, out: ImpactAnswer): void {
-  const { A, B, nx, ny } = out;
-  const ux = relativeX(s, A.vx, A.wBefore, B.vx, B.wBefore);
-  const uy = relativeY(s, A.vy, A.wBefore, B.vy, B.wBefore);
-  out.un = ux * nx + uy * ny;
-  out.ut = -ux * ny + uy * nx;
-}
+/** Allowed against rounding: of the restitution, and relative to speeds and energies. */
+const TINY = 1e-9;
 
-function setAfter(s: ImpactState, out: ImpactAnswer): void {
-  const { A, B, nx, ny } = out;
-  const ux = relativeX(s, s.A.vx, A.wAfter, s.B.vx, B.wAfter);
-  const uy = relativeY(s, s.A.vy, A.wAfter, s.B.vy, B.wAfter);
-  out.unAfter = ux * nx + uy * ny;
-  out.utAfter = -ux * ny + uy * nx;
-}
-
-/** Energy lost and the most that could be; both from the relative velocities and the impulse. */
-function setEnergy(out: ImpactAnswer): void {
-  const { Knn, Ktt, Knt, un, ut } = out;
-  out.energyLost = (out.Jn * (un + out.unAfter) + out.Jt * (ut + out.utAfter)) / 2;
-  out.closingEnergy = (Ktt * un * un - 2 * Knt * un * ut + Knn * ut * ut) / (2 * (Knn * Ktt - Knt * Knt));
-}
-
-/** Yaw-rate change, rad/s, that the impulse gives a body: cross(d, J) / I. */
-const yawChange = (s: ImpactState, v: VehicleState, jx: number, jy: number): number =>
-  ((s.px - v.x) * jy - (s.py - v.y) * jx) / v.I;
-
-const isFiniteAnswer = (out: ImpactAnswer): boolean =>
-  Number.isFinite(out.Jn + out.Jt + out.energyLost + out.closingEnergy + out.A.speed + out.B.speed + out.A.wAfter + out.B.wAfter);
-
-/**
- * Method `directions`: both approach directions known, crossing paths. Translation alone fixes the approach speeds and
- * the impulse (mA sA hA + mB sB hB = mA vA' + mB vB'); measured yaw rates enter restitution and energy only.
- * Returns why the impact is impossible, or null; the figures are filled in where they exist either way.
- */
-export function solveDirections(s: ImpactState, out: ImpactAnswer): Reason | null {
-  const { A, B } = s;
-  contactFrame(s, out);
-  const sine = A.hx * B.hy - A.hy * B.hx;
-  const qx = A.m * A.vx + B.m * B.vx;
-  const qy = A.m * A.vy + B.m * B.vy;
-  const sA = (qx * B.hy - qy * B.hx) / (A.m * sine);
-  const sB = (A.hx * qy - A.hy * qx) / (B.m * sine);
-  out.sinBetween = sine;
-  out.condition = conditionOf(A.m, B.m, sine);
-  setApproach(out.A, sA, A.hx, A.hy, A.wBefore);
-  setApproach(out.B, sB, B.hx, B.hy, B.wBefore);
-  const jx = B.m * (B.vx - out.B.vx);
-  const jy = B.m * (B.vy - out.B.vy);
-  out.Jn = jx * out.nx + jy * out.ny;
-  out.Jt = -jx * out.ny + jy * out.nx;
-  out.mu = out.Jt / out.Jn;
-  out.A.wPredicted = A.wBefore - yawChange(s, A, jx, jy);
-  out.B.wPredicted = B.wBefore + yawChange(s, B, jx, jy);
-  out.A.wAfter = Number.isNaN(A.wMeasured) ? out.A.wPredicted : A.wMeasured;
-  out.B.wAfter = Number.isNaN(B.wMeasured) ? out.B.wPredicted : B.wMeasured;
-  setBefore(s, out);
-  setAfter(s, out);
-  out.e = -out.unAfter / out.un;
-  setEnergy(out);
-  return directionsReason(s, out);
-}
-
-function directionsReason(s: ImpactState, out: ImpactAnswer): Reason | null {
-  if (!isFiniteAnswer(out)) return 'notFinite';
-  const scale = SLACK * (Math.abs(s.A.vx) + Math.abs(s.A.vy) + Math.abs(s.B.vx) + Math.abs(s.B.vy));
-  if (out.un <= 0) return 'notClosing';
-  if (out.A.speed < -scale || out.B.speed < -scale) return 'backwards';
-  if (out.Jn <= 0) return 'pulling';
-  if (out.e < -SLACK || out.e > 1 + SLACK) return 'restitution';
-  return out.energyLost < -SLACK * out.closingEnergy ? 'energyGain' : null;
-}
-
-function setApproach(to: VehicleAnswer, speed: number, hx: number, hy: number, w: number): void {
-  to.speed = speed;
-  to.vx = speed * hx;
-  to.vy = speed * hy;
-  to.wBefore = w;
-}
-
-/** 2-norm condition number of [mA hA, mB hB]: the larger singular value squared over the determinant. */
-function conditionOf(mA: number, mB: number, sine: number): number {
-  const trace = mA * mA + mB * mB;
-  const determinant = mA * mB * Math.abs(sine);
-  const root = Math.sqrt(Math.max(0, trace * trace - 4 * determinant * determinant));
-  return (trace + root) / (2 * determinant);
-}
-
-/** Below this 1/e would multiply the speed of parting more than 20 times. */
+/** Below this restitution the division by it is refused. */
 export const LEAST_RESTITUTION = 0.05;
 
 /**
- * Method `restitution`: restitution and impulse ratio known, yaw rates after contact measured; directions, speeds and
- * yaw rates before contact are results. Needs parting at the contact point. Returns as solveDirections does.
+ * Method directions: momentum along both approach directions gives both speeds and the impulse,
+ * mA sA hA + mB sB hB = mA vA' + mB vB', J = mB (vB' - sB hB); restitution and impulse ratio follow at the contact point.
+ * Fills `out` with all that exists and returns why the answer is impossible, or null.
+ */
+export function solveDirections(s: ImpactState, out: ImpactAnswer): Reason | null {
+  const { A, B } = s;
+  setFrame(s, out.frame);
+  setApproach(s, out);
+  const Jx = B.m * (B.vx - out.B.vx);
+  const Jy = B.m * (B.vy - out.B.vy);
+  const { nx, ny, dAx, dAy, dBx, dBy } = out.frame;
+  out.Jn = Jx * nx + Jy * ny;
+  out.Jt = Jy * nx - Jx * ny;
+  out.A.wBefore = A.wBefore;
+  out.B.wBefore = B.wBefore;
+  out.A.wPredicted = A.wBefore - cross(dAx, dAy, Jx, Jy) / A.I;
+  out.B.wPredicted = B.wBefore + cross(dBx, dBy, Jx, Jy) / B.I;
+  out.A.wAfter = Number.isNaN(A.wMeasured) ? out.A.wPredicted : A.wMeasured;
+  out.B.wAfter = Number.isNaN(B.wMeasured) ? out.B.wPredicted : B.wMeasured;
+  setClosing(out);
+  setParting(s, out);
+  out.e = -out.unAfter / out.un;
+  out.mu = out.Jt / out.Jn;
+  setEnergy(out);
+  return reasonAgainstDirections(s, out);
+}
+
+/** Approach speeds and velocities from momentum, with the figures that say how well it fixes them. */
+function setApproach({ A, B }: ImpactState, out: ImpactAnswer): void {
+  const Px = A.m * A.vx + B.m * B.vx;
+  const Py = A.m * A.vy + B.m * B.vy;
+  const between = cross(A.hx, A.hy, B.hx, B.hy);
+  out.A.speed = cross(Px, Py, B.hx, B.hy) / (A.m * between);
+  out.B.speed = cross(A.hx, A.hy, Px, Py) / (B.m * between);
+  out.A.vx = out.A.speed * A.hx;
+  out.A.vy = out.A.speed * A.hy;
+  out.B.vx = out.B.speed * B.hx;
+  out.B.vy = out.B.speed * B.hy;
+  const squares = A.m * A.m + B.m * B.m;
+  const determinant = A.m * B.m * Math.abs(between);
+  out.sinBetween = between;
+  out.condition =
+    (squares + Math.sqrt(Math.max(0, squares * squares - 4 * determinant * determinant))) / (2 * determinant);
+}
+
+/** Relative velocity of the contact points before contact. */
+function setClosing(out: ImpactAnswer): void {
+  const { A, B, frame } = out;
+  const ux = A.vx - A.wBefore * frame.dAy - (B.vx - B.wBefore * frame.dBy);
+  const uy = A.vy + A.wBefore * frame.dAx - (B.vy + B.wBefore * frame.dBx);
+  out.un = ux * frame.nx + uy * frame.ny;
+  out.ut = uy * frame.nx - ux * frame.ny;
+}
+
+/** Relative velocity of the contact points at separation. */
+function setParting({ A, B }: ImpactState, out: ImpactAnswer): void {
+  const { frame } = out;
+  const ux = A.vx - out.A.wAfter * frame.dAy - (B.vx - out.B.wAfter * frame.dBy);
+  const uy = A.vy + out.A.wAfter * frame.dAx - (B.vy + out.B.wAfter * frame.dBx);
+  out.unAfter = ux * frame.nx + uy * frame.ny;
+  out.utAfter = uy * frame.nx - ux * frame.ny;
+}
+
+function setEnergy(out: ImpactAnswer): void {
+  out.energyLost = (out.Jn * (out.un + out.unAfter) + out.Jt * (out.ut + out.utAfter)) / 2;
+  out.closingEnergy = closingEnergyOf(out.frame, out.un, out.ut);
+}
+
+function reasonAgainstDirections({ A, B }: ImpactState, out: ImpactAnswer): Reason | null {
+  const standing = -TINY * (hypot(A.vx, A.vy) + hypot(B.vx, B.vy));
+  if (out.un <= 0) return 'notClosing';
+  if (out.A.speed < standing || out.B.speed < standing) return 'backwards';
+  if (out.Jn <= 0) return 'pulling';
+  if (out.e < -TINY || out.e > 1 + TINY) return 'restitution';
+  return reasonAgainstEnergy(out);
+}
+
+function reasonAgainstEnergy(out: ImpactAnswer): Reason | null {
+  if (out.energyLost < -TINY * out.closingEnergy) return 'energyGain';
+  const all = out.un + out.ut + out.Jn + out.Jt + out.energyLost + out.closingEnergy + out.A.speed + out.B.speed;
+  return Number.isFinite(all) ? null : 'notFinite';
+}
+
+/**
+ * Method restitution: with restitution e and impulse ratio mu known, un = -un'/e and Jn = (un - un')/(Knn + mu Knt); both
+ * approach velocities and yaw rates follow from the impulse. Fills `out` with all that exists (NaN else) and returns why
+ * the answer is impossible, or null. Below e = 0.05 the reason is `restitution`.
  */
 export function solveRestitution(s: ImpactState, out: ImpactAnswer): Reason | null {
   const { A, B, e, mu } = s;
-  contactFrame(s, out);
-  const { nx, ny } = out;
+  const { frame } = out;
+  setFrame(s, frame);
   out.A.wAfter = A.wMeasured;
   out.B.wAfter = B.wMeasured;
-  setAfter(s, out);
-  out.Jn = (-out.unAfter / e - out.unAfter) / (out.Knn + mu * out.Knt);
-  out.Jt = mu * out.Jn;
-  const jx = out.Jn * nx - out.Jt * ny;
-  const jy = out.Jn * ny + out.Jt * nx;
-  setVelocity(out.A, A.vx + jx / A.m, A.vy + jy / A.m, A.wMeasured + yawChange(s, A, jx, jy));
-  setVelocity(out.B, B.vx - jx / B.m, B.vy - jy / B.m, B.wMeasured - yawChange(s, B, jx, jy));
-  out.A.wPredicted = A.wMeasured;
-  out.B.wPredicted = B.wMeasured;
-  setBefore(s, out);
+  setParting(s, out);
+  const parts = out.unAfter < 0;
+  const un = parts && e > 0 ? -out.unAfter / e : NaN;
   out.e = e;
   out.mu = mu;
+  out.Jn = (un - out.unAfter) / (frame.Knn + mu * frame.Knt);
+  out.Jt = mu * out.Jn;
+  takeBack(s, out);
+  setClosing(out);
   setEnergy(out);
-  if (!isFiniteAnswer(out)) return 'notFinite';
-  if (out.unAfter >= 0) return 'notParting';
-  if (out.Jn <= 0) return 'pulling';
-  if (e < LEAST_RESTITUTION - 1e-12) return 'restitution';
-  return out.energyLost < -SLACK * out.closingEnergy ? 'energyGain' : null;
+  return out.unAfter >= 0 ? 'notParting' : reasonAgainstRestitution(e, out);
 }
 
-function setVelocity(to: VehicleAnswer, vx: number, vy: number, w: number): void {
-  to.vx = vx;
-  to.vy = vy;
-  to.speed = Math.sqrt(vx * vx + vy * vy);
-  to.wBefore = w;
+/** Takes the impulse back from both vehicles. */
+function takeBack({ A, B }: ImpactState, out: ImpactAnswer): void {
+  const { nx, ny, dAx, dAy, dBx, dBy } = out.frame;
+  const Jx = out.Jn * nx - out.Jt * ny;
+  const Jy = out.Jn * ny + out.Jt * nx;
+  out.A.vx = A.vx + Jx / A.m;
+  out.A.vy = A.vy + Jy / A.m;
+  out.B.vx = B.vx - Jx / B.m;
+  out.B.vy = B.vy - Jy / B.m;
+  out.A.wBefore = out.A.wAfter + cross(dAx, dAy, Jx, Jy) / A.I;
+  out.B.wBefore = out.B.wAfter - cross(dBx, dBy, Jx, Jy) / B.I;
+  out.A.wPredicted = out.A.wAfter;
+  out.B.wPredicted = out.B.wAfter;
+  out.A.speed = hypot(out.A.vx, out.A.vy);
+  out.B.speed = hypot(out.B.vx, out.B.vy);
+}
+
+function reasonAgainstRestitution(e: number, out: ImpactAnswer): Reason | null {
+  if (out.un <= 0) return 'notClosing';
+  if (out.Jn <= 0) return 'pulling';
+  if (e < LEAST_RESTITUTION - 1e-12 || e > 1 + TINY) return 'restitution';
+  return reasonAgainstEnergy(out);
 }

@@ -1,12 +1,16 @@
-/** Standard gravity, m/s^2 (exact, NIST SP 811). */
+/** Standard gravity, m/s^2 (exact by definition: NIST SP 811, appendix B.8). */
 export const G = 9.80665;
 
 /**
- * Square of the speed (m^2/s^2) at the start of one leg of travel, from that at its end: distance d (m, along the
- * slope), friction f, retardation share q, grade (rise over run along the travel, uphill positive). Work and energy:
- * v^2 = vEnd^2 + 2 g d (f q cos th + sin th), th = atan(grade). Negative where the leg cannot end as stated.
+ * Square of the speed at the start of a leg of travel, m^2/s^2, from that at its end. `distance` m along the slope,
+ * `friction` of the surface, `share` of it that slows (1: all wheels locked or sliding sideways), `grade` rise over run,
+ * positive uphill. Below zero where the vehicle cannot have come to that end: it would have sped up on the way.
+ * v^2 = vEnd^2 + 2 g d (f q cos th + sin th) with tan th = grade (work and energy).
  */
-export function legStartSpeedSquared(vEndSquared: number, d: number, f: number, q: number, grade: number): number {
-  const slope = Math.sqrt(1 + grade * grade);
-  return vEndSquared + (2 * G * d * (f * q + grade)) / slope;
-}
+export const legStartSpeedSquared = (
+  endSpeedSquared: number,
+  distance: number,
+  friction: number,
+  share: number,
+  grade: number,
+): number => endSpeedSquared + (2 * G * distance * (friction * share + grade)) / Math.sqrt(1 + grade * grade);

@@ -1,5 +1,5 @@
-/** Mean acceleration, m/s^2, of a change of velocity (m/s) over a contact of a duration (s). */
+/** Mean acceleration over the contact, m/s^2: speed change (m/s) over the duration of the contact (s). */
 export const meanAcceleration = (deltaV: number, duration: number): number => deltaV / duration;
 
-/** Peak of a haversine pulse with the given mean: twice the mean, in the same unit (closed form). */
+/** Peak of a haversine pulse, a(t) = peak sin^2(pi t / T): twice its mean (closed form). */
 export const peakAcceleration = (mean: number): number => 2 * mean;

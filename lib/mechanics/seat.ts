@@ -1,6 +1,6 @@
 /**
- * Delta-V at a point of a rigid vehicle, m/s in vehicle axes (x forward, y left): that of the mass centre plus the
- * change of yaw rate (rad/s) times the lever arm (m). Rigid-vehicle kinematics, not the motion of an occupant.
+ * Speed change at a point of a rigid vehicle: that of the mass centre plus the change of the yaw rate times the lever arm.
+ * `forward`, `left` m/s and `seat` m in vehicle axes (x forward, y left, ISO 8855) from the mass centre; `yawRateChange` rad/s.
  */
 export const seatDeltaV = (
   forward: number,

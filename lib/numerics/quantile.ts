@@ -1,60 +1,50 @@
-/** Mean, standard deviation, median and coverage intervals of a sample (JCGM 101:2008, 7.6 and 7.7). */
+/** What is said of the distribution of a result. */
 export interface Summary {
   mean: number;
-  /** With n - 1; 0 for a sample of one. */
   sd: number;
   median: number;
-  /** Ends of the probabilistically symmetric coverage interval. */
+  /** Ends of the probabilistically symmetric interval. */
   low: number;
   high: number;
-  /** Ends of the shortest coverage interval. */
+  /** Ends of the shortest interval. */
   shortest: [number, number];
 }
 
-/** Mean and standard deviation (n - 1) in two passes, shifted by the first value. */
-export function meanAndSd(values: Float64Array): { mean: number; sd: number } {
-  const n = values.length;
-  const shift = values[0];
-  let sum = 0;
-  for (let i = 0; i < n; i++) sum += values[i] - shift;
-  const offset = sum / n;
-  let squares = 0;
-  for (let i = 0; i < n; i++) {
-    const d = values[i] - shift - offset;
-    squares += d * d;
-  }
-  return { mean: shift + offset, sd: n > 1 ? Math.sqrt(squares / (n - 1)) : 0 };
-}
-
-/** Summary of a sample of at least one; reorders it. */
+/**
+ * Summary of n >= 1 finite values, which may be reordered. With y(1) <= ... <= y(n) (JCGM 101:2008, 7.6 and 7.7.2):
+ * q = n p rounded to the nearest integer; the symmetric interval is y(r) .. y(r + q) with r = (n - q)/2, rounded up
+ * where it is not an integer; the shortest is y(r) .. y(r + q) with the least length over r = 1 .. n - q, the first of equals.
+ * Where few values leave no such r, the interval runs from the least to the greatest. The median is the middle value, or
+ * half way between the middle two. The standard deviation has n - 1 below the line; of one value it is 0.
+ */
 export function summarise(values: Float64Array, coverage: number): Summary {
   const { mean, sd } = meanAndSd(values);
   values.sort();
-  const tail = (1 - coverage) / 2;
-  return {
-    mean,
-    sd,
-    median: quantile(values, 0.5),
-    low: quantile(values, tail),
-    high: quantile(values, 1 - tail),
-    shortest: shortestInterval(values, coverage),
-  };
+  const n = values.length;
+  const q = Math.min(n - 1, Math.floor(coverage * n + 0.5));
+  const r = Math.max(1, Math.ceil((n - q) / 2));
+  const median = (values[(n - 1) >> 1] + values[n >> 1]) / 2;
+  return { mean, sd, median, low: values[r - 1], high: values[r - 1 + q], shortest: shortestOf(values, q) };
 }
 
-/** Quantile of a sorted sample, linear between the order statistics k = 1..n taken at (k - 1/2)/n (JCGM 101, D.2 c). */
-function quantile(sorted: Float64Array, p: number): number {
-  const n = sorted.length;
-  const at = Math.min(n - 1, Math.max(0, p * n - 0.5));
-  const k = Math.floor(at);
-  return k + 1 < n ? sorted[k] + (at - k) * (sorted[k + 1] - sorted[k]) : sorted[k];
-}
-
-/** The shortest of the intervals that hold the coverage (JCGM 101, 7.7.4): q = integer part of p n + 1/2 steps apart. */
-function shortestInterval(sorted: Float64Array, coverage: number): [number, number] {
-  const n = sorted.length;
-  const steps = Math.min(n - 1, Math.floor(coverage * n + 0.5));
+function shortestOf(sorted: Float64Array, q: number): [number, number] {
   let best = 0;
-  for (let i = 1; i + steps < n; i++)
-    if (sorted[i + steps] - sorted[i] < sorted[best + steps] - sorted[best]) best = i;
-  return [sorted[best], sorted[best + steps]];
+  for (let r = 1; r + q < sorted.length; r++) if (sorted[r + q] - sorted[r] < sorted[best + q] - sorted[best]) best = r;
+  return [sorted[best], sorted[best + q]];
+}
+
+/** Mean and standard deviation (n - 1) in two passes, the rounding of the first corrected by the second. */
+export function meanAndSd(values: Float64Array): { mean: number; sd: number } {
+  const n = values.length;
+  let sum = 0;
+  for (let i = 0; i < n; i++) sum += values[i];
+  const about = sum / n;
+  let first = 0;
+  let second = 0;
+  for (let i = 0; i < n; i++) {
+    const off = values[i] - about;
+    first += off;
+    second += off * off;
+  }
+  return { mean: about + first / n, sd: n > 1 ? Math.sqrt(Math.max(0, second - (first * first) / n) / (n - 1)) : 0 };
 }

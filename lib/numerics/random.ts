@@ -1,58 +1,67 @@
 /**
- * xoshiro128++ (Blackman & Vigna, 2019), seeded afresh for every (seed, stream, block): the same numbers on any number
- * of workers, and adding a stream does not move the others.
+ * Random numbers: xoshiro128++ (Blackman & Vigna 2021, «Scrambled linear pseudorandom number generators», ACM TOMS 47-4),
+ * seeded afresh for every (seed, stream, block). So draw k of a stream depends on nothing else: not on the other streams,
+ * nor on how many workers share the blocks.
  */
-export class Random {
-  private s0 = 0;
-  private s1 = 0;
-  private s2 = 0;
-  private s3 = 0;
 
-  /** `seed`: 0 .. 2^53 - 1; `stream`: a hash of what is drawn (streamOf); `block`: 0 .. 2^32 - 1. */
-  constructor(seed: number, stream: number, block: number) {
-    let state = mix(seed >>> 0);
-    const next = (word: number): number => (state = mix((state + 0x9e3779b9) ^ mix(word)));
-    next(Math.floor(seed / 4294967296));
-    next(stream);
-    next(block);
-    this.s0 = next(1);
-    this.s1 = next(2);
-    this.s2 = next(3);
-    this.s3 = next(4) | 1; // never all zero
-  }
+/** The four words of a generator's state. */
+export type RandomState = Int32Array;
 
-  /** 32 bits, 0 .. 2^32 - 1. */
-  bits(): number {
-    const sum = (this.s0 + this.s3) | 0;
-    const result = (((sum << 7) | (sum >>> 25)) + this.s0) >>> 0;
-    const t = this.s1 << 9;
-    this.s2 ^= this.s0;
-    this.s3 ^= this.s1;
-    this.s1 ^= this.s2;
-    this.s0 ^= this.s3;
-    this.s2 ^= t;
-    this.s3 = (this.s3 << 11) | (this.s3 >>> 21);
-    return result;
-  }
+const rotateLeft = (x: number, by: number): number => (x << by) | (x >>> (32 - by));
 
-  /** Uniform in the open interval (0, 1), 53 bits. */
-  uniform(): number {
-    const high = this.bits() >>> 5;
-    const low = this.bits() >>> 6;
-    return (high * 67108864 + low + 0.5) / 9007199254740992;
-  }
+/** The next 32 bits, 0 .. 2^32 - 1. */
+export function nextUint32(state: RandomState): number {
+  const [s0, s1, s3] = [state[0], state[1], state[3]];
+  const result = (rotateLeft((s0 + s3) | 0, 7) + s0) >>> 0;
+  const s2 = state[2] ^ s0;
+  const mixed = s3 ^ s1;
+  state[1] = s1 ^ s2;
+  state[0] = s0 ^ mixed;
+  state[2] = s2 ^ (s1 << 9);
+  state[3] = rotateLeft(mixed, 11);
+  return result;
 }
 
-/** Finalizer of MurmurHash3 (Appleby): spreads 32 bits. */
-function mix(h: number): number {
-  h = Math.imul(h ^ (h >>> 16), 0x85ebca6b);
-  h = Math.imul(h ^ (h >>> 13), 0xc2b2ae35);
-  return (h ^ (h >>> 16)) >>> 0;
+/** Uniform in the open interval (0, 1): an odd multiple of 2^-53, so neither 0 nor 1 nor anything that rounds to them. */
+export function nextUniform(state: RandomState): number {
+  const high = nextUint32(state) >>> 6;
+  const low = nextUint32(state) >>> 6;
+  return (high * 67108864 + low + 0.5) * 2.220446049250313e-16;
 }
 
-/** FNV-1a hash of a name, 32 bits: the number of its stream. */
-export function streamOf(name: string): number {
-  let hash = 0x811c9dc5;
-  for (let i = 0; i < name.length; i++) hash = Math.imul(hash ^ name.charCodeAt(i), 0x01000193);
-  return hash >>> 0;
+/** One round of HalfSipHash (Aumasson & Bernstein, reference implementation). */
+function stir(v: RandomState): void {
+  v[0] += v[1];
+  v[1] = rotateLeft(v[1], 5) ^ v[0];
+  v[0] = rotateLeft(v[0], 16);
+  v[2] += v[3];
+  v[3] = rotateLeft(v[3], 8) ^ v[2];
+  v[0] += v[3];
+  v[3] = rotateLeft(v[3], 7) ^ v[0];
+  v[2] += v[1];
+  v[1] = rotateLeft(v[1], 13) ^ v[2];
+  v[2] = rotateLeft(v[2], 16);
+}
+
+function absorb(v: RandomState, word: number): void {
+  v[3] ^= word;
+  stir(v);
+  stir(v);
+  v[0] ^= word;
+}
+
+/**
+ * The state at the start of a block. `seed` 0 .. 2^53 - 1, `stream` any string, `block` 0 .. 2^32 - 1: the seed is the key of
+ * HalfSipHash-2-4, block and characters are the message, and the whole inner state is kept.
+ */
+export function seededState(seed: number, stream: string, block: number): RandomState {
+  const low = seed | 0;
+  const high = Math.floor(seed / 4294967296) | 0;
+  const v: RandomState = Int32Array.of(low, high, 0x6c796765 ^ low, 0x74656462 ^ high);
+  absorb(v, block);
+  for (let i = 0; i < stream.length; i++) absorb(v, stream.charCodeAt(i));
+  v[2] ^= 0xff;
+  for (let round = 0; round < 4; round++) stir(v);
+  if ((v[0] | v[1] | v[2] | v[3]) === 0) v[0] = 1; // the one state that the generator never leaves
+  return v;
 }

@@ -1,80 +1,89 @@
-import { normalCdf, normalQuantile } from './normal';
-import { Random, streamOf } from './random';
+import { normalCumulative, normalQuantile } from './normal';
+import { nextUniform, seededState } from './random';
 
-/** The four distributions of an input (JCGM 101:2008, 6.4), in the unit of its value. A triangular mode is the value. */
+/** How an input varies (JCGM 101:2008 clause 6.4), in the units of its value. A triangular spread has its mode at the value. */
 export type DrawSpread =
   | { shape: 'fixed' }
   | { shape: 'normal'; sd: number }
   | { shape: 'rectangular'; low: number; high: number }
   | { shape: 'triangular'; low: number; high: number };
 
-/** Where a drawn value must lie. */
+/** Where physics allows the input to lie; the value does. */
 export interface DrawSupport {
   low: number;
   high: number;
-  /** Whether the lower bound itself is excluded. */
+  /** Whether `low` itself is excluded. */
   lowOpen: boolean;
 }
 
-export interface DrawQuantity {
+interface Drawn {
   value: number;
   spread: DrawSpread;
   support: DrawSupport;
 }
 
 /**
- * Fills the first `count` places of `out` with draws of block number `block`. Draw k of a stream depends on (seed,
- * stream, block, place) alone. Normal spreads are truncated to the support by inverting within it.
+ * Fills out[0 .. count - 1] with the draws of one block of an input. Draw k depends on (seed, stream, block, k) alone: one
+ * uniform number is used for each, put through the inverse distribution, so a changed spread moves the draws without
+ * shuffling them. A normal spread is cut to its support exactly, as redrawing would.
  */
 export function fillBlock(
   out: Float64Array,
   count: number,
-  { value, spread, support }: DrawQuantity,
+  drawn: Drawn,
   seed: number,
   stream: string,
   block: number,
 ): void {
-  const random = new Random(seed, streamOf(stream), block);
-  if (spread.shape === 'fixed') out.fill(value, 0, count);
-  else if (spread.shape === 'rectangular') {
-    const width = spread.high - spread.low;
-    for (let k = 0; k < count; k++) out[k] = spread.low + width * random.uniform();
-  } else if (spread.shape === 'triangular') fillTriangular(out, count, value, spread.low, spread.high, random);
-  else fillNormal(out, count, value, spread.sd, support, random);
-}
-
-function fillTriangular(out: Float64Array, count: number, mode: number, low: number, high: number, random: Random): void {
-  const width = high - low;
-  const split = (mode - low) / width;
-  for (let k = 0; k < count; k++) {
-    const p = random.uniform();
-    out[k] =
-      p < split ? low + Math.sqrt(p * width * (mode - low)) : high - Math.sqrt((1 - p) * width * (high - mode));
-  }
-}
-
-/** Further than this from a bound, in standard uncertainties, no draw of 53 bits reaches it. */
-const FAR = 9;
-
-function fillNormal(out: Float64Array, count: number, mean: number, sd: number, support: DrawSupport, random: Random): void {
-  const from = (support.low - mean) / sd;
-  const to = (support.high - mean) / sd;
-  if (from < -FAR && to > FAR) {
-    for (let k = 0; k < count; k++) out[k] = mean + sd * normalQuantile(random.uniform());
+  const { value, spread } = drawn;
+  if (spread.shape === 'fixed') {
+    out.fill(value, 0, count);
     return;
   }
-  // Inverting within the bounds is what redrawing until inside would give. From above 0 the upper tail keeps its digits.
-  const mirrored = from > 0;
-  const [a, b] = mirrored ? [-to, -from] : [from, to];
-  const [lowest, highest] = [normalCdf(a), normalCdf(b)];
+  const state = seededState(seed, stream, block);
+  for (let k = 0; k < count; k++) out[k] = nextUniform(state);
+  if (spread.shape === 'normal') toNormal(out, count, value, spread.sd, drawn.support);
+  else if (spread.shape === 'rectangular') toRectangular(out, count, spread.low, spread.high);
+  else toTriangular(out, count, value, spread.low, spread.high);
+}
+
+/** A support narrower than this many standard deviations about the value sees a flat density, to 1e-12. */
+const FLAT = 1e-6;
+
+function toNormal(
+  out: Float64Array,
+  count: number,
+  value: number,
+  sd: number,
+  { low, high, lowOpen }: DrawSupport,
+): void {
+  if (high - low < FLAT * sd) {
+    toRectangular(out, count, low, high);
+    return;
+  }
+  const below = normalCumulative((low - value) / sd);
+  const share = normalCumulative((high - value) / sd) - below;
+  const least = lowOpen ? low + Number.MIN_VALUE : low; // rounding may reach the edge itself
   for (let k = 0; k < count; k++) {
-    const z = normalQuantile(lowest + (highest - lowest) * random.uniform());
-    const x = mean + sd * (mirrored ? -z : z);
-    out[k] = Math.min(support.high, Math.max(x, support.lowOpen ? Math.max(support.low, Number.MIN_VALUE) : support.low));
+    const x = value + sd * normalQuantile(below + share * out[k]);
+    out[k] = x < least ? least : x > high ? high : x;
   }
 }
 
-/** Standard uncertainty that a spread states (JCGM 100, 4.3), before any truncation. */
+function toRectangular(out: Float64Array, count: number, low: number, high: number): void {
+  for (let k = 0; k < count; k++) out[k] = low + (high - low) * out[k];
+}
+
+function toTriangular(out: Float64Array, count: number, mode: number, low: number, high: number): void {
+  const width = high - low;
+  const rising = (mode - low) / width;
+  for (let k = 0; k < count; k++) {
+    const u = out[k];
+    out[k] = u < rising ? low + Math.sqrt(u * width * (mode - low)) : high - Math.sqrt((1 - u) * width * (high - mode));
+  }
+}
+
+/** Standard uncertainty of a spread about its value, before any cut to the support (JCGM 100:2008, 4.3.7 and 4.3.9). */
 export function standardUncertainty(value: number, spread: DrawSpread): number {
   if (spread.shape === 'fixed') return 0;
   if (spread.shape === 'normal') return spread.sd;

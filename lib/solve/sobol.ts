@@ -22,6 +22,7 @@ const SET_B = ' (set B)';
  */
 export function sobolIndices(problem: Problem, slots: readonly number[], blocks: number, figures: FigureName[]): SobolIndices[] {
   const [a, b, ab] = [new Kernel(problem), new Kernel(problem), new Kernel(problem)];
+  a.inputs.forEach((column, slot) => (ab.inputs[slot] = column));
   const sums = slots.map(() => figures.map(() => new Sums()));
   for (let block = 0; block < blocks; block++) {
     a.draw(block, BLOCK, SET_A);
@@ -29,8 +30,9 @@ export function sobolIndices(problem: Problem, slots: readonly number[], blocks:
     a.solve(BLOCK);
     b.solve(BLOCK);
     slots.forEach((slot, s) => {
-      ab.inputs.forEach((column, i) => column.set(i === slot ? b.inputs[i] : a.inputs[i]));
+      ab.inputs[slot] = b.inputs[slot];
       ab.solve(BLOCK);
+      ab.inputs[slot] = a.inputs[slot];
       figures.forEach((name, f) => addRows(sums[s][f], rowsOf(a, name), rowsOf(b, name), rowsOf(ab, name)));
     });
   }

@@ -30,6 +30,17 @@ export interface LegsSlots {
   legs: LegSlots[];
 }
 
+/** Residual crush of one vehicle. */
+export interface DamageSlots {
+  depths: Slot[];
+  /** Widths of the strips between the depths, as shares of the damaged width. */
+  strips: number[];
+  width: Slot;
+  forceAngle: Slot;
+  a: Slot;
+  b: Slot;
+}
+
 export interface VehicleSlots {
   mass: Slot;
   /** The inertia itself, or the factor on the estimate when `inertiaEstimated`. */
@@ -45,6 +56,8 @@ export interface VehicleSlots {
   approachDirection: Slot | null;
   approachYawRate: Slot | null;
   departure: LegsSlots;
+  /** null without any residual depth: that bounds the energy from above and gives no estimate. */
+  damage: DamageSlots | null;
 }
 
 /** The methods that this version solves. */

@@ -1,9 +1,9 @@
 import type { Issue } from '@/lib/casefile/issue';
 import { supportOf } from '@/lib/casefile/quantities';
-import type { CaseFile, LegsDeparture, Method, Quantity, VehicleId } from '@/lib/casefile/schema';
+import type { CaseFile, Damage, LegsDeparture, Method, Quantity, VehicleId } from '@/lib/casefile/schema';
 import { YAW_INERTIA_RELATIVE_SD } from '@/lib/mechanics/inertia';
 import type { DrawSpread } from '@/lib/numerics/spread';
-import type { Input, LegsSlots, Problem, Slot, SolvedMethod, VehicleSlots } from './problem';
+import type { DamageSlots, Input, LegsSlots, Problem, Slot, SolvedMethod, VehicleSlots } from './problem';
 
 const RADIANS_PER_DEGREE = Math.PI / 180;
 
@@ -51,6 +51,20 @@ export function readEvidence(casefile: CaseFile, method: SolvedMethod, seed: num
     };
   };
 
+  const damage = (id: VehicleId): DamageSlots | null => {
+    const stated = casefile.damage?.[id];
+    if (!stated || stated.depths.every(({ value }) => value === 0)) return null;
+    const at = `damage.${id}`;
+    return {
+      depths: stated.depths.map((depth, i) => si(`${at}.depths.${i}`, depth)),
+      strips: stripShares(stated),
+      width: si(`${at}.width`, stated.width),
+      forceAngle: angle(`${at}.forceAngle`, stated.forceAngle),
+      a: si(`${at}.a`, stated.a),
+      b: si(`${at}.b`, stated.b),
+    };
+  };
+
   const vehicle = (id: VehicleId): VehicleSlots => {
     const spec = casefile.vehicles[id];
     const approach = casefile.approach[id];
@@ -75,6 +89,7 @@ export function readEvidence(casefile: CaseFile, method: SolvedMethod, seed: num
         method === 'directions' && approach.direction ? angle(`approach.${id}.direction`, approach.direction) : null,
       approachYawRate: method === 'directions' ? angle(`approach.${id}.yawRate`, approach.yawRate) : null,
       departure: legs(id),
+      damage: damage(id),
     };
   };
 
@@ -95,6 +110,13 @@ export function readEvidence(casefile: CaseFile, method: SolvedMethod, seed: num
     seed,
     inputs,
   };
+}
+
+/** Stations left out are equally spaced, ends included; stated ones scale with the width. */
+function stripShares({ depths, stations, width }: Damage): number[] {
+  const n = depths.length - 1;
+  if (!stations) return new Array<number>(n).fill(1 / n);
+  return stations.slice(1).map((station, i) => (station - stations[i]) / width.value);
 }
 
 /** An estimated yaw inertia is the rule times a factor about 1, whose spread is that of the rule. */

@@ -13,13 +13,15 @@ const VEHICLE_FIGURES = [
   'deltaVLeft',
   'deltaVDirection',
   'meanAcceleration',
+  /** Crush energy of the vehicle. */
+  'damageEnergy',
   /** Yaw rate after contact that the impulse predicts; held against the measured one. */
   'predictedYawRate',
   /** Change of the yaw rate, for the seats. */
   'yawRateChange',
 ] as const;
 
-const PAIR_FIGURES = ['closingSpeed', 'slidingSpeed', 'restitution', 'impulseRatio', 'impulse', 'energyLost'] as const;
+const PAIR_FIGURES = ['closingSpeed', 'slidingSpeed', 'restitution', 'impulseRatio', 'impulse', 'energyLost', 'damageClosingSpeed'] as const;
 
 export type VehicleFigure = (typeof VEHICLE_FIGURES)[number];
 export type PairFigure = (typeof PAIR_FIGURES)[number];
@@ -34,10 +36,21 @@ export function makeColumns(length: number): Columns {
   return { ...fresh(PAIR_FIGURES), A: fresh(VEHICLE_FIGURES), B: fresh(VEHICLE_FIGURES) };
 }
 
-/** The figures that a problem has: no mean acceleration without a contact duration. */
+/** The figures that a problem has: no mean acceleration without a contact duration, no damage energy without depths. */
 export function figuresOf(problem: Problem): FigureName[] {
-  const vehicle = VEHICLE_FIGURES.filter((key) => key !== 'meanAcceleration' || problem.pulse !== null);
-  return [...vehicle.map((key) => `A.${key}` as const), ...vehicle.map((key) => `B.${key}` as const), ...PAIR_FIGURES];
+  const { A, B } = problem.vehicles;
+  const has = (figure: string): boolean => {
+    if (figure.endsWith('meanAcceleration')) return problem.pulse !== null;
+    if (figure === 'damageClosingSpeed') return (A.damage ?? B.damage) !== null;
+    if (figure.endsWith('damageEnergy')) return (figure.startsWith('A') ? A : B).damage !== null;
+    return true;
+  };
+  const all: FigureName[] = [
+    ...VEHICLE_FIGURES.map((key) => `A.${key}` as const),
+    ...VEHICLE_FIGURES.map((key) => `B.${key}` as const),
+    ...PAIR_FIGURES,
+  ];
+  return all.filter(has);
 }
 
 export function columnOf(columns: Columns, name: FigureName): Float64Array {

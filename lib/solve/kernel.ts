@@ -1,4 +1,4 @@
-import type { Problem, VehicleSlots } from '@/lib/evidence/problem';
+import type { DamageSlots, Problem, VehicleSlots } from '@/lib/evidence/problem';
 import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
 import { fillBlock } from '@/lib/numerics/spread';
 import {
@@ -13,6 +13,7 @@ import {
   solveDirections,
   solveRestitution,
 } from '@/lib/mechanics/impact-backwards';
+import { closingSpeedFromWork, obliqueFactor, stripWork } from '@/lib/mechanics/crush';
 import { estimatedYawInertia } from '@/lib/mechanics/inertia';
 import { meanAcceleration } from '@/lib/mechanics/pulse';
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
@@ -144,6 +145,39 @@ export class Kernel {
     columns.impulseRatio[k] = answer.mu;
     columns.impulse[k] = hypot(answer.Jn, answer.Jt);
     columns.energyLost[k] = answer.energyLost;
+    if (A.damage !== null || B.damage !== null) this.writeDamage(k);
+  }
+
+  /** Crush energies, and the closing speed that the normal work of what is stated stands for. */
+  private writeDamage(k: number): void {
+    const { columns, answer, inputs } = this;
+    const { A, B } = this.problem.vehicles;
+    let work = 0;
+    for (const [slots, to] of [
+      [A.damage, columns.A],
+      [B.damage, columns.B],
+    ] as const) {
+      if (slots === null) continue;
+      const normal = this.normalWork(k, slots);
+      to.damageEnergy[k] = normal * obliqueFactor(cos(inputs[slots.forceAngle][k]));
+      work += normal;
+    }
+    const { Knn, Knt } = answer.frame;
+    columns.damageClosingSpeed[k] = closingSpeedFromWork(work, Knn, Knt, answer.e, answer.mu);
+  }
+
+  private normalWork(k: number, { depths, strips, width, a, b }: DamageSlots): number {
+    const { inputs } = this;
+    let work = 0;
+    for (let i = 0; i < strips.length; i++)
+      work += stripWork(
+        strips[i] * inputs[width][k],
+        inputs[depths[i]][k],
+        inputs[depths[i + 1]][k],
+        inputs[a][k],
+        inputs[b][k],
+      );
+    return work;
   }
 
   private writeVehicle(

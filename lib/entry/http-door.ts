@@ -27,6 +27,7 @@ async function guarded(request: Request, handle: () => Promise<Response>): Promi
   try {
     return refused(request) ?? (await handle());
   } catch (error) {
+    if (request.signal.aborted) return problem(408, 'The request was given up before it was answered.');
     console.error(error);
     return isStoreTrouble(error)
       ? problem(

@@ -1,3 +1,5 @@
+import { selectEnds } from './select';
+
 /** What is said of the distribution of a result. */
 export interface Summary {
   mean: number;
@@ -19,18 +21,26 @@ export interface Summary {
  */
 export function summarise(values: Float64Array, coverage: number): Summary {
   const { mean, sd } = meanAndSd(values);
-  values.sort();
   const n = values.length;
-  const q = Math.min(n - 1, Math.floor(coverage * n + 0.5));
-  const r = Math.max(1, Math.ceil((n - q) / 2));
-  const median = (values[(n - 1) >> 1] + values[n >> 1]) / 2;
-  return { mean, sd, median, low: values[r - 1], high: values[r - 1 + q], shortest: shortestOf(values, q) };
+  const outside = Math.max(1, n - Math.floor(coverage * n + 0.5));
+  const { lowest, highest, median } = selectEnds(values, outside);
+  const symmetric = Math.ceil(outside / 2) - 1;
+  const shortest = narrowest(lowest, highest);
+  return {
+    mean,
+    sd,
+    median,
+    low: lowest[symmetric],
+    high: highest[symmetric],
+    shortest: [lowest[shortest], highest[shortest]],
+  };
 }
 
-function shortestOf(sorted: Float64Array, q: number): [number, number] {
+/** The first r for which highest[r] - lowest[r] is least. */
+function narrowest(lowest: Float64Array, highest: Float64Array): number {
   let best = 0;
-  for (let r = 1; r + q < sorted.length; r++) if (sorted[r + q] - sorted[r] < sorted[best + q] - sorted[best]) best = r;
-  return [sorted[best], sorted[best + q]];
+  for (let r = 1; r < lowest.length; r++) if (highest[r] - lowest[r] < highest[best] - lowest[best]) best = r;
+  return best;
 }
 
 /** Mean and standard deviation (n - 1) in two passes, the rounding of the first corrected by the second. */

@@ -9,24 +9,36 @@ export type RandomState = Int32Array;
 
 const rotateLeft = (x: number, by: number): number => (x << by) | (x >>> (32 - by));
 
-/** The next 32 bits, 0 .. 2^32 - 1. */
-export function nextUint32(state: RandomState): number {
-  const [s0, s1, s3] = [state[0], state[1], state[3]];
-  const result = (rotateLeft((s0 + s3) | 0, 7) + s0) >>> 0;
-  const s2 = state[2] ^ s0;
-  const mixed = s3 ^ s1;
-  state[1] = s1 ^ s2;
-  state[0] = s0 ^ mixed;
-  state[2] = s2 ^ (s1 << 9);
-  state[3] = rotateLeft(mixed, 11);
-  return result;
-}
-
-/** Uniform in the open interval (0, 1): an odd multiple of 2^-53, so neither 0 nor 1 nor anything that rounds to them. */
-export function nextUniform(state: RandomState): number {
-  const high = nextUint32(state) >>> 6;
-  const low = nextUint32(state) >>> 6;
-  return (high * 67108864 + low + 0.5) * 2.220446049250313e-16;
+/**
+ * Fills out[0 .. count - 1] with uniform numbers of the open interval (0, 1): odd multiples of 2^-53, so neither 0 nor 1 nor
+ * anything that rounds to them. Each takes the upper 26 bits of two numbers of the generator, whose step is written out
+ * twice over local variables because every draw of every input passes here.
+ */
+export function fillUniforms(state: RandomState, out: Float64Array, count: number): void {
+  let s0 = state[0];
+  let s1 = state[1];
+  let s2 = state[2];
+  let s3 = state[3];
+  for (let k = 0; k < count; k++) {
+    const high = (rotateLeft((s0 + s3) | 0, 7) + s0) >>> 6;
+    let shifted = s1 << 9;
+    s2 ^= s0;
+    s3 ^= s1;
+    s1 ^= s2;
+    s0 ^= s3;
+    s2 ^= shifted;
+    s3 = rotateLeft(s3, 11);
+    const low = (rotateLeft((s0 + s3) | 0, 7) + s0) >>> 6;
+    shifted = s1 << 9;
+    s2 ^= s0;
+    s3 ^= s1;
+    s1 ^= s2;
+    s0 ^= s3;
+    s2 ^= shifted;
+    s3 = rotateLeft(s3, 11);
+    out[k] = (high * 67108864 + low + 0.5) * 2.220446049250313e-16;
+  }
+  state.set([s0, s1, s2, s3]);
 }
 
 /** One round of HalfSipHash (Aumasson & Bernstein, reference implementation). */

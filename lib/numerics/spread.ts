@@ -1,5 +1,5 @@
 import { normalCumulative, normalQuantile } from './normal';
-import { nextUniform, seededState } from './random';
+import { fillUniforms, seededState } from './random';
 
 /** How an input varies (JCGM 101:2008 clause 6.4), in the units of its value. A triangular spread has its mode at the value. */
 export type DrawSpread =
@@ -40,8 +40,7 @@ export function fillBlock(
     out.fill(value, 0, count);
     return;
   }
-  const state = seededState(seed, stream, block);
-  for (let k = 0; k < count; k++) out[k] = nextUniform(state);
+  fillUniforms(seededState(seed, stream, block), out, count);
   if (spread.shape === 'normal') toNormal(out, count, value, spread.sd, drawn.support);
   else if (spread.shape === 'rectangular') toRectangular(out, count, spread.low, spread.high);
   else toTriangular(out, count, value, spread.low, spread.high);

@@ -3,7 +3,7 @@ import { useEffect, useState } from 'react';
 import { useStore } from 'zustand';
 import { useSessionStore } from '@/components/hooks/use-session';
 import type { CaseFile } from '@/lib/casefile/schema';
-import { type Autosave, type SaveState, createAutosave } from '@/lib/session/autosave';
+import { Autosave, type SaveState, type SaveWorld } from '@/lib/session/autosave';
 import { copyKey, reopenCopies } from '@/lib/session/kept-copies';
 import type { Session } from '@/lib/session/session';
 import { fetchCase, keepNewCase, restoreCase, sendCase } from './case-requests';
@@ -36,8 +36,8 @@ export interface Saving {
 export function useAutosave(id: string, revision: number): Saving {
   const session = useSessionStore();
   const [key] = useState(() => copyKey(id, newToken()));
-  const [autosave] = useState(() =>
-    createAutosave(worldOf(id, key), { revision, casefile: session.getState().casefile }),
+  const [autosave] = useState(
+    () => new Autosave(worldOf(id, key), { revision, casefile: session.getState().casefile }),
   );
   const save = useStore(autosave.state, (s) => s.save);
   const [apart, setApart] = useState<readonly KeptApart[]>([]);
@@ -88,7 +88,7 @@ const keptTitle = (casefile: CaseFile): string => `${casefile.title} (kept copy)
 
 const newToken = (): string => Array.from(crypto.getRandomValues(new Uint32Array(2)), (n) => n.toString(36)).join('');
 
-const worldOf = (id: string, key: string): Parameters<typeof createAutosave>[0] => ({
+const worldOf = (id: string, key: string): SaveWorld => ({
   send: (base, casefile, leaving) => sendCase(id, base, casefile, leaving),
   keep: (copy) => {
     try {
@@ -113,7 +113,7 @@ function listen(id: string, session: Session, autosave: Autosave): () => void {
   };
   const seen = (): void => {
     if (document.visibilityState === 'hidden') leave();
-    else if (autosave.isSaved()) void showNewest(id, session, autosave);
+    else if (autosave.isSaved) void showNewest(id, session, autosave);
   };
   const online = (): void => void autosave.flush();
   document.addEventListener('visibilitychange', seen);
@@ -131,7 +131,7 @@ async function showNewest(id: string, session: Session, autosave: Autosave): Pro
   const before = session.getState().casefile;
   const newest = await fetchCase(id);
   const meanwhile = session.getState().casefile !== before;
-  if (!newest || newest.revision === autosave.revision() || meanwhile) return;
+  if (!newest || newest.revision === autosave.revision || meanwhile) return;
   autosave.opened(newest.revision, newest.casefile);
   session.getState().replace('what another tab saved', newest.casefile);
 }
@@ -153,7 +153,7 @@ const inHand = new Set<string>();
 
 /** Puts back what a closed or crashed tab kept of this case; what no longer fits becomes a case of its own. */
 async function reopen(id: string, session: Session, autosave: Autosave) {
-  const server = { revision: autosave.revision(), casefile: session.getState().casefile };
+  const server = { revision: autosave.revision, casefile: session.getState().casefile };
   const live = await liveKeys();
   const kept: KeptApart[] = [];
   let restored = false;

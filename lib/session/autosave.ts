@@ -40,123 +40,133 @@ export interface SaveWorld {
   later: (wait: number, call: () => void) => () => void;
 }
 
-export type Autosave = ReturnType<typeof createAutosave>;
-
 /**
  * Sends finished edits of one open case, each based on the revision before it, one request at a time. Every edit is kept
  * in the browser before it is sent and dropped from there only when the server has it, so that a crash loses nothing;
  * what another tab saved is never written over.
  */
-export function createAutosave(world: SaveWorld, opened: { revision: number; casefile: CaseFile }) {
-  const state = createStore<{ save: SaveState }>()(() => ({ save: { kind: 'saved', at: null } }));
-  const say = (save: SaveState): void => state.setState({ save });
-  let base = opened.revision;
-  let saved = opened.casefile;
-  let latest = opened.casefile;
-  let sending: Promise<void> | null = null;
-  let failures = 0;
-  let callOff = (): void => {};
+export class Autosave {
+  readonly state = createStore<{ save: SaveState }>()(() => ({ save: { kind: 'saved', at: null } }));
+  readonly #world: SaveWorld;
+  /** The revision that the next save goes over, and the case in it. */
+  #base: number;
+  #saved: CaseFile;
+  #latest: CaseFile;
+  #sending: Promise<void> | null = null;
+  #failures = 0;
+  #callOff = (): void => {};
 
-  const waitsForUser = (): boolean => ['conflict', 'deleted'].includes(state.getState().save.kind);
-
-  const keep = (sent?: CaseFile): void =>
-    world.keep({ base, casefile: latest, at: world.now(), ...(sent ? { sent: hashOf(sent) } : {}) });
-
-  const plan = (wait: number): void => {
-    callOff();
-    callOff = world.later(wait, () => void flush());
-  };
-
-  async function send(leaving: boolean): Promise<void> {
-    const sent = latest;
-    say({ kind: 'saving' });
-    keep(sent);
-    const reply = await world.send(base, sent, leaving);
-    // An answer that was lost on the way leaves our own revision standing there: that is no conflict.
-    if (reply.kind === 'conflict' && reply.sha256 === hashOf(sent))
-      settle({ kind: 'saved', revision: reply.revision }, sent);
-    else settle(reply, sent);
+  constructor(world: SaveWorld, opened: { revision: number; casefile: CaseFile }) {
+    this.#world = world;
+    this.#base = opened.revision;
+    this.#saved = this.#latest = opened.casefile;
   }
 
-  function settle(reply: Sent, sent: CaseFile): void {
-    failures = reply.kind === 'unreachable' ? failures + 1 : 0;
-    switch (reply.kind) {
-      case 'saved':
-        base = reply.revision;
-        saved = sent;
-        return settled();
-      case 'unreachable':
-        say({ kind: 'offline' });
-        return plan(RETRY[Math.min(failures, RETRY.length) - 1]);
-      case 'conflict':
-        return say({ kind: 'conflict', revision: reply.revision });
-      case 'deleted':
-        return say({ kind: 'deleted' });
-      case 'refused':
-        return say({ kind: 'refused', issues: reply.issues });
-    }
+  /** Whether everything is on the server. */
+  get isSaved(): boolean {
+    return this.#latest === this.#saved && !this.#sending;
   }
 
-  function settled(): void {
-    if (latest === saved) {
-      world.keep(null);
-      say({ kind: 'saved', at: world.now() });
-    } else {
-      keep();
-      plan(0);
-    }
+  get revision(): number {
+    return this.#base;
+  }
+
+  /** A finished edit. */
+  changed(casefile: CaseFile): void {
+    if (casefile === this.#latest) return;
+    this.#latest = casefile;
+    if (this.isSaved && !this.#waitsForUser) return this.#settled();
+    this.#keep();
+    if (this.#waitsForUser) return;
+    if (this.state.getState().save.kind !== 'offline') this.#say({ kind: 'saving' });
+    this.#plan(GATHER);
   }
 
   /** Sends what is not saved yet, now. Resolves when nothing is under way any more. */
-  async function flush(leaving = false): Promise<void> {
-    callOff();
-    while (sending) await sending;
-    if (latest === saved || waitsForUser()) return;
-    sending = send(leaving).finally(() => (sending = null));
-    await sending;
+  async flush(leaving = false): Promise<void> {
+    this.#callOff();
+    while (this.#sending) await this.#sending;
+    if (this.isSaved || this.#waitsForUser) return;
+    this.#sending = this.#send(leaving).finally(() => (this.#sending = null));
+    await this.#sending;
   }
 
-  return {
-    state,
-    flush,
-    /** A finished edit. */
-    changed(casefile: CaseFile): void {
-      if (casefile === latest) return;
-      latest = casefile;
-      if (latest === saved && !sending && !waitsForUser()) return settledAgain();
-      keep();
-      if (waitsForUser()) return;
-      if (state.getState().save.kind !== 'offline') say({ kind: 'saving' });
-      plan(GATHER);
-    },
-    /** Another document stands now in this tab, and the server has it as `revision`. */
-    opened(revision: number, casefile: CaseFile): void {
-      callOff();
-      base = revision;
-      saved = latest = casefile;
-      world.keep(null);
-      say({ kind: 'saved', at: null });
-    },
-    /** The user had the deleted case restored: what stands here is sent again. */
-    restored(): Promise<void> {
-      say({ kind: 'saving' });
-      return flush();
-    },
-    /** What stands here was kept elsewhere: nothing more is sent, the copy in this browser goes. */
-    abandon(): void {
-      callOff();
-      latest = saved;
-      world.keep(null);
-    },
-    /** Whether everything is on the server. */
-    isSaved: (): boolean => latest === saved && !sending,
-    revision: (): number => base,
-  };
+  /** Another document stands now in this tab, and the server has it as `revision`. */
+  opened(revision: number, casefile: CaseFile): void {
+    this.#base = revision;
+    this.#saved = this.#latest = casefile;
+    this.#settled();
+  }
 
-  /** Undone back to what the server has. */
-  function settledAgain(): void {
-    callOff();
-    world.keep(null);
-    say({ kind: 'saved', at: world.now() });
+  /** The user had the deleted case restored: what stands here is sent again. */
+  restored(): Promise<void> {
+    this.#say({ kind: 'saving' });
+    return this.flush();
+  }
+
+  /** What stands here was kept elsewhere: nothing more is sent, the copy in this browser goes. */
+  abandon(): void {
+    this.#callOff();
+    this.#latest = this.#saved;
+    this.#world.keep(null);
+  }
+
+  async #send(leaving: boolean): Promise<void> {
+    const sent = this.#latest;
+    this.#say({ kind: 'saving' });
+    this.#keep(sent);
+    const reply = await this.#world.send(this.#base, sent, leaving);
+    // An answer that was lost on the way leaves our own revision standing there: that is no conflict.
+    const ours = reply.kind === 'conflict' && reply.sha256 === hashOf(sent);
+    this.#failures = reply.kind === 'unreachable' ? this.#failures + 1 : 0;
+    if (reply.kind === 'saved' || ours) this.#sentAs(reply.revision, sent);
+    else this.#unsent(reply);
+  }
+
+  #sentAs(revision: number, sent: CaseFile): void {
+    this.#base = revision;
+    this.#saved = sent;
+    if (this.#latest === sent) return this.#settled();
+    this.#keep();
+    this.#plan(0);
+  }
+
+  #unsent(reply: Exclude<Sent, { kind: 'saved' }>): void {
+    switch (reply.kind) {
+      case 'unreachable':
+        this.#say({ kind: 'offline' });
+        return this.#plan(RETRY[Math.min(this.#failures, RETRY.length) - 1]);
+      case 'conflict':
+        return this.#say({ kind: 'conflict', revision: reply.revision });
+      case 'deleted':
+        return this.#say({ kind: 'deleted' });
+      case 'refused':
+        return this.#say({ kind: 'refused', issues: reply.issues });
+    }
+  }
+
+  /** What stands here is what the server has. */
+  #settled(): void {
+    this.#callOff();
+    this.#world.keep(null);
+    this.#say({ kind: 'saved', at: this.#world.now() });
+  }
+
+  get #waitsForUser(): boolean {
+    return ['conflict', 'deleted'].includes(this.state.getState().save.kind);
+  }
+
+  #say(save: SaveState): void {
+    this.state.setState({ save });
+  }
+
+  #keep(sent?: CaseFile): void {
+    const copy = { base: this.#base, casefile: this.#latest, at: this.#world.now() };
+    this.#world.keep(sent ? { ...copy, sent: hashOf(sent) } : copy);
+  }
+
+  #plan(wait: number): void {
+    this.#callOff();
+    this.#callOff = this.#world.later(wait, () => void this.flush());
   }
 }

@@ -121,9 +121,9 @@ export function createSession(casefile: CaseFile) {
       }));
     },
 
-    replace(label, casefile) {
+    replace(label, other) {
       get().commit();
-      set((s) => ({ casefile, past: pushed(s.past, { label, casefile: s.casefile }), future: [], refused: [] }));
+      set((s) => ({ casefile: other, past: pushed(s.past, { label, casefile: s.casefile }), future: [], refused: [] }));
     },
 
     select: (selection) => set({ selection }),

@@ -1,0 +1,50 @@
+import type { Check, Level, Result } from '@/lib/results/result';
+import type { PrintedCheck, Section } from './report';
+
+const ORDER: readonly Level[] = ['fail', 'caution', 'note', 'pass'];
+
+const TITLES: Record<string, string> = {
+  energyGain: 'Energy is lost, not gained',
+  restitutionRange: 'Restitution between 0 and 1',
+  friction: 'Impulse ratio within believable friction',
+  slidingReversal: 'The tangential impulse does not reverse the sliding',
+  closing: 'The contact point closes',
+  contactPoint: 'The contact point lies on both vehicles',
+  overlap: 'The vehicles touch at contact',
+  nearlyInLine: 'The directions of approach differ enough',
+  amplification: 'Amplification by 1/e',
+  sideSlip: 'Each vehicle moves along its heading before contact',
+  yawMismatch: 'Yaw rates predicted and measured agree',
+  tyreImpulse: 'Tyre impulse during the contact is small',
+  speedRange: 'Closing speed within the range of the model',
+  misfit: 'The pieces of evidence agree',
+  restPose: 'The rest pose is reproduced',
+  otherTurns: 'Other turns that fit',
+  secondContact: 'A second contact',
+  impossibleShare: 'Few draws are impossible',
+  wide: 'Intervals narrower than the answers',
+};
+
+/** What each screening check found and what to do about it; what failed comes first and stays in. */
+export function checksSection({ checks }: Result): Section {
+  const items = ORDER.flatMap((level) => checks.filter((check) => check.level === level).map(printed));
+  return {
+    id: 'checks',
+    title: 'Checks, and what they mean',
+    blocks: [
+      {
+        kind: 'paragraph',
+        text: 'Each check holds a number of this case against a limit. A failed check withholds the result; a caution asks for a written response; a note is to be read. A check that passes is not a validation.',
+      },
+      { kind: 'checks', items },
+    ],
+  };
+}
+
+const printed = ({ id, level, says, advice, source }: Check): PrintedCheck => ({
+  level,
+  title: TITLES[id] ?? id,
+  says,
+  advice: advice ?? '',
+  source,
+});

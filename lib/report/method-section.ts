@@ -1,0 +1,62 @@
+import type { CaseFile, Method } from '@/lib/casefile/schema';
+import type { Result } from '@/lib/results/result';
+import { percent } from './numbers';
+import type { Section } from './report';
+
+export const METHOD_WORDS: Record<Method, string> = {
+  directions: 'Momentum along two known directions of approach',
+  restitution: 'Restitution and impulse ratio, worked back through the contact',
+  fit: 'All evidence weighed together',
+};
+
+const HOW: Record<Method, string[]> = {
+  directions: [
+    'Each vehicle is taken from the end of its travel back to separation, leg by leg, by the work of friction and grade.',
+    'The momentum of the pair after contact equals that before it. With both directions of approach known, its two components give the two approach speeds.',
+    'The change of momentum of one vehicle is the impulse. Split along the contact plane and its normal it gives the impulse ratio; the motion of the contact point before and after gives closing speed and restitution; both together give the energy lost.',
+    'Yaw rates after contact are used as measured where they were measured; the rates that the impulse predicts are held against them by a check.',
+  ],
+  restitution: [
+    'Each vehicle is taken from the end of its travel back to separation, leg by leg, by the work of friction and grade.',
+    'The speed at which the contact points part, divided by the restitution, is the speed at which they closed. With the stated impulse ratio that fixes the impulse.',
+    'The impulse takes each vehicle from its motion after contact back to its motion before. Directions of approach and yaw rates before contact are results here, to be held against the road.',
+  ],
+  fit: ['Everything that is known is weighed together against a model run forward from approach to rest.'],
+};
+
+const SOURCES = [
+  'Impact of two bodies in the plane: Brach, Mechanical Impact Dynamics (1991); Brach & Brach, Vehicle Accident Analysis and Reconstruction Methods. Impact with friction: Routh, Dynamics of a System of Rigid Bodies. Named from memory; to be confirmed by the author against the editions used.',
+  'Uncertainty: JCGM 101:2008, propagation of distributions by a Monte Carlo method. Vehicle axes: ISO 8855. Standard gravity 9.80665 m/s²: NIST SP 811.',
+];
+
+/** How the answer was found, in words, with where the laws come from. */
+export const methodSection = (result: Result): Section => ({
+  id: 'method',
+  title: 'Method',
+  blocks: [
+    { kind: 'paragraph', text: `${METHOD_WORDS[result.method]} (method ‘${result.method}’).` },
+    { kind: 'list', ordered: true, items: HOW[result.method] },
+    {
+      kind: 'paragraph',
+      text: `The spreads of the inputs are carried to the results by ${result.draws.toLocaleString('en')} draws, all inputs taken as independent of each other; intervals are stated at ${percent(result.coverage)}.`,
+    },
+    { kind: 'list', ordered: false, items: SOURCES },
+  ],
+});
+
+/** What is taken for granted. */
+export const assumptionsSection = (casefile: CaseFile): Section => ({
+  id: 'assumptions',
+  title: 'Assumptions',
+  blocks: [{ kind: 'list', ordered: false, items: assumptions(casefile) }],
+});
+
+function assumptions(casefile: CaseFile): string[] {
+  return [
+    'Both vehicles are rigid bodies that move in one plane, apart from the damage at one common contact point.',
+    'The contact is instantaneous: the vehicles do not move while it lasts, and the tyres give no impulse during it. How far that holds is bounded by the check on tyre impulse.',
+    'Over each leg of the travel friction, retardation share and grade are constant.',
+    ...(casefile.pulse ? ['The contact duration serves the accelerations only; it does not enter the speeds.'] : []),
+    'Inputs whose spread is not stated are taken as exact, and inputs are drawn independently of each other.',
+  ];
+}

@@ -1,0 +1,73 @@
+import type { CaseFile, Spread } from '@/lib/casefile/schema';
+import type { Band } from '@/lib/results/result';
+import type { Dimension, UnitSystem } from '@/lib/units/dimension';
+import { decimalsFor, formatValue, toDisplay, unitOf } from '@/lib/units/format';
+
+/** Which units a report is printed in. */
+export const unitsOf = (casefile: CaseFile): UnitSystem => casefile.display?.units ?? 'metric';
+
+export const unitText = (dimension: Dimension, units: UnitSystem): string => unitOf(dimension, units).symbol;
+
+const MOST_DIGITS = 6;
+
+/** A stated value as it was entered: as many decimals as it has in the display unit, no more than six digits. */
+export function stated(si: number, dimension: Dimension, units: UnitSystem): string {
+  const shown = Number(toDisplay(si, dimension, units).toPrecision(MOST_DIGITS));
+  const decimals = Math.min(MOST_DIGITS, (String(shown).split('.')[1] ?? '').length);
+  return formatValue(si, dimension, units, { decimals });
+}
+
+/** A band as it is printed: every figure to the place of two digits of the standard uncertainty. */
+export interface PrintedBand {
+  central: string;
+  median: string;
+  low: string;
+  high: string;
+  shortest: [string, string];
+  u: string;
+}
+
+/** Rounded once from SI; speeds never finer than one decimal. `central` may not exist. */
+export function printedBand(
+  band: Band,
+  central: number | undefined,
+  dimension: Dimension,
+  units: UnitSystem,
+): PrintedBand {
+  const decimals = decimalsFor(spreadOf(band), dimension, units, { headline: true });
+  const print = (si: number): string => formatValue(si, dimension, units, { decimals });
+  return {
+    central: central === undefined ? NOTHING : print(central),
+    median: print(band.median),
+    low: print(band.low),
+    high: print(band.high),
+    shortest: [print(band.shortest[0]), print(band.shortest[1])],
+    u: print(band.sd),
+  };
+}
+
+/** Stands for a figure that does not exist. */
+export const NOTHING = '–';
+
+/** The standard uncertainty, or half the interval where a wild tail (a ratio may have no variance) has blown it up. */
+const spreadOf = (band: Band): number => Math.min(band.sd, (band.high - band.low) / 2);
+
+/** A magnitude whose interval comes so near to 0 that only its upper end says something. */
+export const reachesZero = (band: Band): boolean => band.low >= 0 && band.low < 0.1 * band.high;
+
+/** With a capital in front. */
+export const sentence = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);
+
+/** «95 %». */
+export const percent = (share: number): string => `${Number((100 * share).toPrecision(3))}\u00a0%`;
+
+/** How well a value is known, in words and display units. */
+export function spreadText(spread: Spread | undefined, dimension: Dimension, units: UnitSystem): string {
+  if (!spread || spread.shape === 'fixed') return 'taken as exact';
+  const zero = toDisplay(0, dimension, units);
+  if (spread.shape === 'normal') {
+    const u = Number((toDisplay(spread.sd, dimension, units) - zero).toPrecision(3));
+    return `normal, u = ${u}`;
+  }
+  return `${spread.shape}, ${stated(spread.low, dimension, units)} to ${stated(spread.high, dimension, units)}`;
+}

@@ -101,9 +101,9 @@ const hart = (x: number): number =>
 const SQRT_TWO_PI = 2.5066282746310002;
 
 /**
- * Share of the standard normal distribution below z; relative error below 1e-11. Below z = -37 (5.7e-300) it is taken as 0.
+ * Share of the standard normal distribution below z; relative error below 1e-13. Below z = -37 (5.7e-300) it is taken as 0.
  * Source: Hart (1968), algorithm 5666, as given by West (2005), «Better approximations to cumulative normal functions»;
- * beyond 7 the continued fraction of Laplace (Abramowitz & Stegun 26.2.14).
+ * beyond 3 the continued fraction of Laplace (Abramowitz & Stegun 26.2.14).
  */
 export function normalCumulative(z: number): number {
   const size = Math.abs(z);
@@ -112,8 +112,8 @@ export function normalCumulative(z: number): number {
 }
 
 function tailFactor(size: number): number {
-  if (size < 7) return hart(size);
+  if (size < 3) return hart(size);
   let fraction = size;
-  for (let term = 20; term >= 1; term--) fraction = size + term / fraction;
+  for (let term = 100; term >= 1; term--) fraction = size + term / fraction;
   return 1 / (SQRT_TWO_PI * fraction);
 }

@@ -8,13 +8,15 @@ import { defineConfig } from '@playwright/test';
  * every worker: the first reading chooses, and hands its choice on in the environment.
  */
 const { env } = process;
+/** E2E_URL runs the tests against a server that is running already, for working on them. */
+const running = env.E2E_URL;
 env.E2E_PORT ??= String(4400 + (process.pid % 500));
-if (!env.E2E_DATA) {
+if (!running && !env.E2E_DATA) {
   const data = mkdtempSync(join(tmpdir(), 'retrodict-e2e-'));
   env.E2E_DATA = data;
   process.on('exit', () => rmSync(data, { recursive: true, force: true }));
 }
-const baseURL = `http://127.0.0.1:${env.E2E_PORT}`;
+const baseURL = running ?? `http://127.0.0.1:${env.E2E_PORT}`;
 
 export default defineConfig({
   testDir: 'e2e',
@@ -41,12 +43,14 @@ export default defineConfig({
       ],
     },
   },
-  webServer: {
-    command: 'node app/start.mjs',
-    url: `${baseURL}/api/health`,
-    env: { PORT: env.E2E_PORT, HOST: '127.0.0.1', DATA_DIR: env.E2E_DATA },
-    timeout: 240_000,
-    reuseExistingServer: false,
-    gracefulShutdown: { signal: 'SIGTERM', timeout: 5_000 },
-  },
+  webServer: running
+    ? undefined
+    : {
+        command: 'node app/start.mjs',
+        url: `${baseURL}/api/health`,
+        env: { PORT: env.E2E_PORT, HOST: '127.0.0.1', DATA_DIR: env.E2E_DATA ?? '' },
+        timeout: 240_000,
+        reuseExistingServer: false,
+        gracefulShutdown: { signal: 'SIGTERM', timeout: 5_000 },
+      },
 });

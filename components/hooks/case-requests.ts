@@ -8,6 +8,9 @@ import type { Sent } from '@/lib/session/autosave';
 /** Browsers let a request outlive its page only up to 64 KiB. */
 const KEEPALIVE_BYTES = 60_000;
 
+/** After this long a server counts as away, ms. Asking again is harmless: a save names the revision that it goes over. */
+const PATIENCE = 15_000;
+
 export type Kept = { ok: true; id: string } | { ok: false; issues: readonly Issue[] };
 
 const UNREACHABLE: Issue = { path: '(server)', says: 'cannot be reached; nothing was changed. Is it still running?' };
@@ -25,7 +28,7 @@ interface Body {
 
 async function ask(path: string, init?: RequestInit): Promise<{ status: number; body: Body } | null> {
   try {
-    const response = await fetch(path, { cache: 'no-store', ...init });
+    const response = await fetch(path, { cache: 'no-store', signal: AbortSignal.timeout(PATIENCE), ...init });
     return { status: response.status, body: (await response.json()) as Body };
   } catch {
     return null;

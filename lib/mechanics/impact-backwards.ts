@@ -187,19 +187,19 @@ function setEnergy(out: ImpactAnswer): void {
 }
 
 function reasonAgainstDirections({ A, B }: ImpactState, out: ImpactAnswer): Reason | null {
+  if (!areFinite(out)) return 'notFinite';
   const standing = -TINY * (hypot(A.vx, A.vy) + hypot(B.vx, B.vy));
   if (out.un <= 0) return 'notClosing';
   if (out.A.speed < standing || out.B.speed < standing) return 'backwards';
   if (out.Jn <= 0) return 'pulling';
   if (out.e < -TINY || out.e > 1 + TINY) return 'restitution';
-  return reasonAgainstEnergy(out);
+  return gainsEnergy(out) ? 'energyGain' : null;
 }
 
-function reasonAgainstEnergy(out: ImpactAnswer): Reason | null {
-  if (out.energyLost < -TINY * out.closingEnergy) return 'energyGain';
-  const all = out.un + out.ut + out.Jn + out.Jt + out.energyLost + out.closingEnergy + out.A.speed + out.B.speed;
-  return Number.isFinite(all) ? null : 'notFinite';
-}
+const gainsEnergy = (out: ImpactAnswer): boolean => out.energyLost < -TINY * out.closingEnergy;
+
+const areFinite = (out: ImpactAnswer): boolean =>
+  Number.isFinite(out.un + out.ut + out.Jn + out.Jt + out.energyLost + out.closingEnergy + out.A.speed + out.B.speed);
 
 /**
  * Method restitution: with restitution e and impulse ratio mu known, un = -un'/e and Jn = (un - un')/(Knn + mu Knt); both
@@ -217,6 +217,8 @@ export function solveRestitution(s: ImpactState, out: ImpactAnswer): Reason | nu
   const un = parts && e > 0 ? -out.unAfter / e : NaN;
   out.e = e;
   out.mu = mu;
+  out.sinBetween = NaN;
+  out.condition = NaN;
   out.Jn = (un - out.unAfter) / (frame.Knn + mu * frame.Knt);
   out.Jt = mu * out.Jn;
   takeBack(s, out);
@@ -246,5 +248,6 @@ function reasonAgainstRestitution(e: number, out: ImpactAnswer): Reason | null {
   if (out.un <= 0) return 'notClosing';
   if (out.Jn <= 0) return 'pulling';
   if (e < LEAST_RESTITUTION - 1e-12 || e > 1 + TINY) return 'restitution';
-  return reasonAgainstEnergy(out);
+  if (gainsEnergy(out)) return 'energyGain';
+  return areFinite(out) ? null : 'notFinite';
 }

@@ -89,7 +89,7 @@ export class OpenCase {
 }
 
 /** Waits until the page answers to its user: React has taken over what the server drew. */
-async function live(page: Page): Promise<void> {
+export async function live(page: Page): Promise<void> {
   await page.waitForFunction(() => {
     const button = document.querySelector('button');
     return button !== null && Object.keys(button).some((key) => key.startsWith('__reactProps'));

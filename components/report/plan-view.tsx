@@ -117,7 +117,7 @@ function ArrowHead({ points }: { points: Point[] }) {
 }
 
 function Dot({ role, at: [x, y] }: { role: Role; at: Point }) {
-  if (role !== 'point')
+  if (role === 'centre')
     return (
       <g className={styles.centre}>
         <circle cx={x} cy={y} r={0.9} />
@@ -205,7 +205,7 @@ function Sample({ role }: { role: Role }) {
   if (DOTS.includes(role)) return <Dot role={role} at={[4.5, 2.2]} />;
   if (/^(vehicle|rest)/.test(role))
     return <polygon points="0.5,0.5 8.5,0.5 8.5,3.9 0.5,3.9" className={styles.polygon} data-role={role} />;
-  const arrow = /^(approach|normal)/.test(role);
+  const arrow = /^(approach|travel|normal)/.test(role);
   return (
     <ItemView
       item={{

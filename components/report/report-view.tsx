@@ -53,7 +53,6 @@ function TitleBlock({ header }: { header: Header }) {
           </div>
         ))}
       </dl>
-      {header.notes !== '' && <p className={styles.notes}>{header.notes}</p>}
     </header>
   );
 }

@@ -4,7 +4,7 @@ import styles from './speed-chart.module.css';
 /* The drawing's own millimetres. */
 const WIDTH = 178;
 const LABELS = 46;
-const LANE = 13;
+const LANE = 11.5;
 const TOP = 2;
 const BAR = 2.2;
 

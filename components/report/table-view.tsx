@@ -5,7 +5,7 @@ import styles from './table-view.module.css';
 const SHORT = 12;
 
 /** A table for paper: its head is repeated on every page, rows and their group titles stay together. */
-export function TableView({ table: { caption, columns, rows, notes, narrow } }: { table: Table }) {
+export function TableView({ table: { caption, columns, rows, notes } }: { table: Table }) {
   const cell = (row: Extract<Row, { cells: string[] }>) =>
     row.cells.map((text, k) => (
       <td key={k} data-kind={columns[k]?.kind}>
@@ -14,7 +14,7 @@ export function TableView({ table: { caption, columns, rows, notes, narrow } }: 
     ));
   return (
     <>
-      <table className={styles.table} data-narrow={narrow} data-short={rows.length <= SHORT || undefined}>
+      <table className={styles.table} data-short={rows.length <= SHORT || undefined}>
         <caption>{caption}</caption>
         <thead>
           <tr>

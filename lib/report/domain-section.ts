@@ -35,6 +35,10 @@ export function domainSection(casefile: CaseFile, result: Result): Section {
     title: 'Limits: where the models hold',
     blocks: [
       {
+        kind: 'paragraph',
+        text: 'Not covered at all: rollover, steep changes of crossfall, articulated units at impact, motorcycles, pedestrians, trips over poles or kerbs, three vehicles in contact at once, deformation or over-ride beyond the range above.',
+      },
+      {
         kind: 'table',
         caption: 'Range of validity; the limits are screening values chosen for this program, not published limits',
         columns: [
@@ -44,10 +48,6 @@ export function domainSection(casefile: CaseFile, result: Result): Section {
           { title: 'Lies', kind: 'words' },
         ],
         rows,
-      },
-      {
-        kind: 'paragraph',
-        text: 'Not covered at all: rollover, steep changes of crossfall, articulated units at impact, motorcycles, pedestrians, trips over poles or kerbs, three vehicles in contact at once, deformation or over-ride beyond the range above.',
       },
     ],
   };

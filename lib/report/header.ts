@@ -14,7 +14,7 @@ export interface Issue {
 const HASH_PREFIX = 12;
 
 export function headerOf(casefile: CaseFile, result: Result, issue: Issue): Header {
-  const { title, reference, vehicles, notes } = casefile;
+  const { title, reference, vehicles } = casefile;
   const rows: Header['rows'] = [
     ['Vehicle A', vehicles.A.name],
     ['Vehicle B', vehicles.B.name],
@@ -29,7 +29,6 @@ export function headerOf(casefile: CaseFile, result: Result, issue: Issue): Head
     title,
     subject: 'Report on the speeds before contact and the delta-V of two vehicles',
     reference: reference ?? '',
-    notes: notes ?? '',
     rows,
     paper: issue.paper ?? casefile.display?.paper ?? 'A4',
     edges: { case: name + revision, hash: `case ${result.case.slice(0, HASH_PREFIX)}`, engine: result.engine },

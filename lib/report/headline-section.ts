@@ -56,6 +56,10 @@ const conditions = ({ method, coverage, draws }: Result): Block => ({
     `They hold for the method ${method}, the models and the inputs set out below, and for nothing else: if a fact changes, they have to be worked again.`,
 });
 
+/** The first page has room for so many. */
+const MOST_CAUTIONS = 3;
+const COUNTS = ['No', 'One', 'Two', 'Three', 'Four', 'Five', 'Six', 'Seven', 'Eight', 'Nine'];
+
 /** What speaks against the result, in the words of the checks; the failed ones stand in its place already. */
 function against({ checks }: Result): Block[] {
   const cautions = checks.filter((check) => check.level === 'caution').map((check) => check.says);
@@ -70,12 +74,18 @@ function against({ checks }: Result): Block[] {
     return [
       { kind: 'paragraph', text: 'No screening check spoke against the result. That is not a validation of it.' },
     ];
-  const count = cautions.length === 1 ? 'One check speaks' : `${cautions.length} checks speak`;
+  const count =
+    cautions.length === 1 ? 'One check speaks' : `${COUNTS[cautions.length] ?? cautions.length} checks speak`;
+  const more = cautions.length - MOST_CAUTIONS;
   return [
     {
       kind: 'paragraph',
       text: `${count} against using these figures as they stand; what to do about it is in the section on checks.`,
     },
-    { kind: 'list', ordered: false, items: cautions },
+    {
+      kind: 'list',
+      ordered: false,
+      items: [...cautions.slice(0, MOST_CAUTIONS), ...(more > 0 ? [`and ${more} more.`] : [])],
+    },
   ];
 }

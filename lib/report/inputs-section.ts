@@ -5,7 +5,7 @@ import type { CaseFile, Quantity, VehicleId } from '@/lib/casefile/schema';
 import { VEHICLE_IDS } from '@/lib/casefile/schema';
 import type { Result } from '@/lib/results/result';
 import { spreadText, stated, unitText, unitsOf } from './numbers';
-import type { Row, Section, Table } from './report';
+import type { Block, Row, Section, Table } from './report';
 
 /** Everything that was put in: value, unit, how well it is known, and where it comes from. */
 export function inputsSection(casefile: CaseFile, result: Result): Section {
@@ -29,7 +29,8 @@ export function inputsSection(casefile: CaseFile, result: Result): Section {
     rows,
     notes: inputNotes(casefile),
   };
-  return { id: 'inputs', title: 'What was put in', blocks: [table] };
+  const notes: Block[] = casefile.notes ? [{ kind: 'paragraph', text: `Notes to the case: ${casefile.notes}` }] : [];
+  return { id: 'inputs', title: 'What was put in', blocks: [...notes, table] };
 }
 
 const titled = (casefile: CaseFile, id: string, title: string): string =>

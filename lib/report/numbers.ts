@@ -35,7 +35,11 @@ export function printedBand(
   units: UnitSystem,
 ): PrintedBand {
   const decimals = decimalsFor(spreadOf(band), dimension, units, { headline: true });
-  const print = (si: number): string => formatValue(si, dimension, units, { decimals });
+  const step = wholeStep(toDisplay(spreadOf(band), dimension, units));
+  const print = (si: number): string =>
+    step === 1
+      ? formatValue(si, dimension, units, { decimals })
+      : String(Math.round(toDisplay(si, dimension, units) / step) * step).replace('-', '−');
   return {
     central: central === undefined ? NOTHING : print(central),
     median: print(band.median),
@@ -45,6 +49,9 @@ export function printedBand(
     u: print(band.sd),
   };
 }
+
+/** Tens, hundreds … that leave an uncertainty of three digits or more two significant ones; 1 below. */
+const wholeStep = (u: number): number => (u < 99.5 ? 1 : 10 ** (Math.floor(Math.log10(u)) - 1));
 
 /** Stands for a figure that does not exist. */
 export const NOTHING = '–';

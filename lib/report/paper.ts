@@ -5,7 +5,7 @@ const SHEETS: Record<Paper, [width: number, height: number]> = { A4: [210, 297],
 /** Margins of the printed page, mm; the same stand in the page rules of the style sheet. */
 const MARGINS = { top: 21, side: 16, bottom: 19 };
 /** What heading, legend and caption of the plan take of the page, mm. */
-const AROUND_PLAN = 44;
+const AROUND_PLAN = 46;
 
 /** The room that a plan has on a page of its own, mm. */
 export function roomForPlan(paper: Paper): { width: number; height: number } {

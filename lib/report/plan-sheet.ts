@@ -35,6 +35,6 @@ export type Point = [x: number, y: number];
 
 export type Item =
   | { kind: 'polygon'; role: Role; points: Point[] }
-  | { kind: 'line'; role: Role; points: Point[]; arrow?: boolean }
+  | { kind: 'line'; role: Role; points: Point[]; arrow?: boolean; label?: string }
   | { kind: 'dot'; role: Role; at: Point }
   | { kind: 'label'; at: Point; text: string; strong?: boolean };

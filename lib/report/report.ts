@@ -15,7 +15,6 @@ export interface Header {
   title: string;
   subject: string;
   reference: string;
-  notes: string;
   /** The rows of the title block. */
   rows: [term: string, text: string][];
   paper: Paper;
@@ -60,8 +59,6 @@ export interface Table {
   caption: string;
   columns: Column[];
   rows: Row[];
-  /** Few columns: set on part of the width. */
-  narrow?: boolean;
   /** Said under the table. */
   notes?: string[];
 }

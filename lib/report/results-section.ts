@@ -71,6 +71,9 @@ function bandRow(name: ResultName, result: Result, units: UnitSystem, withheld: 
   return { cells: [label, unit, ...cells] };
 }
 
+/** An interval of directions wider than this says nothing, deg: the vehicle as good as stands. */
+const ANY_DIRECTION = 300;
+
 /** Central, median, u and both intervals. A band without width repeats one number. */
 function bandCells(
   central: number | undefined,
@@ -84,6 +87,8 @@ function bandCells(
     const exact = stated(band.median, dimension, units);
     return [exact, exact, '0', 'exact', 'exact'];
   }
+  if (dimension === 'angle' && band.high - band.low > ANY_DIRECTION)
+    return [...Array<string>(3).fill(NOTHING), 'any', 'any'];
   const printed = printedBand(band, central, dimension, units);
   const [from, to] = printed.shortest;
   return [printed.central, printed.median, printed.u, `${printed.low} to ${printed.high}`, `${from} to ${to}`];

@@ -1,6 +1,6 @@
 import { problem } from './http-answer';
 
-const LOOPBACK = /^(localhost|127\.0\.0\.1|\[::1\])(:\d+)?$/i;
+const LOOPBACK = /^(localhost|127\.0\.0\.1|::1|\[::1\])(:\d+)?$/i;
 
 /**
  * Why a request is not let in, or null. Only this machine's own names are answered unless HOST opens the server to

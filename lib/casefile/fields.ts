@@ -77,7 +77,13 @@ const LEG: Line[] = [
 /** Plain numbers of a vehicle's drawing, without a spread. */
 const PLAIN = new Set(['length', 'width', 'wheelbase', 'track', 'frontOverhang']);
 
-function field(path: string, [key, label, dimension, optional]: Line, group: GroupId, thing: ThingId, prefix = ''): Field {
+function field(
+  path: string,
+  [key, label, dimension, optional]: Line,
+  group: GroupId,
+  thing: ThingId,
+  prefix = '',
+): Field {
   const kind = dimension === null ? 'text' : PLAIN.has(key) ? 'number' : 'quantity';
   const spoken = prefix === '' ? label : `${prefix} ${label}`;
   return { path, label: spoken, group, kind, dimension, optional: optional === 'optional', thing };
@@ -128,10 +134,13 @@ function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
   ];
 }
 
+/** Parts of a case that stand for a group of rows, not for one. */
+const WHOLE_GROUPS: Record<string, string> = { 'departure.A': 'After contact, A', 'departure.B': 'After contact, B' };
+
 /** The words for the value at a path, for checks and refusals; the path itself where no row has it. */
 export function labelOf(casefile: CaseFile, path: string): string {
   const found = fieldsOf(casefile).find((f) => path === f.path || path.startsWith(`${f.path}.`));
-  if (!found) return path;
+  if (!found) return WHOLE_GROUPS[path] ?? path;
   const vehicle = /^(?:after\.)?([AB])$/.exec(found.group)?.[1];
   return vehicle ? `${vehicle}: ${found.label}` : found.label;
 }

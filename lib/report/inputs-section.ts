@@ -4,7 +4,7 @@ import { nodeAt } from '@/lib/casefile/quantities';
 import type { CaseFile, Quantity, VehicleId } from '@/lib/casefile/schema';
 import { VEHICLE_IDS } from '@/lib/casefile/schema';
 import type { Result } from '@/lib/results/result';
-import { spreadText, stated, unitText, unitsOf } from './numbers';
+import { percent, sizeOf, spreadText, stated, unitText, unitsOf } from './numbers';
 import type { Block, Row, Section, Table } from './report';
 
 /** Everything that was put in: value, unit, how well it is known, and where it comes from. */
@@ -49,7 +49,7 @@ function inputRow(casefile: CaseFile, field: Field): Row {
   return {
     cells: [
       field.label,
-      stated(node.value, dimension, units),
+      stated(node.value, dimension, units, sizeOf(node.spread)),
       unit,
       spreadText(node.spread, dimension, units),
       sourceOf(node),
@@ -58,6 +58,8 @@ function inputRow(casefile: CaseFile, field: Field): Row {
 }
 
 const MARK = '†';
+/** Of the estimate, relative (SAE 1999-01-1336, 73 cars). */
+const YAW_INERTIA_RELATIVE_SD = 0.073;
 
 function sourceOf({ source }: Quantity): string {
   if (!source) return 'not stated';
@@ -72,9 +74,9 @@ function estimatedInertia(casefile: CaseFile, result: Result, id: VehicleId): Ro
     {
       cells: [
         'Yaw inertia, estimated',
-        stated(Number(inertia.toPrecision(4)), 'yawInertia', units),
+        stated(inertia, 'yawInertia', units, YAW_INERTIA_RELATIVE_SD * inertia),
         unitText('yawInertia', units),
-        'normal, u = 7.3 % of it',
+        `normal, u = ${percent(YAW_INERTIA_RELATIVE_SD)} of it`,
         'from mass and axle distances ‡',
       ],
     },

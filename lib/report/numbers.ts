@@ -8,13 +8,20 @@ export const unitsOf = (casefile: CaseFile): UnitSystem => casefile.display?.uni
 
 export const unitText = (dimension: Dimension, units: UnitSystem): string => unitOf(dimension, units).symbol;
 
-const MOST_DIGITS = 6;
+/** A value that was entered in the units shown has no more digits than this; one converted from others has. */
+const ENTERED_DIGITS = 6;
+/** A converted value without a spread is printed to this part of itself; with one, to this part of its spread. */
+const PART_OF_VALUE = 5e-5;
+const PART_OF_SPREAD = 0.02;
 
-/** A stated value as it was entered: as many decimals as it has in the display unit, no more than six digits. */
-export function stated(si: number, dimension: Dimension, units: UnitSystem): string {
-  const shown = Number(toDisplay(si, dimension, units).toPrecision(MOST_DIGITS));
-  const decimals = Math.min(MOST_DIGITS, (String(shown).split('.')[1] ?? '').length);
-  return formatValue(si, dimension, units, { decimals });
+/** A stated value as it was entered; one that was entered in other units, rounded well inside its spread (SI, 0: none). */
+export function stated(si: number, dimension: Dimension, units: UnitSystem, u = 0): string {
+  const entered = formatValue(si, dimension, units);
+  if (entered.replace(/\D/g, '').replace(/^0+/, '').length <= ENTERED_DIGITS) return entered;
+  const shown = toDisplay(si, dimension, units);
+  const slack = u > 0 ? PART_OF_SPREAD * toDisplay(u, dimension, units) : PART_OF_VALUE * Math.abs(shown);
+  const decimals = [0, 1, 2, 3, 4, 5, 6].find((d) => Math.abs(Number(shown.toFixed(d)) - shown) <= slack);
+  return formatValue(si, dimension, units, { decimals: decimals ?? ENTERED_DIGITS });
 }
 
 /** A band as it is printed: every figure to the place of two digits of the standard uncertainty. */
@@ -71,10 +78,13 @@ export const percent = (share: number): string => `${Number((100 * share).toPrec
 /** How well a value is known, in words and display units. */
 export function spreadText(spread: Spread | undefined, dimension: Dimension, units: UnitSystem): string {
   if (!spread || spread.shape === 'fixed') return 'taken as exact';
-  const zero = toDisplay(0, dimension, units);
-  if (spread.shape === 'normal') {
-    const u = Number((toDisplay(spread.sd, dimension, units) - zero).toPrecision(3));
-    return `normal, u = ${u}`;
-  }
-  return `${spread.shape}, ${stated(spread.low, dimension, units)} to ${stated(spread.high, dimension, units)}`;
+  if (spread.shape === 'normal') return `normal, u = ${Number(toDisplay(spread.sd, dimension, units).toPrecision(3))}`;
+  const width = spread.high - spread.low;
+  return `${spread.shape}, ${stated(spread.low, dimension, units, width)} to ${stated(spread.high, dimension, units, width)}`;
+}
+
+/** The standard uncertainty of a spread, or enough of its width to round by; 0 for none. */
+export function sizeOf(spread: Spread | undefined): number {
+  if (!spread || spread.shape === 'fixed') return 0;
+  return spread.shape === 'normal' ? spread.sd : (spread.high - spread.low) / 4;
 }

@@ -1,4 +1,4 @@
-import type { Paper } from './report';
+export type Paper = 'A4' | 'Letter';
 
 /** Width and height of a sheet, mm (ISO 216; ANSI/ASME Y14.1). */
 const SHEETS: Record<Paper, [width: number, height: number]> = { A4: [210, 297], Letter: [215.9, 279.4] };

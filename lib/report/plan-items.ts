@@ -116,8 +116,9 @@ function legItems(casefile: CaseFile, departure: LegsDeparture, id: VehicleId): 
 /** The direction of approach: as stated, or as found where the method answers it. */
 function approachItems(casefile: CaseFile, result: Result, id: VehicleId): Item[] {
   const speed = result.central[`${id}.approachSpeed`] ?? 0;
-  const direction = casefile.approach[id].direction?.value ?? result.central[`${id}.approachDirection`];
-  if (direction === undefined || speed < SLOW) return [];
+  const found = speed < SLOW ? undefined : result.central[`${id}.approachDirection`];
+  const direction = casefile.approach[id].direction?.value ?? found;
+  if (direction === undefined) return [];
   const { length, frontOverhang, frontAxleToMassCentre } = casefile.vehicles[id];
   const rear = length - frontOverhang - frontAxleToMassCentre.value;
   const head = sum(frameOf(casefile, id).centre, scaled(unit(direction), -(rear + 0.3)));

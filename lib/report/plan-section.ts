@@ -86,7 +86,7 @@ function gridLines(
   const along = (axis: 'x' | 'y', origin: number, size: number, sense: 1 | -1): Drawing['grid'] => {
     const lines: Drawing['grid'] = [];
     for (let k = Math.ceil(-origin / step); origin + k * step <= size; k++)
-      lines.push({ axis, at: origin + k * step, metres: sense * k * scale.grid });
+      lines.push({ axis, at: origin + k * step, metres: k === 0 ? 0 : sense * k * scale.grid });
     return lines;
   };
   return [...along('x', x0, room.width, 1), ...along('y', y0, room.height, -1)];

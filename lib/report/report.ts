@@ -1,4 +1,5 @@
 import type { Level } from '@/lib/results/result';
+import type { Paper } from './paper';
 import type { Drawing } from './plan-sheet';
 import type { SpeedFigure } from './speed-figure';
 import type { Chapter } from './worked/sheet';
@@ -9,7 +10,7 @@ export interface Report {
   sections: Section[];
 }
 
-export type Paper = 'A4' | 'Letter';
+export type { Paper } from './paper';
 
 export interface Header {
   title: string;

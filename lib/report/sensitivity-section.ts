@@ -29,7 +29,9 @@ export function sensitivitySection(result: Result, labelOf: (path: string) => st
         columns: [
           { title: 'Input', kind: 'words' },
           ...traced.map((name) => ({
-            title: sentence(resultLabel(name)).replace(/ at the contact point$/, ''),
+            title: sentence(resultLabel(name))
+              .replace(/ at the contact point$/, '')
+              .replace(/ ([AB])$/, '\u00a0$1'),
             kind: 'number' as const,
           })),
         ],

@@ -122,6 +122,28 @@ describe('the junction example', () => {
     expect(brief).not.toContain((solved.result.bands['A.approachSpeed'].median * 3.6).toFixed(1));
   });
 
+  test.each(['A4', 'Letter'] as const)(
+    'the plan is true to scale on %s and holds both vehicles and their travel',
+    (paper) => {
+      const [{ drawing }] = only(writeReport(solved.casefile, solved.result, solved.shapes, { paper }), 'plan');
+      expect(drawing.scale.ratio).toBe(100);
+      const outline = drawing.items.find((item) => item.kind === 'polygon' && item.role === 'vehicle.A');
+      if (outline?.kind !== 'polygon') throw new Error('vehicle A is not on the plan');
+      const [[x0, y0], [x1, y1]] = outline.points;
+      expect(Math.hypot(x1 - x0, y1 - y0)).toBeCloseTo(46.2, 9);
+      const travelled = drawing.items.filter((item) => item.kind === 'line' && item.role === 'travel.B');
+      expect(travelled).toHaveLength(2);
+      for (const item of drawing.items)
+        if (item.kind === 'polygon' || (item.kind === 'line' && item.role !== 'mark'))
+          for (const [x, y] of item.points) {
+            expect(x).toBeGreaterThan(0);
+            expect(x).toBeLessThan(drawing.width);
+            expect(y).toBeGreaterThan(0);
+            expect(y).toBeLessThan(drawing.height);
+          }
+    },
+  );
+
   test('the author’s part is left to the author', () => {
     expect(JSON.stringify(report)).toContain('Author, instructions and declaration: to be supplied by the author.');
     expect(only(report, 'signature')).toHaveLength(1);
@@ -135,8 +157,10 @@ test('in US units the headline is in mph and the inputs in feet and pounds', asy
   // 1 mph = 0.44704 m/s exactly (NIST SP 811, appendix B.8).
   expect(headline.figures[0].value).toBe((result.bands['A.approachSpeed'].median / 0.44704).toFixed(1));
   expect(headline.figures[0].unit).toBe('mph');
-  // 1 lb = 0.45359237 kg exactly (NIST SP 811, appendix B.8).
-  expect(rowsNamed(report, 'Mass')[0].slice(1, 3)).toEqual([(1510 / 0.45359237).toPrecision(6), 'lb']);
+  // 1 lb = 0.45359237 kg exactly (NIST SP 811, appendix B.8); u is 20 kg, so pounds need no decimals.
+  expect(rowsNamed(report, 'Mass')[0].slice(1, 3)).toEqual([(1510 / 0.45359237).toFixed(0), 'lb']);
+  // 1 ft = 0.3048 m exactly.
+  expect(rowsNamed(report, 'Length')[0].slice(1, 3)).toEqual([(4.62 / 0.3048).toFixed(3), 'ft']);
 });
 
 test('a speed that reaches down to nothing is given as an upper bound, not with an interval around it', async () => {

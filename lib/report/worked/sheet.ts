@@ -28,6 +28,9 @@ export interface Sheet {
   end: (name: ResultName, value: number) => void;
 }
 
+/** «of A» is not broken over two lines. */
+const bound = (what: string): string => what.replace(/ ([AB])\b/g, '\u00a0$1');
+
 export function newSheet(): Sheet {
   const chapters: Chapter[] = [];
   let count = 0;
@@ -37,7 +40,9 @@ export function newSheet(): Sheet {
     seats: { A: [], B: [] },
     begin: (title) => void chapters.push({ title, steps: [] }),
     line: (what, formula, numbers, answer) =>
-      void chapters.at(-1)?.steps.push({ number: String(++count), what, formula, numbers: [numbers].flat(), answer }),
+      void chapters
+        .at(-1)
+        ?.steps.push({ number: String(++count), what: bound(what), formula, numbers: [numbers].flat(), answer }),
     end: (name, value) => void (sheet.ends[name] = value),
   };
   return sheet;

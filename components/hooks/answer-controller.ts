@@ -2,7 +2,7 @@ import type { CaseFile } from '@/lib/casefile/schema';
 import type { Solve, WorkerPool } from '@/lib/entry/worker-pool';
 import type { Outcome } from '@/lib/solve-case';
 import type { Session } from '@/lib/session/session';
-import type { Answer } from './use-answer';
+import type { Answer } from './answer';
 
 /** Draws while a gesture is under way: coarse, and said to be. */
 const LIVE_DRAWS = 2048;

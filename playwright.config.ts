@@ -24,6 +24,7 @@ export default defineConfig({
   retries: 0,
   forbidOnly: env.CI !== undefined,
   timeout: 60_000,
+  expect: { timeout: 10_000 },
   reporter: 'list',
   use: {
     baseURL,

@@ -19,8 +19,8 @@ async function begun(page: Page, title: string): Promise<OpenCase> {
 test('the list shows the examples, marked, and the five standing cautions', async ({ page }) => {
   const desk = new CaseDesk(page);
   await desk.open();
-  await expect(desk.row('Angled contact at a junction')).toContainText('example');
-  await expect(desk.row('Contact in a queue of traffic')).toContainText('example');
+  for (const title of ['Angled contact at a junction', 'Contact in a queue of traffic'])
+    await expect(desk.row(title).filter({ hasText: 'example' })).toHaveCount(1);
   await expect(desk.cautions()).toHaveCount(5);
   await expect(desk.cautions().last()).toContainText('No conclusion about injury');
 });
@@ -218,3 +218,22 @@ for (const scheme of ['light', 'dark'] as const)
     await open.visit('junction');
     expect((await new AxeBuilder({ page }).include('header').analyze()).violations).toEqual([]);
   });
+
+test('the report and the list show what was changed the moment before', async ({ page }) => {
+  const open = await begun(page, 'A moment before');
+  await open.title().fill('Changed just now');
+  await page.getByRole('link', { name: 'Report', exact: true }).click();
+  await page.waitForURL(/\/report$/);
+  await expect(page.getByText('Changed just now').first()).toBeVisible();
+});
+
+test('a case that was deleted elsewhere can be restored, or kept as a new one', async ({ page, request }) => {
+  const open = await begun(page, 'Deleted elsewhere');
+  await request.delete(`/api/cases/${open.id()}`);
+  await open.rename('Drawn on');
+  await expect(open.notice()).toContainText('This case was deleted elsewhere');
+  await open.answer('Restore the case');
+  await open.saved();
+  await page.reload();
+  await expect(open.title()).toHaveValue('Drawn on');
+});

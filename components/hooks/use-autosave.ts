@@ -2,6 +2,7 @@
 import { useEffect, useState } from 'react';
 import { useStore } from 'zustand';
 import { useSessionStore } from '@/components/hooks/use-session';
+import type { Issue } from '@/lib/casefile/issue';
 import type { CaseFile } from '@/lib/casefile/schema';
 import { Autosave, type SaveState, type SaveWorld } from '@/lib/session/autosave';
 import { copyKey, reopenCopies } from '@/lib/session/kept-copies';
@@ -20,7 +21,9 @@ export interface Saving {
   apart: readonly KeptApart[];
   /** Whether changes kept by this browser were put back when the case was opened. */
   putBack: boolean;
-  /** The user has read what became of kept copies. */
+  /** Why a choice of the user could not be followed. */
+  trouble: readonly Issue[];
+  /** The user has read what became of kept copies, or of a choice. */
   closeNotes: () => void;
   /** Resolves when what can be saved is saved. */
   flush: () => Promise<void>;
@@ -42,6 +45,7 @@ export function useAutosave(id: string, revision: number): Saving {
   const save = useStore(autosave.state, (s) => s.save);
   const [apart, setApart] = useState<readonly KeptApart[]>([]);
   const [putBack, setPutBack] = useState(false);
+  const [trouble, setTrouble] = useState<readonly Issue[]>([]);
 
   useEffect(() => {
     const letGo = holdLock(key);
@@ -65,7 +69,9 @@ export function useAutosave(id: string, revision: number): Saving {
     save,
     apart,
     putBack,
+    trouble,
     closeNotes: () => {
+      setTrouble([]);
       setApart([]);
       setPutBack(false);
     },
@@ -74,12 +80,14 @@ export function useAutosave(id: string, revision: number): Saving {
     keepMine: async () => {
       const { casefile } = session.getState();
       const kept = await keepNewCase({ ...casefile, title: keptTitle(casefile) });
-      if (!kept.ok) return;
+      if (!kept.ok) return setTrouble(kept.issues);
       autosave.abandon();
       location.assign(`/cases/${kept.id}`);
     },
     restore: async () => {
-      if ((await restoreCase(id)).length === 0) await autosave.restored();
+      const issues = await restoreCase(id);
+      setTrouble(issues);
+      if (issues.length === 0) await autosave.restored();
     },
   };
 }

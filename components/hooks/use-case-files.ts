@@ -3,7 +3,7 @@ import { useEffect, useState } from 'react';
 import type { Issue } from '@/lib/casefile/issue';
 import { emptyCase } from '@/lib/casefile/defaults';
 import type { CaseFile } from '@/lib/casefile/schema';
-import { type Kept, keepFile, keepNewCase } from './case-requests';
+import { type Kept, UNREACHABLE, fetchCase, keepFile, keepNewCase } from './case-requests';
 
 export interface CaseFiles {
   /** What was refused last, until it is closed. */
@@ -14,6 +14,8 @@ export interface CaseFiles {
   openFile: (file: File) => Promise<void>;
   create: () => Promise<void>;
   duplicate: (casefile: CaseFile) => Promise<void>;
+  /** As duplicate, of the newest revision that the server has. */
+  duplicateKept: (id: string) => Promise<void>;
 }
 
 /**
@@ -39,9 +41,16 @@ export function useCaseFiles(before: () => Promise<void> = async () => {}): Case
     over,
     openFile,
     create: () => goTo('A new case', () => keepNewCase(emptyCase())),
-    duplicate: (casefile) => goTo('The copy', () => keepNewCase({ ...casefile, title: `${casefile.title} (copy)` })),
+    duplicate: (casefile) => goTo('The copy', () => keepCopy(casefile)),
+    duplicateKept: (id) =>
+      goTo('The copy', async () => {
+        const newest = await fetchCase(id);
+        return newest ? keepCopy(newest.casefile) : { ok: false, issues: [UNREACHABLE] };
+      }),
   };
 }
+
+const keepCopy = (casefile: CaseFile): Promise<Kept> => keepNewCase({ ...casefile, title: `${casefile.title} (copy)` });
 
 /** Calls back with a file that is dropped anywhere on the window. Whether one is held over it. */
 function useFileDrop(onFile: (file: File) => void): boolean {

@@ -1,7 +1,7 @@
 'use client';
 import { useEffect, useRef, useState } from 'react';
 import { type CaseFiles, useCaseFiles } from '@/components/hooks/use-case-files';
-import { deleteCase, fetchCase, restoreCase } from '@/components/hooks/case-requests';
+import { deleteCase, restoreCase } from '@/components/hooks/case-requests';
 import buttons from '@/components/ui/button.module.css';
 import { Notice } from '@/components/ui/notice';
 import type { Issue } from '@/lib/casefile/issue';
@@ -16,10 +16,6 @@ export function CaseList({ cases }: { cases: readonly CaseRowData[] }) {
   const { deleted, failed, remove, undo, close } = useDeletion();
   const shown = cases.filter(({ id }) => !deleted.some((gone) => gone.id === id));
 
-  const duplicate = async (row: CaseRowData): Promise<void> => {
-    const newest = await fetchCase(row.id);
-    if (newest) await files.duplicate(newest.casefile);
-  };
   return (
     <section aria-labelledby="cases">
       <Heading files={files} />
@@ -51,7 +47,7 @@ export function CaseList({ cases }: { cases: readonly CaseRowData[] }) {
               <CaseRow
                 key={row.id}
                 row={row}
-                onDuplicate={() => void duplicate(row)}
+                onDuplicate={() => void files.duplicateKept(row.id)}
                 onDelete={() => void remove(row)}
               />
             ))}

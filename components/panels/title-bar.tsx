@@ -9,6 +9,7 @@ import { Notice } from '@/components/ui/notice';
 import { FileMenu } from './file-menu';
 import { Refusal } from './refusal';
 import { SaveChoice, SaveStatus } from './save-status';
+import { SavedLink } from './saved-link';
 import { TextInPlace } from './text-in-place';
 import styles from './title-bar.module.css';
 
@@ -26,9 +27,9 @@ export function TitleBar({ id, revision }: { id: string; revision: number }) {
   return (
     <>
       <div className={styles.bar}>
-        <a className={buttons.quiet} href="/">
+        <SavedLink className={buttons.quiet} href="/" save={saving.flush}>
           Cases
-        </a>
+        </SavedLink>
         <h1 className="visually-hidden">{title}</h1>
         <TextInPlace
           label="Title"
@@ -46,9 +47,9 @@ export function TitleBar({ id, revision }: { id: string; revision: number }) {
         <SaveStatus save={saving.save} />
         <History />
         <FileMenu files={files} />
-        <a className={buttons.button} href={`/cases/${id}/report`}>
+        <SavedLink className={buttons.button} href={`/cases/${id}/report`} save={saving.flush}>
           Report
-        </a>
+        </SavedLink>
       </div>
       <SaveChoice saving={saving} />
       <Notices saving={saving} files={files} />
@@ -93,6 +94,9 @@ function Notices({ saving, files }: { saving: Saving; files: ReturnType<typeof u
   return (
     <div className={styles.notices}>
       {files.over && <Notice tone="plain">Drop a case file to open it as a case of its own.</Notice>}
+      {saving.trouble.length > 0 && (
+        <Refusal refused={{ what: 'What you chose', issues: saving.trouble }} onClose={saving.closeNotes} />
+      )}
       {files.refused && <Refusal refused={files.refused} onClose={files.close} />}
       {saving.save.kind === 'refused' && (
         <Notice tone="refused">

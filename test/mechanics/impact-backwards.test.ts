@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { ImpactAfter, ImpactBefore } from '@/lib/mechanics/impact';
 import {
@@ -6,6 +6,7 @@ import {
   type ImpactState,
   LEAST_RESTITUTION,
   REASONS,
+  type Reason,
   emptyAnswer,
   solveDirections,
   solveRestitution,
@@ -18,7 +19,7 @@ const RUNS = { seed: 20261201, numRuns: 1000 };
 /** About 10 degrees: below it the two speeds are nearly in line and rounding is magnified without limit. */
 const CROSSING = 0.17;
 
-const forPossible = (law: (before: ImpactBefore, after: ImpactAfter, state: ImpactState) => void): void =>
+const expectOfPossible = (law: (before: ImpactBefore, after: ImpactAfter, state: ImpactState) => void): void =>
   fc.assert(
     fc.property(impacts, (before) => {
       const { after, reason } = forward(before);
@@ -55,7 +56,7 @@ describe('backward of forward is the start, to 1e-10', () => {
     ['measured', (w: number) => w],
     ['not measured', () => NaN],
   ])('directions, yaw rates after contact %s', (_, seen) =>
-    forPossible((before, after, state) => {
+    expectOfPossible((before, after, state) => {
       const between = Math.abs(sinBetween(state));
       fc.pre(between > CROSSING);
       state.A.wMeasured = seen(state.A.wMeasured);
@@ -72,7 +73,7 @@ describe('backward of forward is the start, to 1e-10', () => {
   );
 
   test('restitution', () =>
-    forPossible((before, after, state) => {
+    expectOfPossible((before, after, state) => {
       fc.pre(before.e >= LEAST_RESTITUTION && -after.unAfter > 1e-3);
       const { answer, reason } = byRestitution(state);
       expect(reason).toBeNull();
@@ -85,7 +86,7 @@ describe('laws of the answer', () => {
   const solveBoth = (state: ImpactState) => [byDirections(state), byRestitution(state)];
 
   test('momentum is kept; angular momentum with the predicted yaw rates', () =>
-    forPossible((_, __, state) => {
+    expectOfPossible((_, __, state) => {
       fc.pre(Math.abs(sinBetween(state)) > CROSSING && state.e >= LEAST_RESTITUTION);
       // Wrong evidence on purpose: the laws must hold for whatever is answered.
       state.A.vx *= 1.2;
@@ -108,7 +109,7 @@ describe('laws of the answer', () => {
     }));
 
   test('the energy lost is that of motion, where the yaw rates are those that the impulse predicts', () =>
-    forPossible((_, __, state) => {
+    expectOfPossible((_, __, state) => {
       fc.pre(Math.abs(sinBetween(state)) > CROSSING && state.e >= LEAST_RESTITUTION);
       const predicted = { ...state, A: { ...state.A, wMeasured: NaN }, B: { ...state.B, wMeasured: NaN } };
       for (const { answer, reason } of [byDirections(predicted), byRestitution(state)]) {
@@ -162,7 +163,7 @@ describe('where the scene lies, and which vehicle is called A, does not matter',
   });
 
   test.each(both)('%s: turned and moved', (_, solve) =>
-    forPossible((before, after, state) => {
+    expectOfPossible((before, after, state) => {
       fc.pre(Math.abs(sinBetween(state)) > CROSSING && before.e >= LEAST_RESTITUTION && after.un > 0.5);
       const angle = before.plane * 1.7 + 0.3;
       const [c, s] = [Math.cos(angle), Math.sin(angle)];
@@ -181,7 +182,7 @@ describe('where the scene lies, and which vehicle is called A, does not matter',
   );
 
   test.each(both)('%s: mirrored', (_, solve) =>
-    forPossible((before, after, state) => {
+    expectOfPossible((before, after, state) => {
       fc.pre(Math.abs(sinBetween(state)) > CROSSING && before.e >= LEAST_RESTITUTION && after.un > 0.5);
       const there = changed(
         state,
@@ -195,7 +196,7 @@ describe('where the scene lies, and which vehicle is called A, does not matter',
   );
 
   test.each(both)('%s: A and B swapped', (_, solve) =>
-    forPossible((before, after, state) => {
+    expectOfPossible((before, after, state) => {
       fc.pre(Math.abs(sinBetween(state)) > CROSSING && before.e >= LEAST_RESTITUTION && after.un > 0.5);
       const [here, there] = [solve(state).answer, solve({ ...state, A: state.B, B: state.A }).answer];
       expectFigures(figures({ ...there, A: there.B, B: there.A }), figures(here), 1e-8);
@@ -252,7 +253,7 @@ describe('reasons', () => {
     const fast = withA({ wMeasured: 30 }, state({ px: 1.5 }));
     const { answer, reason } = byDirections(fast);
     expect(answer.energyLost).toBeLessThan(0);
-    expect(REASONS.indexOf(reason!)).toBeLessThanOrEqual(REASONS.indexOf('energyGain'));
+    expect(REASONS.indexOf(reason as Reason)).toBeLessThanOrEqual(REASONS.indexOf('energyGain'));
   });
 
   test.each([

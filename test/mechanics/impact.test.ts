@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { ImpactAfter, ImpactBefore } from '@/lib/mechanics/impact';
 import { between, forward, impacts, kinetic, mirrored, moved, swapped } from '../support/random-impacts';
@@ -6,7 +6,7 @@ import { between, forward, impacts, kinetic, mirrored, moved, swapped } from '..
 const RUNS = { seed: 20261201, numRuns: 2000 };
 
 /** Checks a law on every random impact that is possible. */
-const forPossible = (law: (before: ImpactBefore, after: ImpactAfter) => void): void =>
+const expectOfPossible = (law: (before: ImpactBefore, after: ImpactAfter) => void): void =>
   fc.assert(
     fc.property(impacts, (before) => {
       const { after, reason } = forward(before);
@@ -54,7 +54,7 @@ const scalesOf = (before: ImpactBefore, after: ImpactAfter) => {
 
 describe('laws of every possible impact', () => {
   test('momentum is kept', () =>
-    forPossible(({ A, B }, after) => {
+    expectOfPossible(({ A, B }, after) => {
       const scale = (A.m + B.m) * 50;
       expect(Math.abs(A.m * (after.A.vx - A.vx) + B.m * (after.B.vx - B.vx))).toBeLessThan(1e-12 * scale);
       expect(Math.abs(A.m * (after.A.vy - A.vy) + B.m * (after.B.vy - B.vy))).toBeLessThan(1e-12 * scale);
@@ -78,7 +78,7 @@ describe('laws of every possible impact', () => {
   });
 
   test("kinetic energy never grows, and its loss is J . (u + u')/2", () =>
-    forPossible(({ A, B }, after) => {
+    expectOfPossible(({ A, B }, after) => {
       const before = kinetic(A.m, A.I, A) + kinetic(B.m, B.I, B);
       const lost = before - kinetic(A.m, A.I, after.A) - kinetic(B.m, B.I, after.B);
       expect(Math.abs(lost - after.energyLost)).toBeLessThan(1e-11 * before);
@@ -87,13 +87,13 @@ describe('laws of every possible impact', () => {
     }));
 
   test('the bodies part at e times the closing speed, and friction stays within its cone', () =>
-    forPossible((before, after) => {
+    expectOfPossible((before, after) => {
       expect(Math.abs(after.unAfter + before.e * after.un)).toBeLessThan(1e-9 * speedScale(before));
       expect(Math.abs(after.Jt)).toBeLessThanOrEqual(before.f * after.Jn * (1 + 1e-9) + 1e-9);
     }));
 
   test('the velocities at the contact point change as the inverse masses say', () =>
-    forPossible(({ A, B, px, py, plane }, after) => {
+    expectOfPossible(({ A, B, px, py, plane }, after) => {
       const at = (b: { x: number; y: number }, v: { vx: number; vy: number; w: number }) => [
         v.vx - v.w * (py - b.y),
         v.vy + v.w * (px - b.x),
@@ -132,7 +132,7 @@ describe('where the scene lies, and which vehicle is called A, does not matter',
   });
 
   test('mirrored: everything along the plane changes its sign, and so do the yaw rates', () =>
-    forPossible((before, after) => {
+    expectOfPossible((before, after) => {
       const there = forward(mirrored(before)).after;
       const expected = { ...invariants(after), Jt: -after.Jt, ut: -after.ut, utAfter: -after.utAfter };
       expectSame(invariants(there), expected, scalesOf(before, after));
@@ -141,7 +141,7 @@ describe('where the scene lies, and which vehicle is called A, does not matter',
     }));
 
   test('A and B swapped', () =>
-    forPossible((before, after) => {
+    expectOfPossible((before, after) => {
       const there = forward(swapped(before)).after;
       expectSame(invariants(there), invariants(after), scalesOf(before, after));
       expect(Math.abs(there.A.vx - after.B.vx)).toBeLessThan(1e-8 * speedScale(before));
@@ -149,7 +149,7 @@ describe('where the scene lies, and which vehicle is called A, does not matter',
     }));
 
   test('the plane is a line: half a turn more is the same plane', () =>
-    forPossible((before, after) => {
+    expectOfPossible((before, after) => {
       const there = forward({ ...before, plane: before.plane + Math.PI }).after;
       expectSame(invariants(there), invariants(after), scalesOf(before, after));
     }));

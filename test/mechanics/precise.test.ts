@@ -1,5 +1,5 @@
 import type { Decimal } from 'decimal.js';
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { expect, test } from 'vitest';
 import type { ImpactState } from '@/lib/mechanics/impact-backwards';
 import { byDirections, byRestitution, evidenceOf, sinBetween } from '../support/backward';
@@ -46,7 +46,7 @@ test('forward', () => {
   );
 });
 
-const fromPossible = (law: (state: ImpactState, un: number) => void): void =>
+const expectFromPossible = (law: (state: ImpactState, un: number) => void): void =>
   fc.assert(
     fc.property(impacts, (before) => {
       const { after, reason } = forward(before);
@@ -62,14 +62,14 @@ const fromPossible = (law: (state: ImpactState, un: number) => void): void =>
   );
 
 test('backward by directions', () =>
-  fromPossible((state, un) => {
+  expectFromPossible((state, un) => {
     const between = Math.abs(sinBetween(state));
     fc.pre(between > 0.17);
     expectPrecise(byDirections(state).answer, preciseDirections(state), LIMIT / between / Math.min(1, un));
   }));
 
 test('backward by restitution', () =>
-  fromPossible((state) => {
+  expectFromPossible((state) => {
     fc.pre(state.e >= 0.05);
     expectPrecise(byRestitution(state).answer, preciseRestitution(state), LIMIT / state.e);
   }));

@@ -1,5 +1,5 @@
-import { Decimal } from 'decimal.js';
-import fc from 'fast-check';
+import type { Decimal } from 'decimal.js';
+import * as fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { atan, atan2, cos, exp, hypot, log, sin, tan } from '@/lib/numerics/elementary';
 import { Precise, precise, ulpsFrom } from '../support/precise';

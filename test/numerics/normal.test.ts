@@ -22,12 +22,12 @@ test('cumulative: relative error below 1e-13 from -37 to 8', () => {
 
 test('quantile: the share below it is p, to 1e-14 of z, from 1e-290 to 1 - 1e-15', () => {
   // A relative error d of z shows as a relative error d z density(z) / p in the share.
-  for (let exponent = -290; exponent < -0.4; exponent += 1.7) checkQuantile(10 ** exponent);
-  for (let p = 0.01; p < 1; p += 0.0093) checkQuantile(p);
-  for (let exponent = -15; exponent < -1; exponent += 0.7) checkQuantile(1 - 10 ** exponent);
+  for (let exponent = -290; exponent < -0.4; exponent += 1.7) expectQuantile(10 ** exponent);
+  for (let p = 0.01; p < 1; p += 0.0093) expectQuantile(p);
+  for (let exponent = -15; exponent < -1; exponent += 0.7) expectQuantile(1 - 10 ** exponent);
 });
 
-function checkQuantile(p: number): void {
+function expectQuantile(p: number): void {
   const z = normalQuantile(p);
   const share = preciseNormalCumulative(precise(z));
   const density = precise(z)

@@ -15,7 +15,7 @@ const MEAN = 4 / Math.sqrt(M);
 const SPREAD = 4 / Math.sqrt(2 * M);
 
 const over = (n: number, f: (k: number) => number): Float64Array => Float64Array.from({ length: n }, (_, k) => f(k));
-const near = (found: number, expected: number, tolerance: number): void =>
+const expectNear = (found: number, expected: number, tolerance: number): void =>
   expect(Math.abs(found - expected)).toBeLessThan(tolerance);
 
 describe('JCGM 101:2008, 9.2: additive model of four inputs', () => {
@@ -23,21 +23,21 @@ describe('JCGM 101:2008, 9.2: additive model of four inputs', () => {
 
   test('9.2.2 four normal: u 2.0, 95 % within 3.92', () => {
     const found = summarise(sum(...['a', 'b', 'c', 'd'].map((name) => normal(M, SEED, name, 0, 1))), 0.95);
-    near(found.mean, 0, 2 * MEAN);
-    near(found.sd, 2, 2 * SPREAD);
+    expectNear(found.mean, 0, 2 * MEAN);
+    expectNear(found.sd, 2, 2 * SPREAD);
     for (const [low, high] of [[found.low, found.high], found.shortest]) {
-      near(high - low, 2 * 3.92, 0.03);
-      near(low, -3.92, 0.06);
+      expectNear(high - low, 2 * 3.92, 0.03);
+      expectNear(low, -3.92, 0.06);
     }
   });
 
   test('9.2.3 four rectangular: u 2.0, 95 % within 3.88 (exactly 2 sqrt 3 (2 - (3/5)^(1/4)) = 3.87941)', () => {
     const half = Math.sqrt(3);
     const found = summarise(sum(...['a', 'b', 'c', 'd'].map((name) => rectangular(M, SEED, name, -half, half))), 0.95);
-    near(found.sd, 2, 2 * SPREAD);
-    near(found.high, 2 * half * (2 - (3 / 5) ** 0.25), 0.016);
-    near(found.low, -3.87941, 0.016);
-    near(found.shortest[1] - found.shortest[0], 2 * 3.88, 0.03);
+    expectNear(found.sd, 2, 2 * SPREAD);
+    expectNear(found.high, 2 * half * (2 - (3 / 5) ** 0.25), 0.016);
+    expectNear(found.low, -3.87941, 0.016);
+    expectNear(found.shortest[1] - found.shortest[0], 2 * 3.88, 0.03);
   });
 
   test('9.2.4 one of the rectangular inputs ten times as wide: u 10.1, 95 % within 17.0, not 19.9', () => {
@@ -49,9 +49,9 @@ describe('JCGM 101:2008, 9.2: additive model of four inputs', () => {
       ),
       0.95,
     );
-    near(found.sd, Math.sqrt(103), 10 * SPREAD);
-    near(found.high, 17.02, 0.05);
-    near(found.low, -17.02, 0.05);
+    expectNear(found.sd, Math.sqrt(103), 10 * SPREAD);
+    expectNear(found.high, 17.02, 0.05);
+    expectNear(found.low, -17.02, 0.05);
   });
 });
 
@@ -65,11 +65,11 @@ test('JCGM 101:2008, 9.3: calibration of a mass; 1.2341 mg and 0.0754 mg (first 
     over(M, (k) => (reference[k] + added[k]) * (1 + (air[k] - 1.2) * (1 / weight[k] - 1 / standard[k])) - 100_000),
     0.95,
   );
-  near(found.mean, 1.234, 0.00005 + 0.08 * MEAN);
-  near(found.sd, 0.0754, 0.00005 + 0.08 * SPREAD);
+  expectNear(found.mean, 1.234, 0.00005 + 0.08 * MEAN);
+  expectNear(found.sd, 0.0754, 0.00005 + 0.08 * SPREAD);
   // Recomputed from the same inputs by another program: 1.0848 and 1.3837.
-  near(found.low, 1.0848, 0.001);
-  near(found.high, 1.3837, 0.001);
+  expectNear(found.low, 1.0848, 0.001);
+  expectNear(found.high, 1.3837, 0.001);
 });
 
 describe('JCGM 101:2008, 9.4: comparison loss in microwave power meter calibration', () => {
@@ -95,12 +95,12 @@ describe('JCGM 101:2008, 9.4: comparison loss in microwave power meter calibrati
   ])('x1 = %d, correlation %d', (x1, r, mean, sd, shortest) => {
     const found = loss(x1, r);
     const exact = Math.sqrt(4 * U * U * x1 * x1 + 4 * U ** 4 * (1 + r * r));
-    near(found.mean, x1 * x1 + 2 * U * U, exact * MEAN);
-    near(exact * 1e6, sd, 0.55);
-    near(found.mean * 1e6, mean, 0.5 + 500 * MEAN);
-    near(found.sd, exact, 3 * exact * SPREAD); // its kurtosis is up to 15
-    near((found.shortest[1] - found.shortest[0]) * 1e6, shortest[1] - shortest[0], 0.5 + 0.01 * sd);
-    near(found.shortest[0] * 1e6, shortest[0], 0.5 + 0.08 * sd);
+    expectNear(found.mean, x1 * x1 + 2 * U * U, exact * MEAN);
+    expectNear(exact * 1e6, sd, 0.55);
+    expectNear(found.mean * 1e6, mean, 0.5 + 500 * MEAN);
+    expectNear(found.sd, exact, 3 * exact * SPREAD); // its kurtosis is up to 15
+    expectNear((found.shortest[1] - found.shortest[0]) * 1e6, shortest[1] - shortest[0], 0.5 + 0.01 * sd);
+    expectNear(found.shortest[0] * 1e6, shortest[0], 0.5 + 0.08 * sd);
   });
 });
 
@@ -129,11 +129,11 @@ describe('gauge block', () => {
       ),
       0.99,
     );
-    near(found.mean, 838, 0.5 + 36 * (4 / Math.sqrt(n)));
-    near(found.sd, 35.81, 0.1 + 36 * (4 / Math.sqrt(2 * n)));
-    near(found.sd, 36, 0.5);
-    near(found.low, 744, 1.5); // printed 745; 744 recomputed: an end of 99 % stands on 0.5 % of the draws
-    near(found.high, 932, 1.5);
+    expectNear(found.mean, 838, 0.5 + 36 * (4 / Math.sqrt(n)));
+    expectNear(found.sd, 35.81, 0.1 + 36 * (4 / Math.sqrt(2 * n)));
+    expectNear(found.sd, 36, 0.5);
+    expectNear(found.low, 744, 1.5); // printed 745; 744 recomputed: an end of 99 % stands on 0.5 % of the draws
+    expectNear(found.high, 932, 1.5);
   });
 
   test('JCGM 100:2008 (GUM), H.1: 50 000 838 nm; u 32 nm to first order, 34 nm to second', () => {
@@ -145,9 +145,9 @@ describe('gauge block', () => {
       3.9,
       50_000_623 * 0.1 * standardUncertainty(0, { shape: 'rectangular', low: -1e-6, high: 1e-6 }),
     ];
-    near(budget[1], 16.599, 6e-4);
-    near(budget[5], 2.88679, 6e-6);
-    near(Math.sqrt(budget.reduce((sum, u) => sum + u * u, 0)), 31.66, 6e-3);
+    expectNear(budget[1], 16.599, 6e-4);
+    expectNear(budget[5], 2.88679, 6e-6);
+    expectNear(Math.sqrt(budget.reduce((sum, u) => sum + u * u, 0)), 31.66, 6e-3);
 
     const inputs = [normal(M, SEED, 'ls', 50_000_623, 25), normal(M, SEED, 'd', 215, 9.7)];
     const expansion = rectangular(M, SEED, 'as', 9.5e-6, 13.5e-6);
@@ -161,8 +161,8 @@ describe('gauge block', () => {
       ),
       0.95,
     );
-    near(found.mean, 50_000_838, 0.5);
-    near(found.sd, 33.81, 0.05 + 34 * SPREAD);
+    expectNear(found.mean, 50_000_838, 0.5);
+    expectNear(found.sd, 33.81, 0.05 + 34 * SPREAD);
   });
 });
 
@@ -177,8 +177,8 @@ describe('GUM-5:2026 (JCGM, DOI 10.59161/YNLY8209)', () => {
       over(M, (k) => 12 * H[k] + 6 * C[k] + 6 * O[k]),
       0.95,
     );
-    near(found.mean, 180.1557, 0.00005 + 0.004 * MEAN + 0.0001);
-    near(found.sd, 0.0038, 0.00005 + 0.004 * SPREAD);
+    expectNear(found.mean, 180.1557, 0.00005 + 0.004 * MEAN + 0.0001);
+    expectNear(found.sd, 0.0038, 0.00005 + 0.004 * SPREAD);
   });
 
   test('example 14, decay: 10.810, u 0.054', () => {
@@ -187,8 +187,8 @@ describe('GUM-5:2026 (JCGM, DOI 10.59161/YNLY8209)', () => {
       over(M, (k) => start[k] * Math.exp((-2.73 * Math.LN2) / halfLife[k])),
       0.95,
     );
-    near(found.median, 10.81, 0.001);
-    near(found.sd, 0.054, 0.0006);
+    expectNear(found.median, 10.81, 0.001);
+    expectNear(found.sd, 0.054, 0.0006);
   });
 });
 
@@ -203,10 +203,10 @@ describe('skewed and awkward', () => {
       over(M, (k) => (top[k] * rate[k] * (2217 - 1180)) / (below[k] * (2217 - 810))),
       0.95,
     );
-    near(found.mean, 5.82, 0.006);
-    near(found.sd, 1.11, 0.011);
-    near(found.low, 4.05, 0.01);
-    near(found.high, 8.39, 0.02);
+    expectNear(found.mean, 5.82, 0.006);
+    expectNear(found.sd, 1.11, 0.011);
+    expectNear(found.low, 4.05, 0.01);
+    expectNear(found.high, 8.39, 0.02);
   });
 
   test('NIST TN 1900, example E13: 1.7266e-5, u 1.76e-6', () => {
@@ -219,17 +219,17 @@ describe('skewed and awkward', () => {
       over(M, (k) => (hot[k] - cold[k]) / (cold[k] * rise[k])),
       0.95,
     );
-    near(found.mean, 1.7266e-5, 1.8e-6 * MEAN + 1e-9);
-    near(found.sd, 1.76e-6, 0.006e-6);
+    expectNear(found.mean, 1.7266e-5, 1.8e-6 * MEAN + 1e-9);
+    expectNear(found.sd, 1.76e-6, 0.006e-6);
   });
 
   test('y = ln x, x rectangular on 0.1 to 1.1: mean -0.665 (exactly -0.664900), u 0.606, shortest 95 % from ln 0.15 to ln 1.1', () => {
     // suncal, test_NPLlog; the exact mean and interval follow from the density e^y. First order gives -0.511 and 0.481.
     const found = summarise(rectangular(M, SEED, 'x', 0.1, 1.1).map(log), 0.95);
-    near(found.mean, -0.6649, 0.61 * MEAN);
-    near(found.sd, 0.606, 0.0005 + 0.61 * SPREAD);
-    near(found.shortest[0], Math.log(0.15), 0.012);
-    near(found.shortest[1], Math.log(1.1), 1e-4);
+    expectNear(found.mean, -0.6649, 0.61 * MEAN);
+    expectNear(found.sd, 0.606, 0.0005 + 0.61 * SPREAD);
+    expectNear(found.shortest[0], Math.log(0.15), 0.012);
+    expectNear(found.shortest[1], Math.log(1.1), 1e-4);
   });
 
   test('JCGM 102, polar form of a short vector, like the direction of a small momentum: size 0.013, u 0.007; phase u 1.744', () => {
@@ -239,9 +239,9 @@ describe('skewed and awkward', () => {
       over(M, (k) => hypot(re[k], im[k])),
       0.95,
     );
-    near(size.mean, 0.013, 0.0005);
-    near(size.sd, 0.007, 0.0005);
-    near(
+    expectNear(size.mean, 0.013, 0.0005);
+    expectNear(size.sd, 0.007, 0.0005);
+    expectNear(
       summarise(
         over(M, (k) => atan2(im[k], re[k])),
         0.95,

@@ -27,7 +27,12 @@ export const leaves = (speed: number, direction: number, yawRate: number | null 
 });
 
 /** Slides to rest over a distance (m) with a friction. */
-export const slides = (distance: number, friction: number, direction: number, yawRate: number | null = null): Departure => ({
+export const slides = (
+  distance: number,
+  friction: number,
+  direction: number,
+  yawRate: number | null = null,
+): Departure => ({
   kind: 'legs',
   direction: q(direction),
   yawRate: yawRate === null ? null : q(yawRate),

@@ -66,7 +66,7 @@ export function plainSupport(casefile: CaseFile, path: string) {
 /** Speed at separation, m/s, by work and energy back from rest; null where a leg cannot have been. */
 function separationSpeed(departure: LegsDeparture, at: Reading, prefix: string): number | null {
   let energy = at(`${prefix}.endSpeed`) ** 2 / 2;
-  for (const index of departure.legs.map((_, i) => i).reverse()) {
+  for (const index of departure.legs.map((_, i) => i).toReversed()) {
     const leg = (key: string): number => at(`${prefix}.legs.${index}.${key}`);
     const slope = Math.atan(leg('grade'));
     energy += leg('distance') * GRAVITY * (leg('friction') * leg('share') * Math.cos(slope) + Math.sin(slope));

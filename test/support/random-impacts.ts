@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { type ImpactAfter, type ImpactBefore, type MovingBody, emptyAfter, solveImpact } from '@/lib/mechanics/impact';
 import type { Reason } from '@/lib/mechanics/reasons';
 

@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { DIMENSIONS, type Dimension, type UnitSystem } from '@/lib/units/dimension';
 import { formatValue } from '@/lib/units/format';

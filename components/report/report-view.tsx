@@ -7,20 +7,21 @@ import styles from './report.module.css';
 /** The report as sheets of paper on the screen, and as pages in print. */
 export function ReportView({ report, id }: { report: Report; id: string }) {
   const { header, sections } = report;
+  const sheets = sheetsOf(sections);
   return (
     <div className={styles.desk}>
       <ReportToolbar id={id} paper={header.paper} />
       <PageEdges edges={header.edges} />
       <main className={styles.report} data-report data-paper={header.paper}>
-        {sheetsOf(sections).map((sheet, k) => (
+        {sheets.map((sheet, k) => (
           <div key={sheet[0].id} className={styles.sheet} data-own-page={sheet[0].ownPage || undefined}>
             {k === 0 && <TitleBlock header={header} />}
             {sheet.map((section) => (
               <SectionView key={section.id} section={section} number={sections.indexOf(section) + 1} />
             ))}
+            {k === sheets.length - 1 && <p className={styles.end}>End of report</p>}
           </div>
         ))}
-        <p className={styles.end}>End of report</p>
       </main>
     </div>
   );

@@ -10,8 +10,8 @@ export const unitText = (dimension: Dimension, units: UnitSystem): string => uni
 
 /** A value that was entered in the units shown has no more digits than this; one converted from others has. */
 const ENTERED_DIGITS = 6;
-/** A converted value without a spread is printed to this part of itself; with one, to this part of its spread. */
-const PART_OF_VALUE = 5e-5;
+/** A converted value without a spread is printed to within this; with one, to within this part of its spread. */
+const CONVERTED = 5e-4;
 const PART_OF_SPREAD = 0.02;
 
 /** A stated value as it was entered; one that was entered in other units, rounded well inside its spread (SI, 0: none). */
@@ -19,7 +19,7 @@ export function stated(si: number, dimension: Dimension, units: UnitSystem, u = 
   const entered = formatValue(si, dimension, units);
   if (entered.replace(/\D/g, '').replace(/^0+/, '').length <= ENTERED_DIGITS) return entered;
   const shown = toDisplay(si, dimension, units);
-  const slack = u > 0 ? PART_OF_SPREAD * toDisplay(u, dimension, units) : PART_OF_VALUE * Math.abs(shown);
+  const slack = u > 0 ? PART_OF_SPREAD * toDisplay(u, dimension, units) : CONVERTED;
   const decimals = [0, 1, 2, 3, 4, 5, 6].find((d) => Math.abs(Number(shown.toFixed(d)) - shown) <= slack);
   return formatValue(si, dimension, units, { decimals: decimals ?? ENTERED_DIGITS });
 }

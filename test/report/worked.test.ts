@@ -62,7 +62,7 @@ describe.each(files)('%s', (file) => {
 
 /** The figure or pair of an answer, without its symbol and unit. */
 function answerOf({ answer }: Step): Reckoned {
-  const figures = (answer.includes(' = ') ? answer.split(' = ')[1] : answer).replace(/ ".*$/, '').replace('°', '');
+  const figures = (answer.includes(' = ') ? answer.split(' = ')[1] : answer).replace(/\s?".*$/, '').replace('°', '');
   return reckon(figures);
 }
 

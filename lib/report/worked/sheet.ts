@@ -31,6 +31,9 @@ export interface Sheet {
 /** «of A» is not broken over two lines. */
 const bound = (what: string): string => what.replace(/ ([AB])\b/g, '\u00a0$1');
 
+/** Nor is a figure parted from its unit. */
+const withUnit = (answer: string): string => answer.replaceAll(' "', '\u00a0"').replaceAll('" °/s"', '"\u00a0°/s"');
+
 export function newSheet(): Sheet {
   const chapters: Chapter[] = [];
   let count = 0;
@@ -42,7 +45,13 @@ export function newSheet(): Sheet {
     line: (what, formula, numbers, answer) =>
       void chapters
         .at(-1)
-        ?.steps.push({ number: String(++count), what: bound(what), formula, numbers: [numbers].flat(), answer }),
+        ?.steps.push({
+          number: String(++count),
+          what: bound(what),
+          formula,
+          numbers: [numbers].flat(),
+          answer: withUnit(answer),
+        }),
     end: (name, value) => void (sheet.ends[name] = value),
   };
   return sheet;

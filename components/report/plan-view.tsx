@@ -76,7 +76,7 @@ function GridLine({
   );
 }
 
-const signed = (metres: number): string => `${String(Number(metres.toFixed(2))).replace('-', '−')}`;
+const signed = (metres: number): string => String(Number(metres.toFixed(2))).replace('-', '−');
 
 const path = (points: Point[]): string => points.map(([x, y]) => `${x.toFixed(2)},${y.toFixed(2)}`).join(' ');
 

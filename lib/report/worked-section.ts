@@ -31,7 +31,7 @@ export function workedSection(casefile: CaseFile, result: Result): Section | nul
         text:
           'Every line can be checked by hand: the formula, the numbers put in, the answer. SI units throughout. ' +
           `Figures are carried unrounded and printed to ${WORKED_DIGITS} significant digits, so a hand check with the printed figures may differ in the last of them. ` +
-          `${agreement(largestDifference(sheet, result.central))}`,
+          agreement(largestDifference(sheet, result.central)),
       },
       { kind: 'symbols', rows: SYMBOLS },
       { kind: 'steps', chapters: sheet.chapters },

@@ -21,9 +21,6 @@ export function inner(x: number): string {
   return written.startsWith('-') || written.includes('×') ? `(${written})` : written;
 }
 
-/** «+ 3» or «- 3». */
-export const plus = (x: number): string => (figure(x).startsWith('-') ? `- ${figure(-x)}` : `+ ${figure(x)}`);
-
 /** «- 3», or «+ 3» for a negative number. */
 export const minus = (x: number): string => (figure(x).startsWith('-') ? `+ ${figure(-x)}` : `- ${figure(x)}`);
 

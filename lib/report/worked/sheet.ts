@@ -43,15 +43,13 @@ export function newSheet(): Sheet {
     seats: { A: [], B: [] },
     begin: (title) => void chapters.push({ title, steps: [] }),
     line: (what, formula, numbers, answer) =>
-      void chapters
-        .at(-1)
-        ?.steps.push({
-          number: String(++count),
-          what: bound(what),
-          formula,
-          numbers: [numbers].flat(),
-          answer: withUnit(answer),
-        }),
+      void chapters.at(-1)?.steps.push({
+        number: String(++count),
+        what: bound(what),
+        formula,
+        numbers: [numbers].flat(),
+        answer: withUnit(answer),
+      }),
     end: (name, value) => void (sheet.ends[name] = value),
   };
   return sheet;

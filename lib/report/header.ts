@@ -12,6 +12,7 @@ export interface Issue {
 }
 
 const HASH_PREFIX = 12;
+const EDGE_LETTERS = 60;
 
 export function headerOf(casefile: CaseFile, result: Result, issue: Issue): Header {
   const { title, reference, vehicles } = casefile;
@@ -23,7 +24,7 @@ export function headerOf(casefile: CaseFile, result: Result, issue: Issue): Head
     ['Engine', result.engine],
     ['Case hash', `${result.case} (SHA-256)`],
   ];
-  const name = [title, reference].filter(Boolean).join(' · ');
+  const name = [shortened(title), reference].filter(Boolean).join(' · ');
   const revision = issue.revision === undefined ? '' : ` · revision ${issue.revision}`;
   return {
     title,
@@ -31,9 +32,13 @@ export function headerOf(casefile: CaseFile, result: Result, issue: Issue): Head
     reference: reference ?? '',
     rows,
     paper: issue.paper ?? casefile.display?.paper ?? 'A4',
-    edges: { case: name + revision, hash: `case ${result.case.slice(0, HASH_PREFIX)}`, engine: result.engine },
+    edges: { case: name + revision, hash: `case\u00a0${result.case.slice(0, HASH_PREFIX)}`, engine: result.engine },
   };
 }
+
+/** A title at the edge of a page keeps to one line. */
+const shortened = (title: string): string =>
+  title.length > EDGE_LETTERS ? `${title.slice(0, EDGE_LETTERS).trimEnd()} …` : title;
 
 /** «revision 3, saved 2026-12-01 09:40 UTC». */
 function standing({ revision, saved }: Issue): string {

@@ -68,7 +68,7 @@ describe('the junction example', () => {
     const text = JSON.stringify(report);
     for (const needed of [solved.result.case, solved.result.engine, '4,000', 'revision 3, saved 2026-12-01 09:30 UTC'])
       expect(text).toContain(needed);
-    expect(report.header.edges.hash).toBe(`case ${solved.result.case.slice(0, 12)}`);
+    expect(report.header.edges.hash).toBe(`case\u00a0${solved.result.case.slice(0, 12)}`);
   });
 
   test('every stated quantity stands in the table of inputs with its source', () => {

@@ -111,7 +111,8 @@ function seats(casefile: CaseFile, id: VehicleId, change: Change, before: number
       'Δv_{seat} = |(Δv_{f} - Δω y, Δv_{l} + Δω x)|',
       [
         `(${figure(change.forward)} - ${inner(turn)} * ${inner(y)},`,
-        `${figure(change.left)} + ${inner(turn)} * ${inner(x)}) = ${pair({ x: forward, y: left })}`,
+        `${figure(change.left)} + ${inner(turn)} * ${inner(x)})`,
+        ` = ${pair({ x: forward, y: left })}`,
       ],
       `Δv_{seat} = ${figure(whole)} "m/s"`,
     );

@@ -1,0 +1,95 @@
+import { type Vec, add, fromBody, scale, unit } from '@/lib/geometry/vector';
+import { outlineOf } from '@/lib/geometry/polygon';
+import type { Bounds } from './view';
+import { boundsOf } from './view';
+
+/** What the board shows, in world metres and radians: plain data that knows neither forms nor pixels. */
+export type Which = 'A' | 'B';
+
+export interface ScenePose {
+  x: number;
+  y: number;
+  heading: number;
+}
+
+export interface SceneVehicle {
+  which: Which;
+  name: string;
+  pose: ScenePose;
+  body: { length: number; width: number; frontOverhang: number; wheelbase: number; track: number; frontAxleToMassCentre: number };
+}
+
+/** A direction with the half width of its fan (two standard uncertainties). */
+export interface SceneDirection {
+  angle: number;
+  fan: number;
+}
+
+export interface SceneTravel {
+  direction: SceneDirection;
+  legs: number[];
+}
+
+export interface Scene {
+  vehicles: Record<Which, SceneVehicle>;
+  point: { at: Vec; spread: Vec };
+  /** Direction of the contact plane and of its normal from A into B. */
+  plane: { angle: number; fan: number; normal: number };
+  approach: Record<Which, SceneDirection | null>;
+  travel: Record<Which, SceneTravel | null>;
+  marks: { label: string; points: Vec[] }[];
+  north: number;
+}
+
+export const outlineAt = (vehicle: SceneVehicle, pose: ScenePose = vehicle.pose): Vec[] =>
+  outlineOf(vehicle.body, pose).map(([x, y]): Vec => [x, y]);
+
+/** Distance from the mass centre to the nose, m. */
+export const noseOf = ({ body }: SceneVehicle): number => body.frontAxleToMassCentre + body.frontOverhang;
+
+/** Where the wheels stand, in vehicle axes. */
+export function wheelsOf({ body }: SceneVehicle): Vec[] {
+  const [front, rear] = [body.frontAxleToMassCentre, body.frontAxleToMassCentre - body.wheelbase];
+  const half = body.track / 2;
+  return [[front, half], [front, -half], [rear, half], [rear, -half]];
+}
+
+export const centreOf = (vehicle: SceneVehicle): Vec => [vehicle.pose.x, vehicle.pose.y];
+
+/** The points between which the legs run, from the mass centre at contact to the end of the travel. */
+export function pathOf(scene: Scene, which: Which): Vec[] {
+  const travel = scene.travel[which];
+  const start = centreOf(scene.vehicles[which]);
+  if (!travel) return [start];
+  let done = 0;
+  return [start, ...travel.legs.map((leg) => add(start, scale(unit(travel.direction.angle), (done += leg))))];
+}
+
+/** The pose at the end of the travel, drawn with the heading at contact: legs say how far, not how it turned. */
+export function restPose(scene: Scene, which: Which): ScenePose | null {
+  if (!scene.travel[which]) return null;
+  const [x, y] = pathOf(scene, which).at(-1) as Vec;
+  return { x, y, heading: scene.vehicles[which].pose.heading };
+}
+
+/** Length of the approach arrow, m: a second at the computed speed, within what fits; two metres beyond the tail without one. */
+export const arrowLength = (vehicle: SceneVehicle, speed: number | undefined): number =>
+  vehicle.body.length - noseOf(vehicle) + (speed === undefined ? 2 : Math.min(8, Math.max(1.2, speed)));
+
+/** Where the approach arrow begins. */
+export function approachTail(scene: Scene, which: Which, speed: number | undefined): Vec | null {
+  const direction = scene.approach[which];
+  const vehicle = scene.vehicles[which];
+  return direction && add(centreOf(vehicle), scale(unit(direction.angle), -arrowLength(vehicle, speed)));
+}
+
+/** All that a view should show. */
+export function sceneBounds(scene: Scene): Bounds {
+  const points = (['A', 'B'] as const).flatMap((which): Vec[] => {
+    const vehicle = scene.vehicles[which];
+    const rest = restPose(scene, which);
+    const tail = approachTail(scene, which, undefined);
+    return [...outlineAt(vehicle), fromBody([noseOf(vehicle) + 1, 0], vehicle.pose), ...(rest ? outlineAt(vehicle, rest) : []), ...(tail ? [tail] : [])];
+  });
+  return boundsOf([...points, scene.point.at]);
+}

@@ -1,0 +1,197 @@
+import { defaultDeparture, drawnQuantity } from '@/lib/casefile/defaults';
+import type { Edit } from '@/lib/casefile/edit';
+import type { ThingId } from '@/lib/casefile/fields';
+import type { CaseFile } from '@/lib/casefile/schema';
+import { sceneOf } from '@/lib/casefile/scene-of';
+import { type Vec, add, angleOf, distance, scale, subtract, toDegrees, unit } from '@/lib/geometry/vector';
+import type { Grip } from '@/lib/scene/grip';
+import { type Which, centreOf, pathOf } from '@/lib/scene/scene';
+
+/** Drawn figures are kept to the centimetre and the tenth of a degree: finer than anyone draws. */
+const centimetres = (x: number): number => Math.round(x * 100) / 100;
+const tenths = (degrees: number): number => Math.round(degrees * 10) / 10;
+/** Degrees that a turn clings to while Shift is held. */
+const COARSE_TURN = 5;
+
+/** Into (-180, 180]. */
+export const wrapped = (degrees: number): number => {
+  const turned = degrees - 360 * Math.round(degrees / 360);
+  return turned === -180 ? 180 : turned;
+};
+
+const degreesOf = (v: Vec, coarse: boolean): number => {
+  const exact = toDegrees(angleOf(v));
+  return tenths(wrapped(coarse ? Math.round(exact / COARSE_TURN) * COARSE_TURN : exact));
+};
+
+const value = (path: string, to: number): Edit => ({ do: 'value', path, value: to });
+
+/** A line has no sense: its direction lies in [0, 180). */
+const asLine = (degrees: number): number => tenths(((degrees % 180) + 180) % 180) % 180;
+
+/** Standard uncertainty that a drawn direction gets, deg. */
+const DRAWN_DIRECTION = 3;
+/** Shortest leg that can be drawn, m. */
+const SHORTEST = 0.05;
+
+/**
+ * The edit of the case as it was when the grip was taken, for a pointer that went from one place to another (world, m).
+ * `coarse` lets directions cling to whole steps.
+ */
+export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coarse: boolean): Edit {
+  const by = subtract(to, from);
+  const { impact } = casefile;
+  switch (grip.part) {
+    case 'vehicle': {
+      const at = `impact.${grip.which}`;
+      const { x, y } = impact[grip.which];
+      return { do: 'all', edits: [value(`${at}.x`, centimetres(x.value + by[0])), value(`${at}.y`, centimetres(y.value + by[1]))] };
+    }
+    case 'turn':
+      return value(`impact.${grip.which}.heading`, degreesOf(subtract(to, centre(casefile, grip.which)), coarse));
+    case 'point': {
+      const { x, y } = impact.point;
+      return {
+        do: 'all',
+        edits: [value('impact.point.x', centimetres(x.value + by[0])), value('impact.point.y', centimetres(y.value + by[1]))],
+      };
+    }
+    case 'plane':
+      return value('impact.plane', asLine(degreesOf(subtract(to, [impact.point.x.value, impact.point.y.value]), coarse)));
+    case 'approach':
+      return approachEdit(casefile, grip.which, to, coarse);
+    case 'end':
+      return travelEdit(casefile, grip.which, to, coarse);
+    case 'joint':
+      return jointEdit(casefile, grip.which, grip.leg, to);
+  }
+}
+
+const centre = (casefile: CaseFile, which: Which): Vec => centreOf(sceneOf(casefile).vehicles[which]);
+
+/** The vehicle came from `from` to where it stands. */
+export function approachEdit(casefile: CaseFile, which: Which, from: Vec, coarse: boolean): Edit {
+  const path = `approach.${which}.direction`;
+  const direction = degreesOf(subtract(centre(casefile, which), from), coarse);
+  return casefile.approach[which].direction
+    ? value(path, direction)
+    : { do: 'set', path, to: drawnQuantity(direction, DRAWN_DIRECTION) };
+}
+
+/** The vehicle went from where it stands to `to`: direction and, of the last leg, distance; a first leg where there was none. */
+export function travelEdit(casefile: CaseFile, which: Which, to: Vec, coarse: boolean): Edit {
+  const way = subtract(to, centre(casefile, which));
+  const direction = degreesOf(way, coarse);
+  const departure = casefile.departure[which];
+  const reach = distance(way, [0, 0]);
+  if (departure?.kind !== 'legs')
+    return { do: 'set', path: `departure.${which}`, to: defaultDeparture(direction, centimetres(Math.max(SHORTEST, reach))) };
+  const before = departure.legs.slice(0, -1).reduce((sum, leg) => sum + leg.distance.value, 0);
+  const last = departure.legs.length - 1;
+  return {
+    do: 'all',
+    edits: [
+      value(`departure.${which}.direction`, direction),
+      value(`departure.${which}.legs.${last}.distance`, centimetres(Math.max(SHORTEST, reach - before))),
+    ],
+  };
+}
+
+/** The end of a leg moves along the path; the next leg takes up the difference. */
+function jointEdit(casefile: CaseFile, which: Which, leg: number, to: Vec): Edit {
+  const departure = casefile.departure[which];
+  if (departure?.kind !== 'legs') return { do: 'all', edits: [] };
+  const scene = sceneOf(casefile);
+  const path = pathOf(scene, which);
+  const along = unit(scene.travel[which]?.direction.angle ?? 0);
+  const [start, end] = [path[leg], path[leg + 2]];
+  const whole = distance(start, end);
+  const wanted = (to[0] - start[0]) * along[0] + (to[1] - start[1]) * along[1];
+  const first = centimetres(Math.min(whole - SHORTEST, Math.max(SHORTEST, wanted)));
+  const at = `departure.${which}.legs`;
+  return { do: 'all', edits: [value(`${at}.${leg}.distance`, first), value(`${at}.${leg + 1}.distance`, centimetres(whole - first))] };
+}
+
+/** The contact plane drawn as a line from one place to another: through the first, along both. */
+export function planeEdit(from: Vec, to: Vec, coarse: boolean): Edit {
+  const turned = distance(from, to) > 0.1 ? [value('impact.plane', asLine(degreesOf(subtract(to, from), coarse)))] : [];
+  const placed = [value('impact.point.x', centimetres(from[0])), value('impact.point.y', centimetres(from[1]))];
+  return { do: 'all', edits: [...placed, ...turned] };
+}
+
+/** What is selected when a grip is taken. */
+export function thingOf(grip: Grip): ThingId {
+  switch (grip.part) {
+    case 'vehicle':
+    case 'turn':
+      return `vehicle.${grip.which}`;
+    case 'point':
+      return 'contact.point';
+    case 'plane':
+      return 'contact.plane';
+    case 'approach':
+      return `approach.${grip.which}`;
+    case 'joint':
+      return `leg.${grip.which}.${grip.leg}`;
+    case 'end':
+      return `departure.${grip.which}`;
+  }
+}
+
+/** What a gesture with a grip is called, for undo. */
+export function labelOfGrip(grip: Grip): string {
+  switch (grip.part) {
+    case 'vehicle':
+      return `move ${grip.which}`;
+    case 'turn':
+      return `turn ${grip.which}`;
+    case 'point':
+      return 'move the contact point';
+    case 'plane':
+      return 'turn the contact plane';
+    case 'approach':
+      return `direction of approach of ${grip.which}`;
+    case 'joint':
+      return `legs of ${grip.which}`;
+    case 'end':
+      return `travel of ${grip.which}`;
+  }
+}
+
+/** The edit that nudges the selected thing: by a step in world axes (m) and a turn (deg). null where it has neither. */
+export function nudgeEdit(casefile: CaseFile, thing: ThingId, step: Vec, turn: number): Edit | null {
+  const [kind, which = '', k] = thing.split('.') as [string, string?, string?];
+  const { impact, approach, departure } = casefile;
+  const by = (path: string, from: number, change: number, digits: number): Edit[] =>
+    change === 0 ? [] : [value(path, Number((from + change).toFixed(digits)))];
+  const turnOf = (path: string, from: number, line = false): Edit[] =>
+    turn === 0 ? [] : [value(path, line ? ((Number((from + turn).toFixed(3)) % 180) + 180) % 180 : wrapped(Number((from + turn).toFixed(3))))];
+  const edits = ((): Edit[] => {
+    if (kind === 'vehicle') {
+      const pose = impact[which as Which];
+      const at = `impact.${which}`;
+      return [...by(`${at}.x`, pose.x.value, step[0], 4), ...by(`${at}.y`, pose.y.value, step[1], 4), ...turnOf(`${at}.heading`, pose.heading.value)];
+    }
+    if (thing === 'contact.point' || thing === 'contact.plane')
+      return [
+        ...by('impact.point.x', impact.point.x.value, step[0], 4),
+        ...by('impact.point.y', impact.point.y.value, step[1], 4),
+        ...turnOf('impact.plane', impact.plane.value, true),
+      ];
+    const direction = approach[which as Which]?.direction;
+    if (kind === 'approach' && direction) return turnOf(`approach.${which}.direction`, direction.value);
+    const legs = departure[which as Which];
+    if (legs?.kind !== 'legs' || (kind !== 'departure' && kind !== 'leg')) return [];
+    const leg = kind === 'leg' ? Number(k) : legs.legs.length - 1;
+    const along = step[0] + step[1];
+    const reach = legs.legs[leg].distance.value;
+    return [
+      ...by(`departure.${which}.legs.${leg}.distance`, reach, Math.max(along, -reach), 4),
+      ...turnOf(`departure.${which}.direction`, legs.direction.value),
+    ];
+  })();
+  return edits.length === 0 ? null : { do: 'all', edits };
+}
+
+/** The place half a way along a drag, for the words beside it. */
+export const middle = (from: Vec, to: Vec): Vec => add(from, scale(subtract(to, from), 0.5));

@@ -203,7 +203,7 @@ const DOTS: readonly Role[] = ['point', 'centre'];
 
 function Sample({ role }: { role: Role }) {
   if (DOTS.includes(role)) return <Dot role={role} at={[4.5, 2.2]} />;
-  if (/^(vehicle|rest)/.test(role))
+  if (role.startsWith('vehicle'))
     return <polygon points="0.5,0.5 8.5,0.5 8.5,3.9 0.5,3.9" className={styles.polygon} data-role={role} />;
   const arrow = /^(approach|travel|normal)/.test(role);
   return (

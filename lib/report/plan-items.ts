@@ -1,147 +1,125 @@
-import type { CaseFile, LegsDeparture, Vehicle, VehicleId } from '@/lib/casefile/schema';
+import type { CaseFile, VehicleId } from '@/lib/casefile/schema';
 import { VEHICLE_IDS } from '@/lib/casefile/schema';
+import { sceneOf } from '@/lib/casefile/scene-of';
 import type { Result } from '@/lib/results/result';
+import { type Scene, type SceneVehicle, centreOf, noseOf, outlineAt, pathOf, wheelsOf } from '@/lib/scene/scene';
+import type { UnitSystem } from '@/lib/units/dimension';
 import { formatWithUnit } from '@/lib/units/format';
 import { unitsOf } from './numbers';
 import type { Item, Point } from './plan-sheet';
-import { type Vector, dot, less, perp, scaled, size, sum, unit } from './worked/vector';
+import { radians } from './worked/vector';
 
-/** How a wheel, an arrow and the contact line are drawn, m. */
+/** How wheels, arrows and the contact line are drawn, m. */
 const WHEEL = { length: 0.6, width: 0.2 };
 const ARROW = 2.5;
 const PLANE_HALF = 1.6;
 const NORMAL = 1.1;
-/** An approach slower than this has no arrow, m/s. */
+/** How far the nose mark reaches back, m. */
+const NOSE = 0.5;
+/** How far the length of a leg stands off its line, m; beside the vehicle where the line still runs under it. */
+const BESIDE = 0.3;
+/** An approach found slower than this has no arrow, m/s. */
 const SLOW = 0.3;
-
-const at = (v: Vector): Point => [v.x, v.y];
-
-interface Frame {
-  centre: Vector;
-  forward: Vector;
-}
-
-/** Body coordinates (forward, left) into the world. */
-const placed = ({ centre, forward }: Frame, x: number, y: number): Point =>
-  at(sum(centre, sum(scaled(forward, x), scaled(perp(forward), y))));
 
 /** What the plan shows of a case, in world metres, y up; drawn in this order. */
 export function planItems(casefile: CaseFile, result: Result): Item[] {
-  const marks = (casefile.scene?.marks ?? []).map(({ points, label }): Item => ({
-    kind: 'line',
-    role: 'mark',
-    points,
-    label,
-  }));
+  const scene = sceneOf(casefile);
+  const marks = scene.marks.map(({ points, label }): Item => ({ kind: 'line', role: 'mark', points, label }));
   return [
     ...marks,
-    ...VEHICLE_IDS.flatMap((id) => vehicleItems(casefile.vehicles[id], frameOf(casefile, id), id)),
-    ...VEHICLE_IDS.map((id) => letterItem(casefile, id)),
-    ...VEHICLE_IDS.flatMap((id) => travelItems(casefile, id)),
-    ...VEHICLE_IDS.flatMap((id) => approachItems(casefile, result, id)),
-    ...contactItems(casefile),
+    ...VEHICLE_IDS.flatMap((id) => vehicleItems(scene.vehicles[id])),
+    ...VEHICLE_IDS.map((id) => letterItem(scene, id)),
+    ...VEHICLE_IDS.flatMap((id) => travelItems(scene, id, unitsOf(casefile))),
+    ...VEHICLE_IDS.flatMap((id) => approachItems(scene, result, id)),
+    ...contactItems(scene),
   ];
 }
 
-function frameOf(casefile: CaseFile, id: VehicleId): Frame {
-  const { x, y, heading } = casefile.impact[id];
-  return { centre: { x: x.value, y: y.value }, forward: unit(heading.value) };
-}
+/** The point at a distance from another, in a direction (rad). */
+const towards = ([x, y]: Point, angle: number, distance: number): Point => [
+  x + distance * Math.cos(angle),
+  y + distance * Math.sin(angle),
+];
 
-function vehicleItems(vehicle: Vehicle, frame: Frame, id: VehicleId): Item[] {
-  const { length, width, wheelbase, track, frontOverhang, frontAxleToMassCentre } = vehicle;
-  const front = frontAxleToMassCentre.value + frontOverhang;
-  const half = width / 2;
-  const box = (x: number, y: number, l: number, w: number): Point[] => [
-    placed(frame, x + l / 2, y + w / 2),
-    placed(frame, x - l / 2, y + w / 2),
-    placed(frame, x - l / 2, y - w / 2),
-    placed(frame, x + l / 2, y - w / 2),
-  ];
-  const axles = [frontAxleToMassCentre.value, frontAxleToMassCentre.value - wheelbase];
-  const wheels = axles.flatMap((x) => [track / 2, -track / 2].map((y) => box(x, y, WHEEL.length, WHEEL.width)));
-  const nose = [placed(frame, front - 0.5, half), placed(frame, front, 0), placed(frame, front - 0.5, -half)];
+/** A point given in vehicle axes. */
+const onVehicle = (vehicle: SceneVehicle, forward: number, left: number): Point =>
+  towards(towards(centreOf(vehicle), vehicle.pose.heading, forward), vehicle.pose.heading + Math.PI / 2, left);
+
+function vehicleItems(vehicle: SceneVehicle): Item[] {
+  const [nose, half] = [noseOf(vehicle), vehicle.body.width / 2];
+  const wheel = ([x, y]: Point): Point[] =>
+    [
+      [1, 1],
+      [-1, 1],
+      [-1, -1],
+      [1, -1],
+    ].map(([along, across]) => onVehicle(vehicle, x + (along * WHEEL.length) / 2, y + (across * WHEEL.width) / 2));
   return [
-    { kind: 'polygon', role: `vehicle.${id}`, points: box(front - length / 2, 0, length, width) },
-    ...wheels.map((points): Item => ({ kind: 'polygon', role: 'detail', points })),
-    { kind: 'line', role: 'detail', points: nose },
-    { kind: 'dot', role: 'centre', at: at(frame.centre) },
+    { kind: 'polygon', role: `vehicle.${vehicle.which}`, points: outlineAt(vehicle) },
+    ...wheelsOf(vehicle).map((at): Item => ({ kind: 'polygon', role: 'detail', points: wheel(at) })),
+    {
+      kind: 'line',
+      role: 'detail',
+      points: [
+        onVehicle(vehicle, nose - NOSE, half),
+        onVehicle(vehicle, nose, 0),
+        onVehicle(vehicle, nose - NOSE, -half),
+      ],
+    },
+    { kind: 'dot', role: 'centre', at: centreOf(vehicle) },
   ];
 }
 
 /** The letter of a vehicle, at the end that is farther from the contact point. */
-function letterItem(casefile: CaseFile, id: VehicleId): Item {
-  const { length, frontOverhang, frontAxleToMassCentre } = casefile.vehicles[id];
-  const frame = frameOf(casefile, id);
-  const front = frontAxleToMassCentre.value + frontOverhang;
-  const { x, y } = casefile.impact.point;
-  const ahead = dot(less({ x: x.value, y: y.value }, frame.centre), frame.forward) > front - length / 2;
-  return { kind: 'label', at: placed(frame, ahead ? front - length + 0.9 : front - 1.1, 0), text: id, strong: true };
+function letterItem({ vehicles, point }: Scene, id: VehicleId): Item {
+  const vehicle = vehicles[id];
+  const [nose, tail] = [noseOf(vehicle), noseOf(vehicle) - vehicle.body.length];
+  const [dx, dy] = [point.at[0] - vehicle.pose.x, point.at[1] - vehicle.pose.y];
+  const forward = dx * Math.cos(vehicle.pose.heading) + dy * Math.sin(vehicle.pose.heading);
+  const at = forward > (nose + tail) / 2 ? tail + 0.9 : nose - 1.1;
+  return { kind: 'label', at: onVehicle(vehicle, at, 0), text: id, strong: true };
 }
 
-function travelItems(casefile: CaseFile, id: VehicleId): Item[] {
-  const departure = casefile.departure[id];
-  if (!departure) return [];
-  if (departure.kind === 'legs') return legItems(casefile, departure, id);
-  const { x, y, heading } = departure.rest;
-  if (!x || !y || !heading) return [];
-  const rest: Frame = { centre: { x: x.value, y: y.value }, forward: unit(heading.value) };
-  const [outline] = vehicleItems(casefile.vehicles[id], rest, id);
-  return [{ ...outline, role: `rest.${id}` } as Item];
+function travelItems(scene: Scene, id: VehicleId, units: UnitSystem): Item[] {
+  const travel = scene.travel[id];
+  const path = pathOf(scene, id);
+  if (!travel) return [];
+  return travel.legs.flatMap((distance, k): Item[] => [
+    { kind: 'line', role: `travel.${id}`, points: [path[k], path[k + 1]], arrow: true },
+    {
+      kind: 'label',
+      at: besideLeg(scene.vehicles[id], path[k], path[k + 1], travel.direction.angle),
+      text: formatWithUnit(distance, 'length', units, { decimals: 2 }),
+    },
+  ]);
 }
 
-/** How far the length of a leg stands off its line, m; beside the vehicle where the line still runs under it. */
-const BESIDE = 0.3;
-
-function legItems(casefile: CaseFile, departure: LegsDeparture, id: VehicleId): Item[] {
-  const along = unit(departure.direction.value);
-  const start = frameOf(casefile, id).centre;
-  const { length, width } = casefile.vehicles[id];
-  let from = start;
-  const items = departure.legs.flatMap(({ distance }): Item[] => {
-    const to = sum(from, scaled(along, distance.value));
-    const middle = sum(from, scaled(along, distance.value / 2));
-    const beside = size(less(middle, start)) > length / 2 ? BESIDE : width / 2 + BESIDE;
-    const text = formatWithUnit(distance.value, 'length', unitsOf(casefile), { decimals: 2 });
-    const leg: Item[] = [
-      { kind: 'line', role: `travel.${id}`, points: [at(from), at(to)], arrow: true },
-      { kind: 'label', at: at(sum(middle, scaled(perp(along), beside))), text },
-    ];
-    from = to;
-    return leg;
-  });
-  return items;
+function besideLeg(vehicle: SceneVehicle, from: Point, to: Point, angle: number): Point {
+  const middle: Point = [(from[0] + to[0]) / 2, (from[1] + to[1]) / 2];
+  const [x, y] = centreOf(vehicle);
+  const isClear = Math.hypot(middle[0] - x, middle[1] - y) > vehicle.body.length / 2;
+  return towards(middle, angle + Math.PI / 2, BESIDE + (isClear ? 0 : vehicle.body.width / 2));
 }
 
 /** The direction of approach: as stated, or as found where the method answers it. */
-function approachItems(casefile: CaseFile, result: Result, id: VehicleId): Item[] {
+function approachItems(scene: Scene, result: Result, id: VehicleId): Item[] {
   const speed = result.central[`${id}.approachSpeed`] ?? 0;
   const found = speed < SLOW ? undefined : result.central[`${id}.approachDirection`];
-  const direction = casefile.approach[id].direction?.value ?? found;
-  if (direction === undefined) return [];
-  const { length, frontOverhang, frontAxleToMassCentre } = casefile.vehicles[id];
-  const rear = length - frontOverhang - frontAxleToMassCentre.value;
-  const head = sum(frameOf(casefile, id).centre, scaled(unit(direction), -(rear + 0.3)));
+  const angle = scene.approach[id]?.angle ?? (found === undefined ? undefined : radians(found));
+  if (angle === undefined) return [];
+  const vehicle = scene.vehicles[id];
+  const head = towards(centreOf(vehicle), angle, noseOf(vehicle) - vehicle.body.length - BESIDE);
+  return [{ kind: 'line', role: `approach.${id}`, points: [towards(head, angle, -ARROW), head], arrow: true }];
+}
+
+function contactItems({ point: { at }, plane }: Scene): Item[] {
   return [
     {
       kind: 'line',
-      role: `approach.${id}`,
-      points: [at(sum(head, scaled(unit(direction), -ARROW))), at(head)],
-      arrow: true,
+      role: 'plane',
+      points: [towards(at, plane.angle, -PLANE_HALF), towards(at, plane.angle, PLANE_HALF)],
     },
-  ];
-}
-
-function contactItems(casefile: CaseFile): Item[] {
-  const { point, plane } = casefile.impact;
-  const P = { x: point.x.value, y: point.y.value };
-  const along = scaled(unit(plane.value), PLANE_HALF);
-  const apart = less(frameOf(casefile, 'B').centre, frameOf(casefile, 'A').centre);
-  const either = perp(unit(plane.value));
-  const normal = dot(either, apart) >= 0 ? either : scaled(either, -1);
-  return [
-    { kind: 'line', role: 'plane', points: [at(less(P, along)), at(sum(P, along))] },
-    { kind: 'line', role: 'normal', points: [at(P), at(sum(P, scaled(normal, NORMAL)))], arrow: true },
-    { kind: 'dot', role: 'point', at: at(P) },
+    { kind: 'line', role: 'normal', points: [at, towards(at, plane.normal, NORMAL)], arrow: true },
+    { kind: 'dot', role: 'point', at },
   ];
 }

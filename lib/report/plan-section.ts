@@ -1,6 +1,7 @@
 import type { CaseFile } from '@/lib/casefile/schema';
 import { VEHICLE_IDS } from '@/lib/casefile/schema';
 import type { Result } from '@/lib/results/result';
+import { type Bounds, boundsOf } from '@/lib/scene/view';
 import { markLabelAt } from './mark-label';
 import { type Scale, millimetresPerMetre, roomForPlan, scaleFor } from './paper';
 import { planItems } from './plan-items';
@@ -23,30 +24,18 @@ export function planSection(casefile: CaseFile, result: Result, paper: Paper): S
   };
 }
 
-interface Box {
-  left: number;
-  bottom: number;
-  right: number;
-  top: number;
-}
-
 /** All that must lie on the sheet: everything but the marks, which may run off it. */
-function boundsOf(items: Item[]): Box {
+function boundsOfPlan(items: Item[]): Bounds {
   const points = items.flatMap((item): Point[] => {
     if (item.kind === 'dot') return [item.at];
     return item.kind === 'label' || item.role === 'mark' ? [] : item.points;
   });
-  const [xs, ys] = [points.map(([x]) => x), points.map(([, y]) => y)];
-  return {
-    left: Math.min(...xs) - AROUND,
-    bottom: Math.min(...ys) - AROUND,
-    right: Math.max(...xs) + AROUND,
-    top: Math.max(...ys) + AROUND,
-  };
+  const { left, right, bottom, top } = boundsOf(points);
+  return { left: left - AROUND, right: right + AROUND, bottom: bottom - AROUND, top: top + AROUND };
 }
 
 function drawPlan(casefile: CaseFile, items: Item[], paper: Paper): Drawing | null {
-  const box = boundsOf(items);
+  const box = boundsOfPlan(items);
   const room = roomForPlan(paper);
   const scale = scaleFor(box.right - box.left, box.top - box.bottom, room);
   if (!scale) return null;
@@ -97,7 +86,6 @@ const LEGEND: [Role, string][] = [
     [`vehicle.${id}`, `${id} at contact`],
     [`approach.${id}`, `Approach of ${id}`],
     [`travel.${id}`, `Travel of ${id}`],
-    [`rest.${id}`, `${id} at rest`],
   ]),
   ['centre', 'Mass centre'],
   ['point', 'Contact point'],

@@ -18,8 +18,6 @@ export interface Drawing {
 export type Role =
   | 'vehicle.A'
   | 'vehicle.B'
-  | 'rest.A'
-  | 'rest.B'
   | 'detail'
   | 'approach.A'
   | 'approach.B'
@@ -31,7 +29,7 @@ export type Role =
   | 'centre'
   | 'mark';
 
-export type Point = [x: number, y: number];
+export type Point = readonly [x: number, y: number];
 
 export type Item =
   | { kind: 'polygon'; role: Role; points: Point[] }

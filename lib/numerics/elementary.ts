@@ -17,11 +17,13 @@ const highWord = (x: number): number => {
   return words[HIGH] | 0;
 };
 
-const withHighWord = (x: number, high: number): number => {
-  double[0] = x;
-  words[HIGH] = high;
-  return double[0];
-};
+const LEAST_POWER = -1074;
+const powers = new Float64Array(1024 - LEAST_POWER);
+powers[0] = Number.MIN_VALUE;
+for (let k = 1; k < powers.length; k++) powers[k] = 2 * powers[k - 1];
+
+/** 2^k for -1074 <= k <= 1023. From a table: putting bits together and reading them as a number stalls the processor. */
+const powerOfTwo = (k: number): number => powers[k - LEAST_POWER];
 
 const QUARTER_PI = 0.7853981633974483;
 const TWO_OVER_PI = 0.6366197723675814;
@@ -33,32 +35,32 @@ const HALF_PI_2_REST = 2.0222662487959506e-21;
 const HALF_PI_3 = 2.0222662487111665e-21;
 const HALF_PI_3_REST = 8.4784276603689e-32;
 
-/** The remainder of the last reduction: `turnHigh + turnLow`, within +-pi/4. */
-let turnHigh = 0;
-let turnLow = 0;
+/** The remainder of the last reduction, as the sum of two numbers, within +-pi/4. */
+const turn = new Float64Array(2);
 
 /** Takes quarter turns off x; returns how many, modulo 4. Exact to the last bit up to |x| = 8e5 rad; beyond, digits are lost. */
 function reduce(x: number): number {
   const turns = Math.floor(x * TWO_OVER_PI + 0.5);
   let rest = x - turns * HALF_PI_1;
   let tail = turns * HALF_PI_1_REST;
-  turnHigh = rest - tail;
+  let remainder = rest - tail;
   const size = Math.abs(x);
-  if (Math.abs(turnHigh) < size * 1.52587890625e-5) {
+  if (Math.abs(remainder) < size * 1.52587890625e-5) {
     const before = rest;
     tail = turns * HALF_PI_2;
     rest = before - tail;
     tail = turns * HALF_PI_2_REST - (before - rest - tail);
-    turnHigh = rest - tail;
-    if (Math.abs(turnHigh) < size * 1.7763568394002505e-15) {
+    remainder = rest - tail;
+    if (Math.abs(remainder) < size * 1.7763568394002505e-15) {
       const again = rest;
       tail = turns * HALF_PI_3;
       rest = again - tail;
       tail = turns * HALF_PI_3_REST - (again - rest - tail);
-      turnHigh = rest - tail;
+      remainder = rest - tail;
     }
   }
-  turnLow = rest - turnHigh - tail;
+  turn[0] = remainder;
+  turn[1] = rest - remainder - tail;
   return turns - 4 * Math.floor(turns / 4);
 }
 
@@ -90,7 +92,7 @@ function kernelCos(x: number, y: number): number {
 export function sin(x: number): number {
   if (Math.abs(x) <= QUARTER_PI) return x === 0 ? x : kernelSin(x, 0);
   const quarter = reduce(x);
-  const size = quarter === 0 || quarter === 2 ? kernelSin(turnHigh, turnLow) : kernelCos(turnHigh, turnLow);
+  const size = quarter === 0 || quarter === 2 ? kernelSin(turn[0], turn[1]) : kernelCos(turn[0], turn[1]);
   return quarter < 2 ? size : -size;
 }
 
@@ -98,7 +100,7 @@ export function sin(x: number): number {
 export function cos(x: number): number {
   if (Math.abs(x) <= QUARTER_PI) return kernelCos(x, 0);
   const quarter = reduce(x);
-  const size = quarter === 0 || quarter === 2 ? kernelCos(turnHigh, turnLow) : kernelSin(turnHigh, turnLow);
+  const size = quarter === 0 || quarter === 2 ? kernelCos(turn[0], turn[1]) : kernelSin(turn[0], turn[1]);
   return quarter === 0 || quarter === 3 ? size : -size;
 }
 
@@ -175,9 +177,6 @@ const withSignOf = (size: number, y: number): number => (y < 0 || Object.is(y, -
 const LN2_HIGH = 6.9314718036912381649e-1;
 const LN2_LOW = 1.90821492927058770002e-10;
 
-/** 2^k for -1022 <= k <= 1023. */
-const powerOfTwo = (k: number): number => withHighWord(1, (0x3ff + k) << 20);
-
 /** e^x, within 1 unit in the last place. */
 export function exp(x: number): number {
   if (Number.isNaN(x)) return NaN;
@@ -207,8 +206,9 @@ export function log(x: number): number {
   const tiny = x < 2.2250738585072014e-308;
   const scaled = tiny ? x * 18014398509481984 : x;
   const high = highWord(scaled) + (0x3ff00000 - 0x3fe6a09e);
-  const k = (high >>> 20) - 0x3ff - (tiny ? 54 : 0);
-  const f = withHighWord(scaled, (high & 0xfffff) + 0x3fe6a09e) - 1;
+  const exponent = (high >>> 20) - 0x3ff;
+  const k = tiny ? exponent - 54 : exponent;
+  const f = scaled * powerOfTwo(-exponent) - 1;
   const half = 0.5 * f * f;
   return logSeries(f, half) + k * LN2_LOW - half + f + k * LN2_HIGH;
 }

@@ -62,6 +62,10 @@ function toNormal(
   }
   const below = normalCumulative((low - value) / sd);
   const share = normalCumulative((high - value) / sd) - below;
+  if (below === 0 && share === 1) {
+    for (let k = 0; k < count; k++) out[k] = value + sd * normalQuantile(out[k]);
+    return;
+  }
   const least = lowOpen ? low + Number.MIN_VALUE : low; // rounding may reach the edge itself
   for (let k = 0; k < count; k++) {
     const x = value + sd * normalQuantile(below + share * out[k]);

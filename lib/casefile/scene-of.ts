@@ -11,7 +11,10 @@ function uncertaintyOf({ value, spread }: Quantity): number {
   return Math.sqrt((low * low + high * high + value * value - low * high - low * value - high * value) / 18);
 }
 
-const direction = (q: Quantity): SceneDirection => ({ angle: toRadians(q.value), fan: toRadians(2 * uncertaintyOf(q)) });
+const direction = (q: Quantity): SceneDirection => ({
+  angle: toRadians(q.value),
+  fan: toRadians(2 * uncertaintyOf(q)),
+});
 
 function vehicleOf({ vehicles, impact }: CaseFile, which: Which): SceneVehicle {
   const { name, length, width, wheelbase, track, frontOverhang, frontAxleToMassCentre } = vehicles[which];

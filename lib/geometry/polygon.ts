@@ -9,7 +9,12 @@ export function outlineOf(
   const rear = front - vehicle.length;
   const half = vehicle.width / 2;
   const [c, s] = [Math.cos(pose.heading), Math.sin(pose.heading)];
-  const corners: Point[] = [[rear, -half], [front, -half], [front, half], [rear, half]];
+  const corners: Point[] = [
+    [rear, -half],
+    [front, -half],
+    [front, half],
+    [rear, half],
+  ];
   return corners.map(([x, y]) => [pose.x + c * x - s * y, pose.y + s * x + c * y]);
 }
 
@@ -31,7 +36,8 @@ export function distanceOutside(point: Point, polygon: readonly Point[]): number
   if (inside <= 0) return inside;
   return Math.min(
     ...sides.map(({ from, to, length }) => {
-      const t = ((point[0] - from[0]) * (to[0] - from[0]) + (point[1] - from[1]) * (to[1] - from[1])) / (length * length);
+      const t =
+        ((point[0] - from[0]) * (to[0] - from[0]) + (point[1] - from[1]) * (to[1] - from[1])) / (length * length);
       const s = Math.min(1, Math.max(0, t));
       const [qx, qy] = [from[0] + s * (to[0] - from[0]) - point[0], from[1] + s * (to[1] - from[1]) - point[1]];
       return Math.sqrt(qx * qx + qy * qy);

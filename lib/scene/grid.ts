@@ -36,7 +36,10 @@ export function gridOf(view: View, size: Size, unit: number): GridLines {
 export function scaleBar(view: View, unit: number, most: number): { units: number; pixels: number } {
   const longest = most / view.scale / unit;
   const up = roundStep(longest);
-  const units = up <= longest * (1 + 1e-12) ? up : ([0.5, 0.4, 0.2, 0.1].map((m) => m * up).find((s) => s <= longest * (1 + 1e-12) && isRound(s)) ?? up / 10);
+  const units =
+    up <= longest * (1 + 1e-12)
+      ? up
+      : ([0.5, 0.4, 0.2, 0.1].map((m) => m * up).find((s) => s <= longest * (1 + 1e-12) && isRound(s)) ?? up / 10);
   return { units, pixels: units * unit * view.scale };
 }
 

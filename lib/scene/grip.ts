@@ -38,10 +38,17 @@ export function handlesOf(scene: Scene, speeds: Partial<Record<Which, number>>):
     return [
       { grip: { part: 'turn', which }, at: turnHandle(scene, which) },
       ...(tail ? [{ grip: { part: 'approach', which } as const, at: tail }] : []),
-      ...legs.map((at, k): Handle => ({ grip: k === legs.length - 1 ? { part: 'end', which } : { part: 'joint', which, leg: k }, at })),
+      ...legs.map((at, k): Handle => ({
+        grip: k === legs.length - 1 ? { part: 'end', which } : { part: 'joint', which, leg: k },
+        at,
+      })),
     ];
   });
-  return [{ grip: { part: 'point' }, at: scene.point.at }, { grip: { part: 'plane' }, at: planeHandle(scene) }, ...each];
+  return [
+    { grip: { part: 'point' }, at: scene.point.at },
+    { grip: { part: 'plane' }, at: planeHandle(scene) },
+    ...each,
+  ];
 }
 
 /** What lies under a point: the nearest handle within `reach` (m), else a vehicle, else nothing. */
@@ -59,7 +66,10 @@ export function gripAt(scene: Scene, speeds: Partial<Record<Which, number>>, at:
 /** The vehicle whose outline holds a point; of two, the one whose centre is nearer. */
 export function vehicleAt(scene: Scene, at: Vec): Which | null {
   const holding = (['A', 'B'] as const).filter((which) => distanceOutside(at, outlineAt(scene.vehicles[which])) <= 0);
-  return holding.sort((p, q) => distance(centreOf(scene.vehicles[p]), at) - distance(centreOf(scene.vehicles[q]), at))[0] ?? null;
+  return (
+    holding.sort((p, q) => distance(centreOf(scene.vehicles[p]), at) - distance(centreOf(scene.vehicles[q]), at))[0] ??
+    null
+  );
 }
 
 function nearPlane({ point, plane }: Scene, at: Vec, reach: number): boolean {

@@ -16,7 +16,14 @@ export interface SceneVehicle {
   which: Which;
   name: string;
   pose: ScenePose;
-  body: { length: number; width: number; frontOverhang: number; wheelbase: number; track: number; frontAxleToMassCentre: number };
+  body: {
+    length: number;
+    width: number;
+    frontOverhang: number;
+    wheelbase: number;
+    track: number;
+    frontAxleToMassCentre: number;
+  };
 }
 
 /** A direction with the half width of its fan (two standard uncertainties). */
@@ -51,7 +58,12 @@ export const noseOf = ({ body }: SceneVehicle): number => body.frontAxleToMassCe
 export function wheelsOf({ body }: SceneVehicle): Vec[] {
   const [front, rear] = [body.frontAxleToMassCentre, body.frontAxleToMassCentre - body.wheelbase];
   const half = body.track / 2;
-  return [[front, half], [front, -half], [rear, half], [rear, -half]];
+  return [
+    [front, half],
+    [front, -half],
+    [rear, half],
+    [rear, -half],
+  ];
 }
 
 export const centreOf = (vehicle: SceneVehicle): Vec => [vehicle.pose.x, vehicle.pose.y];
@@ -72,15 +84,18 @@ export function restPose(scene: Scene, which: Which): ScenePose | null {
   return { x, y, heading: scene.vehicles[which].pose.heading };
 }
 
-/** Length of the approach arrow, m: a second at the computed speed, within what fits; two metres beyond the tail without one. */
-export const arrowLength = (vehicle: SceneVehicle, speed: number | undefined): number =>
-  vehicle.body.length - noseOf(vehicle) + (speed === undefined ? 2 : Math.min(8, Math.max(1.2, speed)));
+/** From the mass centre to just behind the tail, m. */
+export const tailReach = (vehicle: SceneVehicle): number => vehicle.body.length - noseOf(vehicle) + 0.15;
+
+/** Length of the approach arrow, m: what is covered in a third of a second at the computed speed, within what fits. */
+const arrowLength = (speed: number | undefined): number =>
+  speed === undefined ? 2 : Math.min(4, Math.max(1.2, speed / 3));
 
 /** Where the approach arrow begins. */
 export function approachTail(scene: Scene, which: Which, speed: number | undefined): Vec | null {
   const direction = scene.approach[which];
   const vehicle = scene.vehicles[which];
-  return direction && add(centreOf(vehicle), scale(unit(direction.angle), -arrowLength(vehicle, speed)));
+  return direction && add(centreOf(vehicle), scale(unit(direction.angle), -tailReach(vehicle) - arrowLength(speed)));
 }
 
 /** All that a view should show. */
@@ -89,7 +104,12 @@ export function sceneBounds(scene: Scene): Bounds {
     const vehicle = scene.vehicles[which];
     const rest = restPose(scene, which);
     const tail = approachTail(scene, which, undefined);
-    return [...outlineAt(vehicle), fromBody([noseOf(vehicle) + 1, 0], vehicle.pose), ...(rest ? outlineAt(vehicle, rest) : []), ...(tail ? [tail] : [])];
+    return [
+      ...outlineAt(vehicle),
+      fromBody([noseOf(vehicle) + 1, 0], vehicle.pose),
+      ...(rest ? outlineAt(vehicle, rest) : []),
+      ...(tail ? [tail] : []),
+    ];
   });
   return boundsOf([...points, scene.point.at]);
 }

@@ -19,8 +19,14 @@ export interface Bounds {
   top: number;
 }
 
-export const toScreen = (view: View, [x, y]: Vec): Vec => [view.originX + x * view.scale, view.originY - y * view.scale];
-export const toWorld = (view: View, [px, py]: Vec): Vec => [(px - view.originX) / view.scale, (view.originY - py) / view.scale];
+export const toScreen = (view: View, [x, y]: Vec): Vec => [
+  view.originX + x * view.scale,
+  view.originY - y * view.scale,
+];
+export const toWorld = (view: View, [px, py]: Vec): Vec => [
+  (px - view.originX) / view.scale,
+  (view.originY - py) / view.scale,
+];
 
 /** From a whole junction to a bumper, pixels per metre. */
 const LEAST = 2;
@@ -34,7 +40,11 @@ export function zoomAbout(view: View, at: Vec, factor: number): View {
   return { scale, originX: at[0] + (view.originX - at[0]) * by, originY: at[1] + (view.originY - at[1]) * by };
 }
 
-export const panBy = (view: View, dx: number, dy: number): View => ({ ...view, originX: view.originX + dx, originY: view.originY + dy });
+export const panBy = (view: View, dx: number, dy: number): View => ({
+  ...view,
+  originX: view.originX + dx,
+  originY: view.originY + dy,
+});
 
 export function boundsOf(points: readonly Vec[]): Bounds {
   const [xs, ys] = [points.map(([x]) => x), points.map(([, y]) => y)];
@@ -45,7 +55,9 @@ export function boundsOf(points: readonly Vec[]): Bounds {
 export function fit(bounds: Bounds, size: Size, margin: number): View {
   const width = Math.max(1, bounds.right - bounds.left);
   const height = Math.max(1, bounds.top - bounds.bottom);
-  const scale = clamped(Math.min(Math.max(1, size.width - 2 * margin) / width, Math.max(1, size.height - 2 * margin) / height));
+  const scale = clamped(
+    Math.min(Math.max(1, size.width - 2 * margin) / width, Math.max(1, size.height - 2 * margin) / height),
+  );
   const [x, y] = [(bounds.left + bounds.right) / 2, (bounds.bottom + bounds.top) / 2];
   return { scale, originX: size.width / 2 - x * scale, originY: size.height / 2 + y * scale };
 }

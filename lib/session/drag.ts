@@ -3,7 +3,7 @@ import type { Edit } from '@/lib/casefile/edit';
 import type { ThingId } from '@/lib/casefile/fields';
 import type { CaseFile } from '@/lib/casefile/schema';
 import { sceneOf } from '@/lib/casefile/scene-of';
-import { type Vec, add, angleOf, distance, scale, subtract, toDegrees, unit } from '@/lib/geometry/vector';
+import { type Vec, angleOf, distance, subtract, toDegrees, unit } from '@/lib/geometry/vector';
 import type { Grip } from '@/lib/scene/grip';
 import { type Which, centreOf, pathOf } from '@/lib/scene/scene';
 
@@ -45,7 +45,10 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
     case 'vehicle': {
       const at = `impact.${grip.which}`;
       const { x, y } = impact[grip.which];
-      return { do: 'all', edits: [value(`${at}.x`, centimetres(x.value + by[0])), value(`${at}.y`, centimetres(y.value + by[1]))] };
+      return {
+        do: 'all',
+        edits: [value(`${at}.x`, centimetres(x.value + by[0])), value(`${at}.y`, centimetres(y.value + by[1]))],
+      };
     }
     case 'turn':
       return value(`impact.${grip.which}.heading`, degreesOf(subtract(to, centre(casefile, grip.which)), coarse));
@@ -53,11 +56,17 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
       const { x, y } = impact.point;
       return {
         do: 'all',
-        edits: [value('impact.point.x', centimetres(x.value + by[0])), value('impact.point.y', centimetres(y.value + by[1]))],
+        edits: [
+          value('impact.point.x', centimetres(x.value + by[0])),
+          value('impact.point.y', centimetres(y.value + by[1])),
+        ],
       };
     }
     case 'plane':
-      return value('impact.plane', asLine(degreesOf(subtract(to, [impact.point.x.value, impact.point.y.value]), coarse)));
+      return value(
+        'impact.plane',
+        asLine(degreesOf(subtract(to, [impact.point.x.value, impact.point.y.value]), coarse)),
+      );
     case 'approach':
       return approachEdit(casefile, grip.which, to, coarse);
     case 'end':
@@ -85,7 +94,11 @@ export function travelEdit(casefile: CaseFile, which: Which, to: Vec, coarse: bo
   const departure = casefile.departure[which];
   const reach = distance(way, [0, 0]);
   if (departure?.kind !== 'legs')
-    return { do: 'set', path: `departure.${which}`, to: defaultDeparture(direction, centimetres(Math.max(SHORTEST, reach))) };
+    return {
+      do: 'set',
+      path: `departure.${which}`,
+      to: defaultDeparture(direction, centimetres(Math.max(SHORTEST, reach))),
+    };
   const before = departure.legs.slice(0, -1).reduce((sum, leg) => sum + leg.distance.value, 0);
   const last = departure.legs.length - 1;
   return {
@@ -109,7 +122,10 @@ function jointEdit(casefile: CaseFile, which: Which, leg: number, to: Vec): Edit
   const wanted = (to[0] - start[0]) * along[0] + (to[1] - start[1]) * along[1];
   const first = centimetres(Math.min(whole - SHORTEST, Math.max(SHORTEST, wanted)));
   const at = `departure.${which}.legs`;
-  return { do: 'all', edits: [value(`${at}.${leg}.distance`, first), value(`${at}.${leg + 1}.distance`, centimetres(whole - first))] };
+  return {
+    do: 'all',
+    edits: [value(`${at}.${leg}.distance`, first), value(`${at}.${leg + 1}.distance`, centimetres(whole - first))],
+  };
 }
 
 /** The contact plane drawn as a line from one place to another: through the first, along both. */
@@ -165,12 +181,23 @@ export function nudgeEdit(casefile: CaseFile, thing: ThingId, step: Vec, turn: n
   const by = (path: string, from: number, change: number, digits: number): Edit[] =>
     change === 0 ? [] : [value(path, Number((from + change).toFixed(digits)))];
   const turnOf = (path: string, from: number, line = false): Edit[] =>
-    turn === 0 ? [] : [value(path, line ? ((Number((from + turn).toFixed(3)) % 180) + 180) % 180 : wrapped(Number((from + turn).toFixed(3))))];
+    turn === 0
+      ? []
+      : [
+          value(
+            path,
+            line ? ((Number((from + turn).toFixed(3)) % 180) + 180) % 180 : wrapped(Number((from + turn).toFixed(3))),
+          ),
+        ];
   const edits = ((): Edit[] => {
     if (kind === 'vehicle') {
       const pose = impact[which as Which];
       const at = `impact.${which}`;
-      return [...by(`${at}.x`, pose.x.value, step[0], 4), ...by(`${at}.y`, pose.y.value, step[1], 4), ...turnOf(`${at}.heading`, pose.heading.value)];
+      return [
+        ...by(`${at}.x`, pose.x.value, step[0], 4),
+        ...by(`${at}.y`, pose.y.value, step[1], 4),
+        ...turnOf(`${at}.heading`, pose.heading.value),
+      ];
     }
     if (thing === 'contact.point' || thing === 'contact.plane')
       return [
@@ -192,6 +219,3 @@ export function nudgeEdit(casefile: CaseFile, thing: ThingId, step: Vec, turn: n
   })();
   return edits.length === 0 ? null : { do: 'all', edits };
 }
-
-/** The place half a way along a drag, for the words beside it. */
-export const middle = (from: Vec, to: Vec): Vec => add(from, scale(subtract(to, from), 0.5));

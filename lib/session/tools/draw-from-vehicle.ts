@@ -21,7 +21,10 @@ const NEARBY = 4;
 function pressed(scene: Scene, at: Vec): Which | null {
   const on = vehicleAt(scene, at);
   if (on) return on;
-  const byDistance = (['A', 'B'] as const).map((which) => ({ which, off: distance(centreOf(scene.vehicles[which]), at) }));
+  const byDistance = (['A', 'B'] as const).map((which) => ({
+    which,
+    off: distance(centreOf(scene.vehicles[which]), at),
+  }));
   const nearest = byDistance.sort((p, q) => p.off - q.off)[0];
   return nearest.off < NEARBY ? nearest.which : null;
 }
@@ -45,11 +48,16 @@ export function drawFromVehicle(options: {
       }
       if (!drawing) return { state: null, acts: [] };
       const { which, from } = drawing;
-      if (event.type === 'cancel' || (event.type === 'up' && !drawing.drawn)) return { state: null, acts: [{ do: 'cancel' }] };
-      if (event.type === 'up') return { state: null, acts: [{ do: 'commit' }, { do: 'select', thing: options.thing(which) }] };
+      if (event.type === 'cancel' || (event.type === 'up' && !drawing.drawn))
+        return { state: null, acts: [{ do: 'cancel' }] };
+      if (event.type === 'up')
+        return { state: null, acts: [{ do: 'commit' }, { do: 'select', thing: options.thing(which) }] };
       const drawn = drawing.drawn || distance(from, event.at) > SHORTEST_STROKE;
       if (!drawn) return { state: drawing, acts: [] };
-      return { state: { which, from, drawn }, acts: [{ do: 'preview', edit: options.edit(casefile, which, event.at, event.coarse) }] };
+      return {
+        state: { which, from, drawn },
+        acts: [{ do: 'preview', edit: options.edit(casefile, which, event.at, event.coarse) }],
+      };
     },
   };
 }

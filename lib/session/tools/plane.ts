@@ -10,7 +10,10 @@ export const planeTool: Tool<{ from: Vec }> = {
     if (event.type === 'down')
       return {
         state: { from: event.at },
-        acts: [{ do: 'begin', label: 'draw the contact plane' }, { do: 'preview', edit: planeEdit(event.at, event.at, false) }],
+        acts: [
+          { do: 'begin', label: 'draw the contact plane' },
+          { do: 'preview', edit: planeEdit(event.at, event.at, false) },
+        ],
       };
     if (!state) return { state: null, acts: [] };
     if (event.type === 'cancel') return { state: null, acts: [{ do: 'cancel' }] };

@@ -16,7 +16,10 @@ export const selectTool: Tool<Held> = {
     if (event.type === 'down') {
       const grip = gripAt(scene, speeds, event.at, reach);
       if (!grip) return { state: null, acts: [{ do: 'select', thing: null }, { do: 'pan' }] };
-      const acts = [{ do: 'select', thing: thingOf(grip) } as const, { do: 'begin', label: labelOfGrip(grip) } as const];
+      const acts = [
+        { do: 'select', thing: thingOf(grip) } as const,
+        { do: 'begin', label: labelOfGrip(grip) } as const,
+      ];
       return { state: { grip, from: event.at }, acts };
     }
     if (!held) return { state: null, acts: [] };

@@ -1,0 +1,103 @@
+import { useState } from 'react';
+import { useSession, useSessionStore } from '@/components/hooks/use-session';
+import { type Field, type ThingId, fieldsOf } from '@/lib/casefile/fields';
+import { isQuantity, nodeAt } from '@/lib/casefile/quantities';
+import type { CaseFile } from '@/lib/casefile/schema';
+import { formatValue, unitOf } from '@/lib/units/format';
+import { parseEntry } from '@/lib/units/parse';
+import styles from './board.module.css';
+
+/** The numbers that place the selected thing: what the board draws of it. */
+const PLACES =
+  /^(impact\.[AB]\.(x|y|heading)|impact\.point\.[xy]|impact\.plane|approach\.[AB]\.direction|departure\.[AB]\.direction|departure\.[AB]\.legs\.\d+\.distance)$/;
+
+function fieldsOfThing(casefile: CaseFile, thing: ThingId): Field[] {
+  const all = fieldsOf(casefile).filter(({ path }) => PLACES.test(path) && isQuantity(nodeAt(casefile, path)));
+  const own = all.filter((f) => f.thing === thing);
+  const [kind, which] = thing.split('.');
+  if (kind === 'departure') return [...own, ...all.filter((f) => f.thing.startsWith(`leg.${which}.`))];
+  if (thing === 'contact.point') return [...own, ...all.filter(({ path }) => path === 'impact.plane')];
+  return own;
+}
+
+/** Beside the selected thing: its numbers, to type. Not modal; Escape steps back. */
+export function NumberCard({ at }: { at: readonly [number, number] }) {
+  const casefile = useSession((s) => s.casefile);
+  const selection = useSession((s) => s.selection);
+  const moving = useSession((s) => s.gesture !== null);
+  const fields = selection ? fieldsOfThing(casefile, selection) : [];
+  if (fields.length === 0) return null;
+  return (
+    <div
+      className={styles.card}
+      style={{ left: at[0], top: at[1] }}
+      data-moving={moving}
+      role="group"
+      aria-label="Numbers of what is selected"
+    >
+      {fields.map((f) => (
+        <CardNumber key={f.path} field={f} casefile={casefile} />
+      ))}
+    </div>
+  );
+}
+
+/** Short words: the card stands beside the thing, so its name need not be said again. */
+const shortLabel = ({ path, label }: Field): string => {
+  const leg = /legs\.(\d+)\.distance$/.exec(path);
+  if (leg) return `Leg ${Number(leg[1]) + 1}`;
+  if (path.endsWith('.x')) return 'x';
+  if (path.endsWith('.y')) return 'y';
+  if (path.endsWith('heading')) return 'Heading';
+  if (path.endsWith('plane')) return 'Plane';
+  return path.endsWith('direction') ? 'Direction' : label;
+};
+
+function CardNumber({ field, casefile }: { field: Field; casefile: CaseFile }) {
+  const session = useSessionStore();
+  const units = casefile.display?.units ?? 'metric';
+  const dimension = field.dimension ?? 'ratio';
+  const quantity = nodeAt(casefile, field.path) as { value: number };
+  const shown = formatValue(quantity.value, dimension, units, { decimals: dimension === 'angle' ? 1 : 2 });
+  const [draft, setDraft] = useState<string | null>(null);
+  const [wrong, setWrong] = useState<string | null>(null);
+
+  function commit(): void {
+    const text = draft;
+    setDraft(null);
+    if (text === null || text === shown) return setWrong(null);
+    const entry = parseEntry(text, dimension, units);
+    if (!entry.ok) return setWrong(entry.says);
+    const edit = { do: 'value', path: field.path, value: entry.value, source: 'entered' } as const;
+    const issues = session.getState().edit(field.label, edit);
+    setWrong(issues[0]?.says ?? null);
+  }
+
+  return (
+    <label className={styles.number}>
+      <span>{shortLabel(field)}</span>
+      <input
+        value={draft ?? shown}
+        aria-label={`${field.label}, on the board`}
+        aria-invalid={wrong !== null}
+        inputMode="decimal"
+        onChange={(event) => setDraft(event.target.value)}
+        onBlur={commit}
+        onKeyDown={(event) => {
+          if (event.key === 'Enter') commit();
+          if (event.key === 'Escape' && draft !== null) {
+            event.stopPropagation();
+            setDraft(null);
+            setWrong(null);
+          }
+        }}
+      />
+      <span>{unitOf(dimension, units).symbol}</span>
+      {wrong && (
+        <em role="alert" className={styles.wrong}>
+          {wrong}
+        </em>
+      )}
+    </label>
+  );
+}

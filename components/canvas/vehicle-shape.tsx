@@ -1,0 +1,140 @@
+import type { Context } from 'konva/lib/Context';
+import { Circle, Group, Line, Rect, Shape } from 'react-konva/lib/ReactKonvaCore';
+import type { ScenePose, SceneVehicle } from '@/lib/scene/scene';
+import { noseOf, wheelsOf } from '@/lib/scene/scene';
+import { toDegrees } from '@/lib/geometry/vector';
+import type { Theme } from './theme';
+
+const WHEEL = { length: 0.6, width: 0.2 };
+/** Between two lines of the hatch, m. */
+const HATCH = 0.28;
+
+/** A vehicle to scale. A and B differ in pattern and nose as well as in colour; a ghost is dashed and empty. */
+export function VehicleShape({
+  vehicle,
+  pose,
+  theme,
+  selected,
+}: {
+  vehicle: SceneVehicle;
+  pose: ScenePose;
+  theme: Theme;
+  selected: boolean;
+}) {
+  const { length, width } = vehicle.body;
+  const nose = noseOf(vehicle);
+  const colour = theme[vehicle.which];
+  return (
+    <Group x={pose.x} y={pose.y} rotation={toDegrees(pose.heading)}>
+      <Shape sceneFunc={(context) => fillBody(context, vehicle, theme)} />
+      {wheelsOf(vehicle).map(([x, y]) => (
+        <Rect
+          key={`${x} ${y}`}
+          x={x - WHEEL.length / 2}
+          y={y - WHEEL.width / 2}
+          width={WHEEL.length}
+          height={WHEEL.width}
+          fill={theme.ink}
+          opacity={0.75}
+          cornerRadius={0.05}
+        />
+      ))}
+      <Shape
+        sceneFunc={(context, shape) => {
+          tracePath(context, nose, length, width);
+          context.strokeShape(shape);
+        }}
+        stroke={colour}
+        strokeWidth={selected ? 3 : 1.75}
+        strokeScaleEnabled={false}
+      />
+      <NoseMark vehicle={vehicle} colour={colour} />
+      <Circle radius={0.09} fill={theme.paper} stroke={theme.ink} strokeWidth={1.25} strokeScaleEnabled={false} />
+      <Line points={[-0.2, 0, 0.2, 0]} stroke={theme.ink} strokeWidth={1} strokeScaleEnabled={false} />
+      <Line points={[0, -0.2, 0, 0.2]} stroke={theme.ink} strokeWidth={1} strokeScaleEnabled={false} />
+    </Group>
+  );
+}
+
+/** Where a vehicle was or came to be: an outline only. */
+export function GhostShape({
+  vehicle,
+  pose,
+  theme,
+  dash,
+}: {
+  vehicle: SceneVehicle;
+  pose: ScenePose;
+  theme: Theme;
+  dash: number[];
+}) {
+  const { length, width } = vehicle.body;
+  return (
+    <Shape
+      x={pose.x}
+      y={pose.y}
+      rotation={toDegrees(pose.heading)}
+      sceneFunc={(context, shape) => {
+        tracePath(context, noseOf(vehicle), length, width);
+        context.strokeShape(shape);
+      }}
+      stroke={theme[vehicle.which]}
+      strokeWidth={1.25}
+      strokeScaleEnabled={false}
+      dash={dash}
+      opacity={0.8}
+    />
+  );
+}
+
+/** A: an arrow head at the nose. B: a bar across it. */
+function NoseMark({ vehicle, colour }: { vehicle: SceneVehicle; colour: string }) {
+  const nose = noseOf(vehicle);
+  const half = vehicle.body.width / 2;
+  const points =
+    vehicle.which === 'A'
+      ? [nose - 0.55, half * 0.7, nose - 0.12, 0, nose - 0.55, -half * 0.7]
+      : [nose - 0.35, half * 0.8, nose - 0.35, -half * 0.8];
+  return <Line points={points} stroke={colour} strokeWidth={2} strokeScaleEnabled={false} lineJoin="round" />;
+}
+
+/** The outline, corners rounded a little more at the nose. */
+function tracePath(context: Context, nose: number, length: number, width: number): void {
+  const half = width / 2;
+  const tail = nose - length;
+  const [front, rear] = [Math.min(0.45, half), Math.min(0.22, half)];
+  context.beginPath();
+  context.moveTo(tail + rear, -half);
+  context.lineTo(nose - front, -half);
+  context.quadraticCurveTo(nose, -half, nose, -half + front);
+  context.lineTo(nose, half - front);
+  context.quadraticCurveTo(nose, half, nose - front, half);
+  context.lineTo(tail + rear, half);
+  context.quadraticCurveTo(tail, half, tail, half - rear);
+  context.lineTo(tail, -half + rear);
+  context.quadraticCurveTo(tail, -half, tail + rear, -half);
+  context.closePath();
+}
+
+/** A is hatched one way, B the other and wider. */
+function fillBody(context: Context, vehicle: SceneVehicle, theme: Theme): void {
+  const { which, body } = vehicle;
+  const nose = noseOf(vehicle);
+  context.save();
+  tracePath(context, nose, body.length, body.width);
+  context.setAttr('fillStyle', which === 'A' ? theme.ASoft : theme.BSoft);
+  context.fill();
+  context.clip();
+  context.setAttr('strokeStyle', theme[which]);
+  context.setAttr('globalAlpha', 0.3);
+  context.setAttr('lineWidth', 0.025);
+  const slope = which === 'A' ? body.width : -body.width;
+  const step = which === 'A' ? HATCH : HATCH * 2;
+  context.beginPath();
+  for (let x = nose - body.length - body.width; x < nose + body.width; x += step) {
+    context.moveTo(x, -body.width / 2);
+    context.lineTo(x + slope, body.width / 2);
+  }
+  context.stroke();
+  context.restore();
+}

@@ -98,6 +98,9 @@ export function approachTail(scene: Scene, which: Which, speed: number | undefin
   return direction && add(centreOf(vehicle), scale(unit(direction.angle), -tailReach(vehicle) - arrowLength(speed)));
 }
 
+/** Room to draw in, to either side of the contact point, m. */
+const ROOM: Vec = [7, 5];
+
 /** All that a view should show. */
 export function sceneBounds(scene: Scene): Bounds {
   const points = (['A', 'B'] as const).flatMap((which): Vec[] => {
@@ -111,5 +114,5 @@ export function sceneBounds(scene: Scene): Bounds {
       ...(tail ? [tail] : []),
     ];
   });
-  return boundsOf([...points, scene.point.at]);
+  return boundsOf([...points, add(scene.point.at, ROOM), add(scene.point.at, scale(ROOM, -1))]);
 }

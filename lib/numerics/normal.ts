@@ -65,21 +65,38 @@ const farTail = (x: number): number =>
     x +
     1);
 
-/**
- * The z below which a share p of the standard normal distribution lies, 0 < p < 1; relative error about 1e-16 of the method.
- * Source: Wichura (1988), algorithm AS 241, PPND16, Applied Statistics 37-3.
- */
-export function normalQuantile(p: number): number {
-  const q = p - 0.5;
-  if (Math.abs(q) <= 0.425) {
-    const r = 0.180625 - q * q;
-    return q * centre(r);
-  }
-  const size = tailQuantile(Math.sqrt(-log(q < 0 ? p : 1 - p)));
-  return q < 0 ? -size : size;
+/** Beyond this distance from one half the tail formulas hold. */
+const CENTRE = 0.425;
+
+function tailQuantile(p: number): number {
+  const r = Math.sqrt(-log(Math.min(p, 1 - p)));
+  const size = r <= 5 ? middle(r - 1.6) : farTail(r - 5);
+  return p < 0.5 ? -size : size;
 }
 
-const tailQuantile = (r: number): number => (r <= 5 ? middle(r - 1.6) : farTail(r - 5));
+const MOST = 1024;
+const tailShares = new Float64Array(MOST);
+const tailPlaces = new Uint16Array(MOST);
+
+/**
+ * Replaces the shares p[0 .. count - 1], 0 < p < 1 and at most 1024 of them, by the z below which they lie in the standard normal
+ * distribution; relative error about 1e-16 of the method. The centre is worked for all and the tails are gathered, so that
+ * the processor need not guess which comes next.
+ * Source: Wichura (1988), algorithm AS 241, PPND16, Applied Statistics 37-3.
+ */
+export function normalQuantiles(p: Float64Array, count: number): void {
+  if (count > MOST) throw new RangeError(`normalQuantiles takes at most ${MOST} shares, not ${count}`);
+  let tails = 0;
+  for (let k = 0; k < count; k++) {
+    const share = p[k];
+    const q = share - 0.5;
+    tailShares[tails] = share;
+    tailPlaces[tails] = k;
+    tails += Math.abs(q) <= CENTRE ? 0 : 1;
+    p[k] = q * centre(0.180625 - q * q);
+  }
+  for (let i = 0; i < tails; i++) p[tailPlaces[i]] = tailQuantile(tailShares[i]);
+}
 
 /** Ratio of polynomials of Hart 5666. */
 const hart = (x: number): number =>

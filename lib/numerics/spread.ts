@@ -1,4 +1,4 @@
-import { normalCumulative, normalQuantile } from './normal';
+import { normalCumulative, normalQuantiles } from './normal';
 import { fillUniforms, seededState } from './random';
 
 /** How an input varies (JCGM 101:2008 clause 6.4), in the units of its value. A triangular spread has its mode at the value. */
@@ -62,15 +62,10 @@ function toNormal(
   }
   const below = normalCumulative((low - value) / sd);
   const share = normalCumulative((high - value) / sd) - below;
-  if (below === 0 && share === 1) {
-    for (let k = 0; k < count; k++) out[k] = value + sd * normalQuantile(out[k]);
-    return;
-  }
   const least = lowOpen ? low + Number.MIN_VALUE : low; // rounding may reach the edge itself
-  for (let k = 0; k < count; k++) {
-    const x = value + sd * normalQuantile(below + share * out[k]);
-    out[k] = x < least ? least : x > high ? high : x;
-  }
+  for (let k = 0; k < count; k++) out[k] = below + share * out[k];
+  normalQuantiles(out, count);
+  for (let k = 0; k < count; k++) out[k] = Math.min(high, Math.max(least, value + sd * out[k]));
 }
 
 function toRectangular(out: Float64Array, count: number, low: number, high: number): void {

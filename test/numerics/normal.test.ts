@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
-import { normalCumulative, normalQuantile } from '@/lib/numerics/normal';
+import { normalCumulative, normalQuantiles } from '@/lib/numerics/normal';
 import { precise, preciseNormalCumulative, relativeError } from '../support/precise';
+import { normalQuantile } from '../support/sample';
 
 /** Against decimal.js at 50 digits (series and continued fraction, test/support/precise.ts). */
 
@@ -42,4 +43,13 @@ function expectQuantile(p: number): void {
 test('odd about one half', () => {
   for (const p of [0.03125, 0.0625, 0.25, 0.4375]) expect(normalQuantile(1 - p)).toBe(-normalQuantile(p));
   expect(normalQuantile(0.5)).toBe(0);
+});
+
+test('many at once are as one by one, wherever the tails lie among them; more than a block is our mistake', () => {
+  const shares = Float64Array.from({ length: 1024 }, (_, i) => ((i * 619) % 1024) / 1024 + 1 / 4096);
+  const all = shares.slice();
+  normalQuantiles(all, 1000);
+  expect(Array.from(all.subarray(0, 1000))).toEqual(Array.from(shares.subarray(0, 1000), normalQuantile));
+  expect(all.subarray(1000)).toEqual(shares.subarray(1000));
+  expect(() => normalQuantiles(new Float64Array(2000), 1025)).toThrow(RangeError);
 });

@@ -2,8 +2,8 @@ import * as fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { meanAndSd, summarise } from '@/lib/numerics/quantile';
 import { fillUniforms, seededState } from '@/lib/numerics/random';
-import { normalQuantile } from '@/lib/numerics/normal';
 import { plainSummary } from '../support/plain-summary';
+import { normalQuantile } from '../support/sample';
 
 const uniforms = (n: number, stream: string): Float64Array => {
   const out = new Float64Array(n);

@@ -1,7 +1,15 @@
+import { normalQuantiles } from '@/lib/numerics/normal';
 import { type DrawSpread, type DrawSupport, fillBlock } from '@/lib/numerics/spread';
 import { fillUniforms, seededState } from '@/lib/numerics/random';
 
 /** Samples for tests of the uncertainty engine: its own spreads, and the ones that it does not have, built from its uniforms. */
+
+/** One quantile of the standard normal distribution. */
+export function normalQuantile(p: number): number {
+  const one = Float64Array.of(p);
+  normalQuantiles(one, 1);
+  return one[0];
+}
 
 const BLOCK = 1024;
 const ANYWHERE: DrawSupport = { low: -Infinity, high: Infinity, lowOpen: false };

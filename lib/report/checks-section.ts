@@ -3,7 +3,8 @@ import type { PrintedCheck, Section } from './report';
 
 const ORDER: readonly Level[] = ['fail', 'caution', 'note', 'pass'];
 
-const TITLES: Record<string, string> = {
+/** What a check makes sure of, by its id. */
+export const CHECK_TITLES: Record<string, string> = {
   energyGain: 'Energy is lost, not gained',
   restitutionRange: 'Restitution between 0 and 1',
   friction: 'Impulse ratio within believable friction',
@@ -43,7 +44,7 @@ export function checksSection({ checks }: Result): Section {
 
 const printed = ({ id, level, says, advice, source }: Check): PrintedCheck => ({
   level,
-  title: TITLES[id] ?? id,
+  title: CHECK_TITLES[id] ?? id,
   says,
   advice: advice ?? '',
   source,

@@ -45,7 +45,8 @@ export function reproduceSection(casefile: CaseFile, result: Result): Section {
   };
 }
 
-function impossibleText({ impossible, draws }: Result): string {
+/** How many draws were impossible, and why, in words. */
+export function impossibleText({ impossible, draws }: Result): string {
   const counted = Object.entries(impossible).filter(([, count]) => count > 0);
   if (counted.length === 0) return 'none';
   const total = counted.reduce((sum, [, count]) => sum + count, 0);

@@ -1,0 +1,71 @@
+import type { CaseFile } from '@/lib/casefile/schema';
+import { percent, unitText } from '@/lib/report/numbers';
+import type { ResultName } from '@/lib/results/names';
+import type { Result } from '@/lib/results/result';
+import { type SpeedRow, speedRows } from '@/lib/results/series';
+import type { Shapes } from '@/lib/solve-case';
+import type { UnitSystem } from '@/lib/units/dimension';
+import { said, unitsShown, vehicleOf } from './result-words';
+import { SpeedBands } from './speed-bands';
+import styles from './speed-rows.module.css';
+
+const NAMES: Partial<Record<ResultName, string>> = {
+  'A.approachSpeed': 'Approach speed A',
+  'B.approachSpeed': 'Approach speed B',
+  'A.deltaV': 'Delta-V A',
+  'B.deltaV': 'Delta-V B',
+  closingSpeed: 'Closing speed',
+};
+
+/** The speeds in figures, and beside them how they are distributed on one axis. */
+export function SpeedRows({ result, shapes, of }: { result: Result; shapes: Shapes; of: CaseFile }) {
+  const units = unitsShown(of);
+  const rows = speedRows(result, shapes);
+  return (
+    <div className={styles.speeds}>
+      <table className={styles.figures}>
+        <caption className="visually-hidden">Speeds: median and {percent(result.coverage)} interval</caption>
+        <thead className="visually-hidden">
+          <tr>
+            <th scope="col">Speed</th>
+            <th scope="col">Median</th>
+            <th scope="col">Interval</th>
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map((row) => (
+            <Figures key={row.name} row={row} result={result} units={units} />
+          ))}
+        </tbody>
+      </table>
+      <SpeedBands
+        rows={rows}
+        units={units}
+        label={`Densities of the speeds on one axis in ${unitText('speed', units)}; the figures are in the table beside it.`}
+      />
+      <p className={styles.key}>
+        <span>tick: median · bar: {percent(result.coverage)} interval · outline: where the draws lie</span>
+        <span>speed, {unitText('speed', units)}</span>
+      </p>
+    </div>
+  );
+}
+
+function Figures({ row, result, units }: { row: SpeedRow; result: Result; units: UnitSystem }) {
+  const found = said(result, row.name, units);
+  if (!found) return null;
+  return (
+    <tr>
+      <th scope="row">
+        <i className={styles.swatch} data-vehicle={vehicleOf(row.name) ?? 'pair'} aria-hidden />
+        {NAMES[row.name]}
+      </th>
+      <td className={styles.median} data-bound={found.median !== undefined}>
+        {found.figure} <small>{found.unit}</small>
+      </td>
+      <td className={styles.interval} title={found.median && `median ${found.median} ${found.unit}`}>
+        {found.interval}
+      </td>
+    </tr>
+  );
+}

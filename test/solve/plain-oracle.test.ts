@@ -2,17 +2,16 @@ import { readFileSync, readdirSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { parseCaseText } from '@/lib/casefile/parse';
 import type { CaseFile } from '@/lib/casefile/schema';
-import { fillBlock } from '@/lib/numerics/spread';
 import type { Result } from '@/lib/results/result';
 import { solveCase } from '@/lib/solve-case';
-import { type DrawOf, plainInputs, plainMonteCarlo, plainSupport } from '../support/plain-monte-carlo';
+import { engineDraws } from '../support/plain-draws';
+import { plainMonteCarlo } from '../support/plain-monte-carlo';
 
 /**
  * Whole cases against the plain reference solver (test/support/plain-monte-carlo.ts) over the same draws: every result, its
  * mean, spread and intervals, and the impossible draws by reason. The two share the random numbers and nothing else.
  */
 const DRAWS = 4000;
-const BLOCK = 1024;
 const SEED = 77;
 const COVERAGE = 0.95;
 
@@ -21,24 +20,6 @@ const read = (path: string): CaseFile => {
   if (!parsed.ok) throw new Error(JSON.stringify(parsed.issues));
   return parsed.casefile;
 };
-
-/** The engine's draws, in the units of the case file. */
-function engineDraws(casefile: CaseFile): DrawOf {
-  const columns = new Map(
-    plainInputs(casefile).map(({ path, quantity }) => {
-      const column = new Float64Array(Math.ceil(DRAWS / BLOCK) * BLOCK);
-      const input = {
-        value: quantity.value,
-        spread: quantity.spread ?? { shape: 'fixed' as const },
-        support: plainSupport(casefile, path),
-      };
-      for (let at = 0; at < DRAWS; at += BLOCK)
-        fillBlock(column.subarray(at, at + BLOCK), BLOCK, input, SEED, path, at / BLOCK);
-      return [path, column] as const;
-    }),
-  );
-  return (path, k) => (columns.get(path) as Float64Array)[k];
-}
 
 /** Figures are held to 1e-9 of themselves and of their own spread, or of the unit where both are nothing. */
 function expectClose(found: number, expected: number, size: number, what: string): void {
@@ -75,7 +56,7 @@ describe('the engine answers as the plain reference does', () => {
       method,
       DRAWS,
       casefile.analysis.coverage ?? COVERAGE,
-      engineDraws(casefile),
+      engineDraws(casefile, SEED, DRAWS),
     );
     if (outcome.kind !== 'solved') throw new Error(JSON.stringify(outcome));
     const { result } = outcome;

@@ -1,0 +1,8 @@
+import { parentPort } from 'node:worker_threads';
+import type { CaseFile } from '@/lib/casefile/schema';
+import { solveCase } from '@/lib/solve-case';
+
+/** The engine in a thread, as the page has it in a web worker. */
+parentPort?.on('message', async ({ casefile, draws }: { casefile: CaseFile; draws: number }) => {
+  parentPort?.postMessage(await solveCase(casefile, { draws, sensitivity: false }));
+});

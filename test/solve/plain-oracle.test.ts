@@ -4,7 +4,7 @@ import { parseCaseText } from '@/lib/casefile/parse';
 import type { CaseFile } from '@/lib/casefile/schema';
 import type { Result } from '@/lib/results/result';
 import { solveCase } from '@/lib/solve-case';
-import { engineDraws } from '../support/plain-draws';
+import { engineDraws } from '../support/engine-draws';
 import { plainMonteCarlo } from '../support/plain-monte-carlo';
 
 /**

@@ -5,8 +5,6 @@ import {
   type ImpactAnswer,
   type ImpactState,
   LEAST_RESTITUTION,
-  REASONS,
-  type Reason,
   emptyAnswer,
   solveDirections,
   solveRestitution,

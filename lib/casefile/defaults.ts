@@ -9,7 +9,11 @@ export const DEFAULT_DRAWS = 20_000;
 export const DEFAULT_SEED = 1;
 export const DEFAULT_COVERAGE = 0.95;
 
-const normal = (value: number, sd: number): Quantity => ({ value, spread: { shape: 'normal', sd }, source: DEFAULT_SOURCE });
+const normal = (value: number, sd: number): Quantity => ({
+  value,
+  spread: { shape: 'normal', sd },
+  source: DEFAULT_SOURCE,
+});
 const rectangular = (value: number, low: number, high: number): Quantity => ({
   value,
   spread: { shape: 'rectangular', low, high },
@@ -38,7 +42,11 @@ const defaultVehicle = (name: string): Vehicle => ({
   seats: [],
 });
 
-const defaultPose = (x: number, heading: number) => ({ x: normal(x, 0.1), y: normal(0, 0.1), heading: normal(heading, 2) });
+const defaultPose = (x: number, heading: number) => ({
+  x: normal(x, 0.1),
+  y: normal(0, 0.1),
+  heading: normal(heading, 2),
+});
 
 /**
  * One leg over dry asphalt. Friction N(0.74, 0.06): dry asphalt, typical uncertainties of the trade; share 0.5 with

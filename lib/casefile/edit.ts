@@ -40,7 +40,9 @@ function applied(document: unknown, edit: Edit): unknown {
       return replaced(document, edit.path.split('.'), shifted(node, edit.value, edit.source));
     }
     case 'set':
-      return Object.is(nodeAt(document, edit.path), edit.to) ? document : replaced(document, edit.path.split('.'), edit.to);
+      return Object.is(nodeAt(document, edit.path), edit.to)
+        ? document
+        : replaced(document, edit.path.split('.'), edit.to);
     case 'insert': {
       const list = (nodeAt(document, edit.path) as unknown[] | null | undefined) ?? [];
       return replaced(document, edit.path.split('.'), list.toSpliced(edit.index, 0, edit.entry));

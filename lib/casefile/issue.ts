@@ -32,7 +32,7 @@ const described = (input: unknown): string => {
   if (Array.isArray(input)) return 'a list';
   if (typeof input === 'object') return 'an object';
   if (typeof input === 'string') return JSON.stringify(input.length > 40 ? `${input.slice(0, 40)}…` : input);
-  return String(input);
+  return typeof input === 'boolean' ? String(input) : 'something else';
 };
 
 const listed = (values: readonly unknown[]): string => values.map((v) => JSON.stringify(v)).join(' or ');
@@ -54,9 +54,7 @@ type RawIssue = z.core.$ZodIssue;
 const closestBranch = (branches: readonly RawIssue[][]): RawIssue[] => {
   const depth = (branch: RawIssue[]): number => Math.max(0, ...branch.map((issue) => issue.path.length));
   const unknown = (branch: RawIssue[]): number => branch.filter((issue) => issue.code === 'unrecognized_keys').length;
-  return [...branches].sort(
-    (a, b) => unknown(a) - unknown(b) || depth(b) - depth(a) || a.length - b.length,
-  )[0] ?? [];
+  return [...branches].sort((a, b) => unknown(a) - unknown(b) || depth(b) - depth(a) || a.length - b.length)[0] ?? [];
 };
 
 /** Flattens one zod issue into plain problems with dotted paths. `root` is the document that was checked. */
@@ -72,10 +70,12 @@ export function issuesFromZod(issue: RawIssue, root: unknown, base: readonly Pro
       if (input === undefined) return one('is missing');
       return one(`must be ${WANTED[issue.expected] ?? issue.expected}, found ${described(input)}`);
     case 'too_small':
-      if (issue.origin === 'array' || issue.origin === 'string') return one(sizeSays(issue.origin, issue.minimum, 'least'));
+      if (issue.origin === 'array' || issue.origin === 'string')
+        return one(sizeSays(issue.origin, issue.minimum, 'least'));
       return one(bound(issue.minimum, issue.inclusive, 'least'));
     case 'too_big':
-      if (issue.origin === 'array' || issue.origin === 'string') return one(sizeSays(issue.origin, issue.maximum, 'most'));
+      if (issue.origin === 'array' || issue.origin === 'string')
+        return one(sizeSays(issue.origin, issue.maximum, 'most'));
       return one(bound(issue.maximum, issue.inclusive, 'most'));
     case 'invalid_value':
       if (input === undefined) return one('is missing');
@@ -84,14 +84,14 @@ export function issuesFromZod(issue: RawIssue, root: unknown, base: readonly Pro
       if (issue.errors.length === 0) {
         const shape = issue.discriminator ?? 'kind';
         const inner = valueAt(root, [...keys]);
-        return inner === undefined
-          ? one('is missing')
-          : one(`must be a known ${shape}, found ${described(inner)}`);
+        return inner === undefined ? one('is missing') : one(`must be a known ${shape}, found ${described(inner)}`);
       }
       return closestBranch(issue.errors).flatMap((inner) => issuesFromZod(inner, root, keys));
     }
     case 'invalid_format':
-      return one(issue.format === 'regex' ? 'must be a SHA-256 in lower-case hexadecimal' : `must be a valid ${issue.format}`);
+      return one(
+        issue.format === 'regex' ? 'must be a SHA-256 in lower-case hexadecimal' : `must be a valid ${issue.format}`,
+      );
     default:
       return one(issue.message);
   }

@@ -7,13 +7,19 @@ export function needsOf(casefile: CaseFile, method: Method = casefile.analysis.m
   const lacking = [...BY_METHOD[method](casefile)];
   if (casefile.analysis.contact === 'lasting') {
     if (method === 'restitution')
-      lacking.push({ path: 'analysis.contact', says: 'the method restitution has no lasting contact: choose instant, or another method' });
+      lacking.push({
+        path: 'analysis.contact',
+        says: 'the method restitution has no lasting contact: choose instant, or another method',
+      });
     if (!casefile.pulse) lacking.push({ path: 'pulse', says: 'needed by the contact lasting' });
   }
   return lacking;
 }
 
-const needed = (path: string, method: Method, why = ''): Issue => ({ path, says: `needed by the method ${method}${why}` });
+const needed = (path: string, method: Method, why = ''): Issue => ({
+  path,
+  says: `needed by the method ${method}${why}`,
+});
 
 function restIssues(id: VehicleId, departure: Departure | null | undefined, method: Method): Issue[] {
   if (departure?.kind !== 'spin') return [];
@@ -43,7 +49,8 @@ const BY_METHOD: Record<Method, (casefile: CaseFile) => Issue[]> = {
 
   fit: (casefile) => {
     const observations = observationsOf(casefile);
-    if (observations.length === 0) return [{ path: 'departure', says: 'the method fit needs at least one observation' }];
+    if (observations.length === 0)
+      return [{ path: 'departure', says: 'the method fit needs at least one observation' }];
     return observations
       .filter(({ quantities }) => quantities.every((q) => !q.spread || q.spread.shape === 'fixed'))
       .map(({ path }) => ({ path, says: 'needs a spread: an observation without one would weigh infinitely' }));
@@ -59,7 +66,8 @@ interface Observation {
 function departureObservations(id: VehicleId, departure: Departure | null | undefined): Observation[] {
   if (!departure) return [];
   const at = `departure.${id}`;
-  const single = (path: string, q: Quantity | null | undefined): Observation[] => (q ? [{ path, quantities: [q] }] : []);
+  const single = (path: string, q: Quantity | null | undefined): Observation[] =>
+    q ? [{ path, quantities: [q] }] : [];
   if (departure.kind === 'spin')
     return (['x', 'y', 'heading'] as const).flatMap((key) => single(`${at}.rest.${key}`, departure.rest[key]));
   const travel = departure.legs.flatMap((leg) => [leg.distance, leg.friction, leg.share, leg.grade]);

@@ -15,7 +15,8 @@ const refuse = (says: string, path = DOCUMENT): Parsed => ({ ok: false, issues: 
  * MAX_DEPTH levels, no duplicate key. Never throws for what a user wrote; every problem is reported with its path.
  */
 export function parseCase(bytes: Uint8Array): Parsed {
-  if (bytes.byteLength > MAX_BYTES) return refuse(`is ${bytes.byteLength} bytes long; at most ${MAX_BYTES} (8 MiB) are read`);
+  if (bytes.byteLength > MAX_BYTES)
+    return refuse(`is ${bytes.byteLength} bytes long; at most ${MAX_BYTES} (8 MiB) are read`);
   const text = decode(bytes);
   if (text === null) return refuse('is not UTF-8 text: save the file as UTF-8');
   return parseCaseText(text);

@@ -6,7 +6,12 @@ import { isQuantity, nodeAt, supportOf } from './quantities';
  * problem is reported at once; looks only at what has the right type.
  */
 export function relationIssues(document: unknown): Issue[] {
-  return [...spreadIssues(document), ...vehicleIssues(document), ...damageIssues(document), ...hypothesisIssues(document)];
+  return [
+    ...spreadIssues(document),
+    ...vehicleIssues(document),
+    ...damageIssues(document),
+    ...hypothesisIssues(document),
+  ];
 }
 
 interface Limits {
@@ -22,7 +27,10 @@ function limitIssues(path: string, { value, low, high }: Limits): Issue[] {
     issues.push({ path: `${path}.value`, says: `must lie between low (${low}) and high (${high}), found ${value}` });
   const support = supportOf(path);
   if (low < support.low || (support.lowOpen && low <= support.low))
-    issues.push({ path: `${path}.spread.low`, says: `must be ${support.lowOpen ? 'greater than' : 'at least'} ${support.low}` });
+    issues.push({
+      path: `${path}.spread.low`,
+      says: `must be ${support.lowOpen ? 'greater than' : 'at least'} ${support.low}`,
+    });
   if (high > support.high) issues.push({ path: `${path}.spread.high`, says: `must be at most ${support.high}` });
   return issues;
 }
@@ -83,7 +91,8 @@ function damageIssues(document: unknown): Issue[] {
     const path = `${at}.stations`;
     if (Array.isArray(depths) && depths.length !== stations.length)
       return [{ path, says: `must have one entry for each depth (${depths.length}), found ${stations.length}` }];
-    if (stations.some((s, i) => i > 0 && !(s > stations[i - 1]))) return [{ path, says: 'must increase from entry to entry' }];
+    if (stations.some((s, i) => i > 0 && !(s > stations[i - 1])))
+      return [{ path, says: 'must increase from entry to entry' }];
     if (stations[0] !== 0 || Math.abs(stations[stations.length - 1] - width) > 1e-9)
       return [{ path, says: `must run from 0 to the width (${width})` }];
     return [];
@@ -117,13 +126,15 @@ function hypothesisIssues(document: unknown): Issue[] {
   return hypotheses.flatMap((hypothesis, index) =>
     Object.entries((nodeAt(hypothesis, 'set') as Record<string, unknown>) ?? {}).flatMap(([path, value]): Issue[] => {
       const at = `hypotheses.${index}.set.${path}`;
-      if (!SETTABLE.some((pattern) => pattern.test(path))) return [{ path: at, says: 'is no path of a quantity or a departure' }];
+      if (!SETTABLE.some((pattern) => pattern.test(path)))
+        return [{ path: at, says: 'is no path of a quantity or a departure' }];
       const wantsDeparture = /^departure\.[AB]$/.test(path);
       if (value !== null && wantsDeparture === isQuantity(value))
         return [{ path: at, says: wantsDeparture ? 'must be a departure or null' : 'must be a quantity or null' }];
       if (!isQuantity(value)) return [];
       const support = supportOf(path);
-      const outside = value.value < support.low || value.value > support.high || (support.lowOpen && value.value === support.low);
+      const outside =
+        value.value < support.low || value.value > support.high || (support.lowOpen && value.value === support.low);
       return outside ? [{ path: `${at}.value`, says: `must lie within ${support.low} and ${support.high}` }] : [];
     }),
   );

@@ -29,7 +29,8 @@ class UsageError extends Error {}
 
 function wholeNumber(option: string, text: string | undefined, low: number, high: number): number {
   const n = text !== undefined && /^\d+$/.test(text) ? Number(text) : NaN;
-  if (!(n >= low && n <= high)) throw new UsageError(`${option}: must be a whole number from ${low} to ${high}, found ${text ?? 'nothing'}`);
+  if (!(n >= low && n <= high))
+    throw new UsageError(`${option}: must be a whole number from ${low} to ${high}, found ${text ?? 'nothing'}`);
   return n;
 }
 
@@ -41,7 +42,8 @@ function readCommand(words: readonly string[]): Command {
     else if (word === '--seed') command.seed = wholeNumber(word, words[++i], 0, Number.MAX_SAFE_INTEGER);
     else if (word === '--method') {
       const method = METHODS.find((m) => m === words[i + 1]);
-      if (!method) throw new UsageError(`--method: must be one of ${METHODS.join(', ')}, found ${words[i + 1] ?? 'nothing'}`);
+      if (!method)
+        throw new UsageError(`--method: must be one of ${METHODS.join(', ')}, found ${words[i + 1] ?? 'nothing'}`);
       command.method = method;
       i++;
     } else if (word === '--out') {
@@ -65,7 +67,10 @@ async function solveFile(file: string, command: Command): Promise<Solved> {
   try {
     bytes = readFileSync(file === '-' ? 0 : file);
   } catch (error) {
-    const why = (error as NodeJS.ErrnoException).code === 'ENOENT' ? 'no such file' : `cannot be read (${(error as Error).message})`;
+    const why =
+      (error as NodeJS.ErrnoException).code === 'ENOENT'
+        ? 'no such file'
+        : `cannot be read (${(error as Error).message})`;
     return { code: 2, issues: [{ path: file, says: why }] };
   }
   const parsed = parseCase(bytes);

@@ -10,7 +10,10 @@ export interface Solve {
 }
 
 export interface WorkerPool {
-  solve(casefile: CaseFile, options: { draws?: number; sensitivity: boolean; onProgress?: (done: number) => void }): Solve;
+  solve(
+    casefile: CaseFile,
+    options: { draws?: number; sensitivity: boolean; onProgress?: (done: number) => void },
+  ): Solve;
   close(): void;
 }
 

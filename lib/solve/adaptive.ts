@@ -17,7 +17,13 @@ export const batchSize = (coverage: number, perTask: number): number =>
   Math.ceil(Math.max(100 / (1 - coverage), 1e4) / perTask) * perTask;
 
 /** The figures whose printed digits must settle. */
-const JUDGED = ['A.approachSpeed', 'B.approachSpeed', 'A.deltaV', 'B.deltaV', 'closingSpeed'] as const satisfies FigureName[];
+const JUDGED = [
+  'A.approachSpeed',
+  'B.approachSpeed',
+  'A.deltaV',
+  'B.deltaV',
+  'closingSpeed',
+] as const satisfies FigureName[];
 
 export const isSettled = (batches: readonly DrawsDone[], coverage: number): boolean =>
   JUDGED.every((name) => isFigureSettled(batches, name, coverage));
@@ -29,7 +35,9 @@ function isFigureSettled(batches: readonly DrawsDone[], name: FigureName, covera
   const pooled = Math.sqrt(average(bands.map(({ sd }) => sd * sd)));
   if (pooled === 0) return true;
   const tolerance = toleranceOf(pooled);
-  return (['mean', 'sd', 'low', 'high'] as const).every((key) => 2 * errorOfAverage(bands.map((band) => band[key])) <= tolerance);
+  return (['mean', 'sd', 'low', 'high'] as const).every(
+    (key) => 2 * errorOfAverage(bands.map((band) => band[key])) <= tolerance,
+  );
 }
 
 /** Half a unit of the second significant digit of u. */

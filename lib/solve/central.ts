@@ -23,7 +23,13 @@ export function solveCentral(problem: Problem): Central {
   const figures = Object.fromEntries(
     figuresOf(problem).map((name) => [name, columnOf(kernel.columns, name)[0]]),
   ) as Central['figures'];
-  return { reason, failingLeg: reason === 'leg' ? failingLeg(problem) : null, figures, state: kernel.state, answer: kernel.answer };
+  return {
+    reason,
+    failingLeg: reason === 'leg' ? failingLeg(problem) : null,
+    figures,
+    state: kernel.state,
+    answer: kernel.answer,
+  };
 }
 
 /** The first leg, going back from rest, whose start has no real speed: A before B. */
@@ -33,7 +39,13 @@ function failingLeg({ inputs, vehicles }: Problem): Central['failingLeg'] {
     let squared = inputs[endSpeed].value ** 2;
     for (let leg = legs.length - 1; leg >= 0; leg--) {
       const { distance, friction, share, grade } = legs[leg];
-      squared = legStartSpeedSquared(squared, inputs[distance].value, inputs[friction].value, inputs[share].value, inputs[grade].value);
+      squared = legStartSpeedSquared(
+        squared,
+        inputs[distance].value,
+        inputs[friction].value,
+        inputs[share].value,
+        inputs[grade].value,
+      );
       if (!(squared >= 0)) return { vehicle, leg };
     }
   }

@@ -21,7 +21,15 @@ const VEHICLE_FIGURES = [
   'yawRateChange',
 ] as const;
 
-const PAIR_FIGURES = ['closingSpeed', 'slidingSpeed', 'restitution', 'impulseRatio', 'impulse', 'energyLost', 'damageClosingSpeed'] as const;
+const PAIR_FIGURES = [
+  'closingSpeed',
+  'slidingSpeed',
+  'restitution',
+  'impulseRatio',
+  'impulse',
+  'energyLost',
+  'damageClosingSpeed',
+] as const;
 
 export type VehicleFigure = (typeof VEHICLE_FIGURES)[number];
 export type PairFigure = (typeof PAIR_FIGURES)[number];

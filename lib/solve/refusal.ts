@@ -33,6 +33,7 @@ export function refusalOf(problem: Problem, central: Central): Issue | null {
       path: 'impact.plane',
       says: 'the vehicles do not part at the contact point after contact, so the restitution cannot tell how fast they closed: look at the travel after contact, the yaw rates, the contact point and the plane',
     };
-  if (reason === 'notFinite') return { path: 'vehicles', says: 'the figures are too large or too small to compute with' };
+  if (reason === 'notFinite')
+    return { path: 'vehicles', says: 'the figures are too large or too small to compute with' };
   return null;
 }

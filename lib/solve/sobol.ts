@@ -9,7 +9,6 @@ export interface SobolIndices {
   total: number[];
 }
 
-
 /** Two independent sets of streams, apart from those of the draws. */
 const SET_A = ' (set A)';
 const SET_B = ' (set B)';
@@ -20,7 +19,12 @@ const SET_B = ' (set B)';
  *   first = 1 - mean (f(B) - f(AB))^2 / 2V,   total = mean (f(A) - f(AB))^2 / 2V.
  * Rows where any of the three is an impossible draw are left out. `blocks` blocks of draws.
  */
-export function sobolIndices(problem: Problem, slots: readonly number[], blocks: number, figures: FigureName[]): SobolIndices[] {
+export function sobolIndices(
+  problem: Problem,
+  slots: readonly number[],
+  blocks: number,
+  figures: FigureName[],
+): SobolIndices[] {
   const [a, b, ab] = [new Kernel(problem), new Kernel(problem), new Kernel(problem)];
   a.inputs.forEach((column, slot) => (ab.inputs[slot] = column));
   const sums = slots.map(() => figures.map(() => new Sums()));

@@ -61,7 +61,12 @@ export async function solve(
 }
 
 /** Runs tasks and says after each what share of them is done. */
-function runCounted(problem: Problem, tasks: Task[], run: RunTasks, onShare: (done: number) => void): Promise<TaskDone[]> {
+function runCounted(
+  problem: Problem,
+  tasks: Task[],
+  run: RunTasks,
+  onShare: (done: number) => void,
+): Promise<TaskDone[]> {
   let finished = 0;
   return run(problem, tasks, () => onShare(++finished / tasks.length));
 }
@@ -69,10 +74,10 @@ function runCounted(problem: Problem, tasks: Task[], run: RunTasks, onShare: (do
 /** Batches until the printed digits have settled; the digits do not depend on how the tasks are spread. */
 async function drawUntilSettled(problem: Problem, coverage: number, run: RunTasks): Promise<TaskDone[]> {
   const size = batchSize(coverage, DRAWS_PER_TASK);
-  let batches: DrawsDone[] = [];
+  const batches: DrawsDone[] = [];
   for (let wanted = 2; wanted <= MOST_BATCHES; wanted *= 2) {
     const more = drawTasks(batches.length * size, (wanted - batches.length) * size, size);
-    batches = [...batches, ...(await run(problem, more)).filter((d) => d.kind === 'draws')];
+    batches.push(...(await run(problem, more)).filter((d) => d.kind === 'draws'));
     if (isSettled(batches, coverage)) break;
   }
   return batches;
@@ -113,7 +118,6 @@ function joined(parts: DrawsDone[]): Solution['values'] {
 function counted(parts: DrawsDone[]): Solution['impossible'] {
   const counts: Record<string, number> = {};
   for (const part of parts)
-    for (const [reason, count] of Object.entries(part.impossible))
-      counts[reason] = (counts[reason] ?? 0) + count;
+    for (const [reason, count] of Object.entries(part.impossible)) counts[reason] = (counts[reason] ?? 0) + count;
   return counts;
 }

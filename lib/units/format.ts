@@ -12,7 +12,8 @@ const shown = (si: number, dimension: Dimension, system: UnitSystem): Decimal =>
   new Decimal(si).div(unitOf(dimension, system).factor);
 
 /** An SI value (angles: degrees) in the display unit. */
-export const toDisplay = (si: number, dimension: Dimension, system: UnitSystem): number => shown(si, dimension, system).toNumber();
+export const toDisplay = (si: number, dimension: Dimension, system: UnitSystem): number =>
+  shown(si, dimension, system).toNumber();
 
 /** A value in the display unit back to SI (angles: degrees), exact in decimals. */
 export const fromDisplay = (value: number, dimension: Dimension, system: UnitSystem): number =>
@@ -22,15 +23,28 @@ export const fromDisplay = (value: number, dimension: Dimension, system: UnitSys
  * A value in the display unit, without the unit. With `decimals` rounded half away from zero to that many places; without,
  * every digit that was entered. A true minus sign; never minus zero.
  */
-export function formatValue(si: number, dimension: Dimension, system: UnitSystem, { decimals }: { decimals?: number } = {}): string {
+export function formatValue(
+  si: number,
+  dimension: Dimension,
+  system: UnitSystem,
+  { decimals }: { decimals?: number } = {},
+): string {
   const value = shown(si, dimension, system);
-  const rounded = decimals === undefined ? value.toSignificantDigits(ENTRY_DIGITS) : value.toDecimalPlaces(decimals, Decimal.ROUND_HALF_UP);
+  const rounded =
+    decimals === undefined
+      ? value.toSignificantDigits(ENTRY_DIGITS)
+      : value.toDecimalPlaces(decimals, Decimal.ROUND_HALF_UP);
   const text = decimals === undefined ? rounded.toFixed() : rounded.toFixed(decimals);
   return /^-0*\.?0*$/.test(text) ? text.slice(1) : text.replace('-', MINUS);
 }
 
 /** A value with its unit: «26.6 km/h», «19.4°», «0.22». */
-export function formatWithUnit(si: number, dimension: Dimension, system: UnitSystem, options: { decimals?: number } = {}): string {
+export function formatWithUnit(
+  si: number,
+  dimension: Dimension,
+  system: UnitSystem,
+  options: { decimals?: number } = {},
+): string {
   const { symbol } = unitOf(dimension, system);
   const figure = formatValue(si, dimension, system, options);
   if (symbol === '') return figure;
@@ -66,5 +80,11 @@ export function formatEstimate(
 ): Estimate {
   const decimals = decimalsFor(u, dimension, system, options);
   const print = (si: number): string => formatValue(si, dimension, system, { decimals });
-  return { value: print(value), u: print(u), low: print(low), high: print(high), unit: unitOf(dimension, system).symbol };
+  return {
+    value: print(value),
+    u: print(u),
+    low: print(low),
+    high: print(high),
+    unit: unitOf(dimension, system).symbol,
+  };
 }

@@ -18,7 +18,11 @@ const RANGE = /\s*(?:\.\.\.?|…|\bto\b)\s*/;
  * a dimension. A number without a unit is in the unit shown by `system`. Decimal comma or point; conversion in decimals.
  */
 export function parseEntry(text: string, dimension: Dimension, system: UnitSystem): Entry {
-  const clean = text.replaceAll('\u2212', '-').replaceAll('\u2013', '-').replaceAll(/[\u00a0\u202f\u2009]/g, ' ').trim();
+  const clean = text
+    .replaceAll('\u2212', '-')
+    .replaceAll('\u2013', '-')
+    .replaceAll(/[\u00a0\u202f\u2009]/g, ' ')
+    .trim();
   if (clean === '') return { ok: false, says: `nothing was entered; write a number${inWhat(dimension, system)}` };
   try {
     const [main, spread, ...more] = clean.split(PLUS_MINUS);
@@ -44,7 +48,10 @@ function withSpread(main: string, spread: string, dimension: Dimension, system: 
   const shared = trailingUnit(spread);
   const sharesUnit = shared !== '' && shared !== '%' && trailingUnit(main) === '';
   const value = read(sharesUnit ? `${main} ${shared}` : main, dimension, system);
-  const size = /%$/.test(spread) && dimension !== 'ratio' ? read(spread, 'ratio', system).times(value.abs()) : read(withUnitOf(main, spread), dimension, system);
+  const size =
+    spread.endsWith('%') && dimension !== 'ratio'
+      ? read(spread, 'ratio', system).times(value.abs())
+      : read(withUnitOf(main, spread), dimension, system);
   if (!size.gt(0)) throw new Unreadable('the spread after ± must be greater than 0');
   return { ok: true, value: value.toNumber(), spread: { shape: 'normal', sd: size.toNumber() } };
 }
@@ -58,7 +65,11 @@ const withUnitOf = (first: string, second: string): string =>
 
 function fromRange(from: string, to: string, dimension: Dimension, system: UnitSystem): Entry {
   const high = read(withUnitOf(from, to), dimension, system);
-  const low = read(trailingUnit(from) === '' && trailingUnit(to) !== '' ? `${from} ${trailingUnit(to)}` : from, dimension, system);
+  const low = read(
+    trailingUnit(from) === '' && trailingUnit(to) !== '' ? `${from} ${trailingUnit(to)}` : from,
+    dimension,
+    system,
+  );
   if (!low.lt(high)) throw new Unreadable('the first end of a range must be the smaller one');
   const spread = { shape: 'rectangular', low: low.toNumber(), high: high.toNumber() } as const;
   return { ok: true, value: low.plus(high).div(2).toNumber(), spread };
@@ -67,7 +78,10 @@ function fromRange(from: string, to: string, dimension: Dimension, system: UnitS
 const NUMBER = String.raw`(?:\d{1,3}(?: \d{3})+(?!\d)|\d+)(?:[.,]\d+)*|[.,]\d+`;
 const FRACTION = String.raw`\d+\s*/\s*\d+`;
 /** A number, perhaps with a fraction, and the unit behind it. */
-const PIECE = new RegExp(String.raw`^\s*(?:(${FRACTION})|(${NUMBER})(?:\s+(${FRACTION}))?(e[+-]?\d+)?)\s*([^\d\s.,+-][^\d]*?)?\s*(?=[\d.,]|$)`, 'i');
+const PIECE = new RegExp(
+  String.raw`^\s*(?:(${FRACTION})|(${NUMBER})(?:\s+(${FRACTION}))?(e[+-]?\d+)?)\s*([^\d\s.,+-][^\d]*?)?\s*(?=[\d.,]|$)`,
+  'i',
+);
 
 /** One figure, perhaps of several parts as in 12 ft 6 in, in SI. */
 function read(text: string, dimension: Dimension, system: UnitSystem): Decimal {
@@ -81,7 +95,8 @@ function read(text: string, dimension: Dimension, system: UnitSystem): Decimal {
     if (!piece) throw new Unreadable(`«${text.trim()}» is not a number${inWhat(dimension, system)}`);
     const [whole, fractionAlone, figure, fraction, exponent, spelling] = piece;
     const found = unitFor(spelling?.trim(), dimension, system);
-    if (finer && !found.factor.lt(finer.factor)) throw new Unreadable(`«${text.trim()}» has its units in the wrong order`);
+    if (finer && !found.factor.lt(finer.factor))
+      throw new Unreadable(`«${text.trim()}» has its units in the wrong order`);
     finer = found;
     let value = fractionAlone ? ratio(fractionAlone) : number(figure);
     if (fraction) value = value.plus(ratio(fraction));
@@ -96,9 +111,13 @@ function unitFor(spelling: string | undefined, dimension: Dimension, system: Uni
   if (!spelling) return unitOf(dimension, system);
   const found = unitSpelled(dimension, spelling.replaceAll(/\s+/g, ' '));
   if (found) return found;
-  const known = unitsFor(dimension, system).map(({ symbol }) => symbol).filter((symbol) => symbol !== '');
+  const known = unitsFor(dimension, system)
+    .map(({ symbol }) => symbol)
+    .filter((symbol) => symbol !== '');
   throw new Unreadable(
-    known.length === 0 ? `«${spelling}» is no unit here: write a plain number` : `«${spelling}» is no unit known here: write ${known.join(', ')}`,
+    known.length === 0
+      ? `«${spelling}» is no unit here: write a plain number`
+      : `«${spelling}» is no unit known here: write ${known.join(', ')}`,
   );
 }
 
@@ -107,8 +126,11 @@ function number(text: string): Decimal {
   const plain = text.replaceAll(' ', '');
   const marks = plain.replaceAll(/[^.,]/g, '');
   if (/^\d{1,3},\d{3}$/.test(plain))
-    throw new Unreadable(`«${text}» can be read as ${plain.replace(',', '')} or ${plain.replace(',', '.')}: write it without a comma`);
-  if (marks.length > 1) throw new Unreadable(`«${text}» has more than one decimal mark: write thousands with a space or none`);
+    throw new Unreadable(
+      `«${text}» can be read as ${plain.replace(',', '')} or ${plain.replace(',', '.')}: write it without a comma`,
+    );
+  if (marks.length > 1)
+    throw new Unreadable(`«${text}» has more than one decimal mark: write thousands with a space or none`);
   return new Decimal(plain.replace(',', '.'));
 }
 

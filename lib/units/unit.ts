@@ -39,10 +39,7 @@ const UNITS: Record<Dimension, readonly Unit[]> = {
     unit('in', 'inches', INCH, '"', '″', 'inch', 'inches'),
     unit('yd', 'yards', FOOT.times(3), 'yard', 'yards'),
   ],
-  angle: [
-    unit('°', 'degrees', 1, 'deg', 'degree', 'degrees'),
-    unit('rad', 'radians', RADIAN, 'radian', 'radians'),
-  ],
+  angle: [unit('°', 'degrees', 1, 'deg', 'degree', 'degrees'), unit('rad', 'radians', RADIAN, 'radian', 'radians')],
   mass: [
     unit('kg', 'kilograms', 1, 'kilogram', 'kilograms'),
     unit('t', 'tonnes', 1000, 'tonne', 'tonnes'),
@@ -50,7 +47,17 @@ const UNITS: Record<Dimension, readonly Unit[]> = {
   ],
   yawInertia: [
     unit('kg·m²', 'kilogram square metres', 1, 'kgm2', 'kgm^2', 'kg·m2', 'kg·m^2', 'kgm²', 'kg m²', 'kg m2', 'kg m^2'),
-    unit('slug·ft²', 'slug square feet', POUND_FORCE.times(FOOT), 'slugft2', 'slug·ft2', 'slug ft2', 'slug ft²', 'lb·ft·s²', 'lbfts2'),
+    unit(
+      'slug·ft²',
+      'slug square feet',
+      POUND_FORCE.times(FOOT),
+      'slugft2',
+      'slug·ft2',
+      'slug ft2',
+      'slug ft²',
+      'lb·ft·s²',
+      'lbfts2',
+    ),
   ],
   speed: [
     unit('m/s', 'metres per second', 1, 'mps'),
@@ -58,14 +65,15 @@ const UNITS: Record<Dimension, readonly Unit[]> = {
     unit('mph', 'miles per hour', MILE.div(3600), 'mi/h'),
     unit('ft/s', 'feet per second', FOOT, 'fps'),
   ],
-  yawRate: [
-    unit('°/s', 'degrees per second', 1, 'deg/s'),
-    unit('rad/s', 'radians per second', RADIAN),
-  ],
+  yawRate: [unit('°/s', 'degrees per second', 1, 'deg/s'), unit('rad/s', 'radians per second', RADIAN)],
   ratio: [unit('', 'ratio', 1), unit('%', 'per cent', '0.01', 'percent')],
   time: [unit('s', 'seconds', 1, 'sec', 'second', 'seconds'), unit('ms', 'milliseconds', '0.001')],
   acceleration: [unit('m/s²', 'metres per second squared', 1, 'm/s2', 'm/s^2'), unit('g', 'standard gravity', GRAVITY)],
-  energy: [unit('J', 'joules', 1), unit('kJ', 'kilojoules', 1000), unit('ft·lbf', 'foot pounds-force', POUND_FORCE.times(FOOT), 'ftlbf', 'ft-lbf', 'ft-lb')],
+  energy: [
+    unit('J', 'joules', 1),
+    unit('kJ', 'kilojoules', 1000),
+    unit('ft·lbf', 'foot pounds-force', POUND_FORCE.times(FOOT), 'ftlbf', 'ft-lbf', 'ft-lb'),
+  ],
   impulse: [unit('N·s', 'newton seconds', 1, 'Ns'), unit('lbf·s', 'pound-force seconds', POUND_FORCE, 'lbfs', 'lb·s')],
   forcePerWidth: [
     unit('N/m', 'newtons per metre', 1),

@@ -51,6 +51,6 @@ export function mathjsMonteCarlo(
   for (let k = 0; k < draws; k++) mathjsDraw(casefile, (path) => drawOf(path, k)).forEach((x, i) => columns[i].push(x));
   return columns.map((column) => {
     std(column);
-    return { mean: mean(column) as number, ends: quantileSeq(column, [0.025, 0.5, 0.975]) as unknown as number[] };
+    return { mean: mean(column), ends: [0.025, 0.5, 0.975].map((p) => quantileSeq(column, p)) };
   });
 }

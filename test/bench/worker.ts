@@ -3,6 +3,6 @@ import type { CaseFile } from '@/lib/casefile/schema';
 import { solveCase } from '@/lib/solve-case';
 
 /** The engine in a thread, as the page has it in a web worker. */
-parentPort?.on('message', async ({ casefile, draws }: { casefile: CaseFile; draws: number }) => {
-  parentPort?.postMessage(await solveCase(casefile, { draws, sensitivity: false }));
+parentPort?.on('message', ({ casefile, draws }: { casefile: CaseFile; draws: number }) => {
+  void solveCase(casefile, { draws, sensitivity: false }).then((outcome) => parentPort?.postMessage(outcome));
 });

@@ -104,16 +104,22 @@ describe('the same digits, whoever does the work', () => {
     };
   };
 
-  test.each(['crossing-90', 'offset-yaw'])('%s: one thread, and four workers that finish in another order', async (name) => {
-    const casefile = caseOf(`${name}.case.json`);
-    const alone = resultOf(await solveCase(casefile, { draws: 100_001 }));
-    const shared = resultOf(await solveCase(casefile, { draws: 100_001, run: runOn([1, 2, 3, 4].map(posted)) }));
-    expect(JSON.stringify(shared)).toBe(JSON.stringify(alone));
-  });
+  test.each(['crossing-90', 'offset-yaw'])(
+    '%s: one thread, and four workers that finish in another order',
+    async (name) => {
+      const casefile = caseOf(`${name}.case.json`);
+      const alone = resultOf(await solveCase(casefile, { draws: 100_001 }));
+      const shared = resultOf(await solveCase(casefile, { draws: 100_001, run: runOn([1, 2, 3, 4].map(posted)) }));
+      expect(JSON.stringify(shared)).toBe(JSON.stringify(alone));
+    },
+  );
 
   test('another seed gives other draws and the same centre', async () => {
     const casefile = caseOf('crossing-90.case.json');
-    const [one, two] = [resultOf(await solveCase(casefile, { draws: 5000, seed: 1 })), resultOf(await solveCase(casefile, { draws: 5000, seed: 2 }))];
+    const [one, two] = [
+      resultOf(await solveCase(casefile, { draws: 5000, seed: 1 })),
+      resultOf(await solveCase(casefile, { draws: 5000, seed: 2 })),
+    ];
     expect(two.central).toEqual(one.central);
     expect(two.bands).not.toEqual(one.bands);
   });

@@ -54,7 +54,9 @@ describe('rounding to the uncertainty (JCGM 100:2008, 7.2.6: two digits of u, th
     expect(formatEstimate({ value: 10.05762, u: 0.027, low: 10, high: 10.1 }, 'ratio', 'metric').value).toBe('10.058');
   });
   test('headline speeds never have two decimals', () => {
-    const estimate = formatEstimate({ value: 2, u: 0.001, low: 1.998, high: 2.002 }, 'speed', 'metric', { headline: true });
+    const estimate = formatEstimate({ value: 2, u: 0.001, low: 1.998, high: 2.002 }, 'speed', 'metric', {
+      headline: true,
+    });
     expect(estimate).toEqual({ value: '7.2', u: '0.0', low: '7.2', high: '7.2', unit: 'km/h' });
   });
   test('a spread of nothing does not fail', () => expect(decimalsFor(0, 'length', 'metric')).toBe(2));

@@ -14,7 +14,10 @@ export const amplification: CheckRule = {
       value,
       limit: CAUTION,
       says: `The speed of parting is multiplied by 1/e = ${value.toFixed(1)} to find the closing speed${level === 'pass' ? '.' : '; so are its errors.'}`,
-      advice: level === 'pass' ? undefined : 'Do not rest the closing speed on this restitution alone: seek another source for it.',
+      advice:
+        level === 'pass'
+          ? undefined
+          : 'Do not rest the closing speed on this restitution alone: seek another source for it.',
       paths: ['impact.restitution'],
     };
   },

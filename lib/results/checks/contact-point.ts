@@ -19,7 +19,9 @@ export const contactPoint: CheckRule = {
   id: 'contactPoint',
   source: 'screening value: 0.05 m plus twice the stated spread of the positions',
   find(context) {
-    const worst = [outside(context, 'A'), outside(context, 'B')].sort((p, q) => q.distance - q.limit - (p.distance - p.limit))[0];
+    const worst = [outside(context, 'A'), outside(context, 'B')].sort(
+      (p, q) => q.distance - q.limit - (p.distance - p.limit),
+    )[0];
     const { id, distance, limit } = worst;
     const bad = distance > limit;
     const figure = spoken(context.casefile, Math.max(0, distance), 'length', 2);

@@ -13,7 +13,9 @@ export const energyGain: CheckRule = {
       level: gained ? 'fail' : 'pass',
       value: lost,
       limit: 0,
-      says: gained ? `The contact would have given ${figure} of kinetic energy; that cannot be.` : `The contact lost ${figure} of kinetic energy.`,
+      says: gained
+        ? `The contact would have given ${figure} of kinetic energy; that cannot be.`
+        : `The contact lost ${figure} of kinetic energy.`,
       advice: gained ? 'Look again at the travel after contact, the masses and the restitution.' : undefined,
     };
   },

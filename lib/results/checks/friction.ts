@@ -17,7 +17,10 @@ export const friction: CheckRule = {
       value,
       limit: level === 'fail' ? FAIL : CAUTION,
       says: `The tangential impulse is ${value.toFixed(2)} times the normal one${level === 'pass' ? '.' : `; sliding bodywork gives at most about ${CAUTION}.`}`,
-      advice: level === 'pass' ? undefined : 'Turn the contact plane to the damage, or look for parts that hooked into each other.',
+      advice:
+        level === 'pass'
+          ? undefined
+          : 'Turn the contact plane to the damage, or look for parts that hooked into each other.',
       paths: ['impact.plane', 'impact.impulseRatio'],
     };
   },

@@ -20,7 +20,10 @@ export const impossibleShare: CheckRule = {
         count === 0
           ? `None of the ${solution.draws} draws was physically impossible.`
           : `${count} of ${solution.draws} draws (${percent(value)}) were physically impossible and are left out of the bands.`,
-      advice: level === 'caution' || level === 'fail' ? 'The inputs as stated contradict each other over much of their spread: narrow or correct them.' : undefined,
+      advice:
+        level === 'caution' || level === 'fail'
+          ? 'The inputs as stated contradict each other over much of their spread: narrow or correct them.'
+          : undefined,
     };
   },
 };

@@ -1,3 +1,4 @@
+import { labelOf } from '@/lib/casefile/fields';
 import type { Quantity, VehicleId } from '@/lib/casefile/schema';
 import { standardUncertainty } from '@/lib/numerics/spread';
 import type { ResultName } from '../names';
@@ -12,7 +13,12 @@ interface Held {
 }
 
 /** A stated value that the method does not use, against the result, in standard uncertainties of both. */
-function held({ central, bands }: CheckContext, path: string, name: ResultName, stated: Quantity | null | undefined): Held[] {
+function held(
+  { central, bands }: CheckContext,
+  path: string,
+  name: ResultName,
+  stated: Quantity | null | undefined,
+): Held[] {
   const [value, band] = [central[name], bands[name]];
   if (!stated || value === undefined || !band) return [];
   const own = standardUncertainty(stated.value, stated.spread ?? { shape: 'fixed' });
@@ -42,13 +48,17 @@ export const misfit: CheckRule = {
     const value = all.reduce((sum, { residual }) => sum + residual ** 2, 0);
     const limit = CHI_SQUARE_95[all.length - 1];
     const bad = value > limit;
-    const listed = all.map(({ path, residual }) => `${path} by ${Math.abs(residual).toFixed(1)}`).join(', ');
+    const listed = all
+      .map(({ path, residual }) => `${labelOf(context.casefile, path)} by ${Math.abs(residual).toFixed(1)}`)
+      .join(', ');
     return {
       level: bad ? 'caution' : 'pass',
       value,
       limit,
       says: `What is stated and not used differs from the answer, in standard uncertainties: ${listed} (chi-square ${value.toFixed(1)} for ${all.length}).`,
-      advice: bad ? 'Statement and physical evidence do not agree: find out which is wrong before relying on either.' : undefined,
+      advice: bad
+        ? 'Statement and physical evidence do not agree: find out which is wrong before relying on either.'
+        : undefined,
       paths: all.map(({ path }) => path),
     };
   },

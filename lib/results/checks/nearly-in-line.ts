@@ -1,3 +1,4 @@
+import { atan2 } from '@/lib/numerics/elementary';
 import type { CheckRule } from './check';
 
 /** Sine of the angle between the paths: about 10, 30 and 45 degrees. */
@@ -7,13 +8,14 @@ const NOTE = Math.SQRT1_2;
 
 export const nearlyInLine: CheckRule = {
   id: 'nearlyInLine',
-  source: 'contract of the model (0.17, about 10 deg); 0.5 and 0.71 are screening values: errors grow as 1 / sin of the angle',
+  source:
+    'contract of the model (0.17, about 10 deg); 0.5 and 0.71 are screening values: errors grow as 1 / sin of the angle',
   find({ solution }) {
     if (solution.problem.method !== 'directions') return null;
     const { sinBetween, condition } = solution.central.answer;
     const value = Math.abs(sinBetween);
     const level = value < FAIL ? 'fail' : value < CAUTION ? 'caution' : value < NOTE ? 'note' : 'pass';
-    const angle = (Math.asin(Math.min(1, value)) * 180) / Math.PI;
+    const angle = (atan2(value, Math.sqrt(Math.max(0, 1 - value * value))) * 180) / Math.PI;
     const found = `The approach paths cross at ${angle.toFixed(0)}° (condition number ${condition.toFixed(1)})`;
     const grows = `errors of the momenta grow ${(1 / value).toFixed(1)} times`;
     const paths = ['approach.A.direction', 'approach.B.direction'];
@@ -22,7 +24,10 @@ export const nearlyInLine: CheckRule = {
       level,
       value,
       limit: level === 'fail' ? FAIL : level === 'caution' ? CAUTION : NOTE,
-      says: level === 'fail' ? `${found}: nearly in line, so momentum alone does not part the two speeds.` : `${found}; ${grows}.`,
+      says:
+        level === 'fail'
+          ? `${found}: nearly in line, so momentum alone does not part the two speeds.`
+          : `${found}; ${grows}.`,
       advice:
         level === 'fail'
           ? 'Use the method restitution, with a restitution and an impulse ratio, instead.'

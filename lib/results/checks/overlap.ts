@@ -9,7 +9,8 @@ const WIDEST_GAP = 0.05;
 
 export const overlap: CheckRule = {
   id: 'overlap',
-  source: 'screening value: overlap up to the crush of both plus 0.10 m, gap up to 0.05 m, plus twice the stated spread',
+  source:
+    'screening value: overlap up to the crush of both plus 0.10 m, gap up to 0.05 m, plus twice the stated spread',
   find(context) {
     const { casefile } = context;
     const { A, B } = casefile.impact;
@@ -24,9 +25,32 @@ export const overlap: CheckRule = {
     const figure = spoken(casefile, Math.abs(depth), 'length', 2);
     const paths = ['impact.A.x', 'impact.A.y', 'impact.B.x', 'impact.B.y'];
     if (depth > deepest)
-      return { level: 'caution', value: depth, limit: deepest, paths, says: `The outlines overlap by ${figure} at contact.`, advice: 'Move the vehicles apart to where they first touched.' };
+      return {
+        level: 'caution',
+        value: depth,
+        limit: deepest,
+        paths,
+        says: `The outlines overlap by ${figure} at contact.`,
+        advice: 'Move the vehicles apart to where they first touched.',
+      };
     if (-depth > gap)
-      return { level: 'caution', value: depth, limit: -gap, paths, says: `The outlines are ${figure} apart at contact.`, advice: 'Move the vehicles together until they touch.' };
-    return { level: 'pass', value: depth, limit: depth < 0 ? -gap : deepest, paths, says: depth < 0 ? `The outlines are ${figure} apart, within the stated spread.` : `The outlines overlap by ${figure}, within crush and stated spread.` };
+      return {
+        level: 'caution',
+        value: depth,
+        limit: -gap,
+        paths,
+        says: `The outlines are ${figure} apart at contact.`,
+        advice: 'Move the vehicles together until they touch.',
+      };
+    return {
+      level: 'pass',
+      value: depth,
+      limit: depth < 0 ? -gap : deepest,
+      paths,
+      says:
+        depth < 0
+          ? `The outlines are ${figure} apart, within the stated spread.`
+          : `The outlines overlap by ${figure}, within crush and stated spread.`,
+    };
   },
 };

@@ -1,4 +1,5 @@
 import type { CheckRule } from './check';
+import { figure } from './words';
 
 export const restitutionRange: CheckRule = {
   id: 'restitutionRange',
@@ -7,7 +8,7 @@ export const restitutionRange: CheckRule = {
     const e = central.restitution;
     if (e === undefined) return null;
     const outside = e < -1e-9 || e > 1 + 1e-9;
-    const found = `The restitution at the contact point is ${e.toFixed(2)}`;
+    const found = `The restitution at the contact point is ${figure(e, 2)}`;
     if (!outside) return { level: 'pass', value: e, limit: 1, says: `${found}, inside 0 to 1.` };
     const directions = solution.problem.method === 'directions';
     return {

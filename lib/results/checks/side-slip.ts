@@ -38,7 +38,10 @@ export const sideSlip: CheckRule = {
       value: slip,
       limit: level === 'note' ? NOTE + allowance : CAUTION + allowance,
       says: `Vehicle ${id} approaches ${slip.toFixed(0)}° off ${backing ? 'its tail (it backs)' : 'its heading'}${level === 'pass' ? ', within the stated spread.' : ': it would have been sliding sideways before contact.'}`,
-      advice: level === 'pass' ? undefined : 'Compare direction of approach and heading at contact; a sideways slide leaves tyre marks.',
+      advice:
+        level === 'pass'
+          ? undefined
+          : 'Compare direction of approach and heading at contact; a sideways slide leaves tyre marks.',
       paths: [`approach.${id}.direction`, `impact.${id}.heading`],
     };
   },

@@ -17,7 +17,12 @@ export const slidingReversal: CheckRule = {
     const after = spoken(casefile, Math.abs(utAfter), 'speed', 1);
     const value = negligible ? 0 : utAfter / ut;
     if (!reversed && !driven)
-      return { level: 'pass', value, limit: 0, says: `The sliding along the plane goes from ${before} to ${after} and keeps its sense or stops.` };
+      return {
+        level: 'pass',
+        value,
+        limit: 0,
+        says: `The sliding along the plane goes from ${before} to ${after} and keeps its sense or stops.`,
+      };
     return {
       level: 'caution',
       value,
@@ -25,7 +30,8 @@ export const slidingReversal: CheckRule = {
       says: driven
         ? `The tangential impulse pushes with the sliding (${before} before, ${after} after contact), where friction would brake it.`
         : `The tangential impulse turns the sliding round: ${before} before contact, ${after} the other way after it.`,
-      advice: 'Turn the contact plane, move the contact point, or lower the impulse ratio; a hooked part would be needed for this.',
+      advice:
+        'Turn the contact plane, move the contact point, or lower the impulse ratio; a hooked part would be needed for this.',
       paths: ['impact.plane', 'impact.impulseRatio', 'impact.point.x', 'impact.point.y'],
     };
   },

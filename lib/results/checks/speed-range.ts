@@ -6,7 +6,8 @@ const HIGH = 10;
 
 export const speedRange: CheckRule = {
   id: 'speedRange',
-  source: 'screening value: normal closing speed 0.5 to 10 m/s, the range that the restitution and contact-time figures come from',
+  source:
+    'screening value: normal closing speed 0.5 to 10 m/s, the range that the restitution and contact-time figures come from',
   find({ casefile, central }) {
     const value = central.closingSpeed;
     if (value === undefined || value <= 0) return null;
@@ -17,7 +18,9 @@ export const speedRange: CheckRule = {
       value,
       limit: value < LOW ? LOW : HIGH,
       says: `The closing speed along the normal, ${spoken(casefile, value, 'speed', 1)}, is ${inside ? 'inside' : 'outside'} the range the model is meant for (${range}).`,
-      advice: inside ? undefined : 'Outside it the usual ranges of restitution, contact time and friction are unsupported: support yours from elsewhere.',
+      advice: inside
+        ? undefined
+        : 'Outside it the usual ranges of restitution, contact time and friction are unsupported: support yours from elsewhere.',
     };
   },
 };

@@ -19,7 +19,10 @@ export const tyreImpulse: CheckRule = {
       value,
       limit: level === 'note' ? NOTE : CAUTION,
       says: `During contact the tyres can have pushed up to ${percent(value)} of the contact impulse${over}; the instant contact leaves that out.`,
-      advice: level === 'pass' ? undefined : 'At this speed take the answer as less certain than its interval says, and state it in the report.',
+      advice:
+        level === 'pass'
+          ? undefined
+          : 'At this speed take the answer as less certain than its interval says, and state it in the report.',
       paths: ['pulse'],
     };
   },

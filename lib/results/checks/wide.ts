@@ -20,8 +20,14 @@ export const wide: CheckRule = {
       level,
       value,
       limit: CAUTION,
-      says: level === 'pass' ? `${which}, the widest, is ${value.toFixed(2)} times the answer.` : `${which} is wider than the answer itself (${value.toFixed(1)} times).`,
-      advice: level === 'pass' ? undefined : 'Look in the ledger which input carries most of the spread, and measure that one better.',
+      says:
+        level === 'pass'
+          ? `${which}, the widest, is ${value.toFixed(2)} times the answer.`
+          : `${which} is wider than the answer itself (${value.toFixed(1)} times).`,
+      advice:
+        level === 'pass'
+          ? undefined
+          : 'Look in the ledger which input carries most of the spread, and measure that one better.',
     };
   },
 };

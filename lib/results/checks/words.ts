@@ -11,3 +11,6 @@ export function spoken(casefile: CaseFile, si: number, dimension: Dimension, dec
 }
 
 export const percent = (share: number): string => `${(100 * share).toFixed(share < 0.1 ? 1 : 0)} %`;
+
+/** A figure with a true minus sign. */
+export const figure = (value: number, decimals: number): string => value.toFixed(decimals).replace('-', '\u2212');

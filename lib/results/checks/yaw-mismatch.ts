@@ -1,6 +1,7 @@
 import type { VehicleId } from '@/lib/casefile/schema';
 import { meanAndSd } from '@/lib/numerics/quantile';
 import type { CheckContext, CheckRule } from './check';
+import { figure } from './words';
 
 const DEGREES_PER_RADIAN = 180 / Math.PI;
 /** Allowed in any case, deg/s. */
@@ -17,9 +18,7 @@ function mismatchOf({ casefile, solution }: CheckContext, id: VehicleId) {
   const before = casefile.approach[id].yawRate.value;
   const wanted = directions ? central.figures[`${id}.predictedYawRate`] * toRate : central.figures[size] * toRate;
   const given = directions ? central.figures[size] * toRate : before;
-  const draws = directions
-    ? values[size].map((w, k) => w - values[`${id}.predictedYawRate`][k])
-    : values[size];
+  const draws = directions ? values[size].map((w, k) => w - values[`${id}.predictedYawRate`][k]) : values[size];
   const spread = draws.length > 1 ? meanAndSd(draws).sd * toRate : 0;
   return { id, wanted, given, off: Math.abs(wanted - given), limit: LEAST + 2 * spread, directions };
 }
@@ -33,12 +32,14 @@ export const yawMismatch: CheckRule = {
     const { id, wanted, given, off, limit, directions } = found.sort((p, q) => q.off / q.limit - p.off / p.limit)[0];
     const bad = off > limit;
     const when = directions ? 'after contact' : 'before contact';
-    const paths = directions ? [`departure.${id}.yawRate`, 'impact.point.x', 'impact.point.y'] : [`approach.${id}.yawRate`, `departure.${id}.yawRate`];
+    const paths = directions
+      ? [`departure.${id}.yawRate`, 'impact.point.x', 'impact.point.y']
+      : [`approach.${id}.yawRate`, `departure.${id}.yawRate`];
     return {
       level: bad ? 'caution' : 'pass',
       value: off,
       limit,
-      says: `The impulse wants vehicle ${id} to turn at ${wanted.toFixed(0)}°/s ${when}; ${given.toFixed(0)}°/s ${directions ? 'was measured' : 'is stated'}${bad ? ', further off than the spreads explain.' : ', within the spreads.'}`,
+      says: `The impulse wants vehicle ${id} to turn at ${figure(wanted, 0)}°/s ${when}; ${figure(given, 0)}°/s ${directions ? 'was measured' : 'is stated'}${bad ? ', further off than the spreads explain.' : ', within the spreads.'}`,
       advice: bad ? 'Look again at the contact point (the lever arm), the yaw rate and the yaw inertia.' : undefined,
       paths,
     };

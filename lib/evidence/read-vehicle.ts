@@ -1,0 +1,75 @@
+import { supportOf } from '@/lib/casefile/quantities';
+import type { CaseFile, Damage, LegsDeparture, VehicleId } from '@/lib/casefile/schema';
+import { YAW_INERTIA_RELATIVE_SD } from '@/lib/mechanics/inertia';
+import { type InputList, inputOf } from './input-list';
+import type { DamageSlots, Input, LegsSlots, SolvedMethod, VehicleSlots } from './problem';
+
+/** What the method uses of one vehicle: itself, its pose, its approach, its travel and its damage. */
+export function readVehicle(list: InputList, casefile: CaseFile, method: SolvedMethod, id: VehicleId): VehicleSlots {
+  const spec = casefile.vehicles[id];
+  const approach = casefile.approach[id];
+  const pose = casefile.impact[id];
+  const crossing = method === 'directions';
+  return {
+    mass: list.si(`vehicles.${id}.mass`, spec.mass),
+    yawInertia: spec.yawInertia
+      ? list.si(`vehicles.${id}.yawInertia`, spec.yawInertia)
+      : list.add(estimateFactor(`vehicles.${id}.yawInertia`)),
+    inertiaEstimated: !spec.yawInertia,
+    frontAxleToMassCentre: list.add(massCentre(`vehicles.${id}.frontAxleToMassCentre`, spec)),
+    wheelbase: spec.wheelbase,
+    x: list.si(`impact.${id}.x`, pose.x),
+    y: list.si(`impact.${id}.y`, pose.y),
+    heading: list.angle(`impact.${id}.heading`, pose.heading),
+    approachDirection: crossing ? list.angleIf(`approach.${id}.direction`, approach.direction) : null,
+    approachYawRate: crossing ? list.angle(`approach.${id}.yawRate`, approach.yawRate) : null,
+    departure: readLegs(list, casefile.departure[id] as LegsDeparture, `departure.${id}`),
+    damage: readDamage(list, casefile.damage?.[id], `damage.${id}`),
+  };
+}
+
+/** An estimated yaw inertia is the rule times a factor about 1, whose spread is that of the rule. */
+const estimateFactor = (path: string): Input => ({
+  path,
+  value: 1,
+  spread: { shape: 'normal', sd: YAW_INERTIA_RELATIVE_SD },
+  support: supportOf(path),
+});
+
+/** The mass centre lies between the axles. */
+function massCentre(path: string, spec: CaseFile['vehicles']['A']): Input {
+  const input = inputOf(path, spec.frontAxleToMassCentre, 1);
+  return { ...input, support: { ...input.support, high: spec.wheelbase } };
+}
+
+const readLegs = (list: InputList, { direction, yawRate, endSpeed, legs }: LegsDeparture, at: string): LegsSlots => ({
+  direction: list.angle(`${at}.direction`, direction),
+  yawRate: list.angleIf(`${at}.yawRate`, yawRate),
+  endSpeed: list.si(`${at}.endSpeed`, endSpeed),
+  legs: legs.map((leg, k) => ({
+    distance: list.si(`${at}.legs.${k}.distance`, leg.distance),
+    friction: list.si(`${at}.legs.${k}.friction`, leg.friction),
+    share: list.si(`${at}.legs.${k}.share`, leg.share),
+    grade: list.si(`${at}.legs.${k}.grade`, leg.grade),
+  })),
+});
+
+/** No residual depth at all bounds the energy from above and gives no estimate: null. */
+function readDamage(list: InputList, damage: Damage | null | undefined, at: string): DamageSlots | null {
+  if (!damage || damage.depths.every(({ value }) => value === 0)) return null;
+  return {
+    depths: damage.depths.map((depth, i) => list.si(`${at}.depths.${i}`, depth)),
+    strips: stripShares(damage),
+    width: list.si(`${at}.width`, damage.width),
+    forceAngle: list.angle(`${at}.forceAngle`, damage.forceAngle),
+    a: list.si(`${at}.a`, damage.a),
+    b: list.si(`${at}.b`, damage.b),
+  };
+}
+
+/** Stations left out are equally spaced, ends included; stated ones scale with the width. */
+function stripShares({ depths, stations, width }: Damage): number[] {
+  const n = depths.length - 1;
+  if (!stations) return Array.from({ length: n }, () => 1 / n);
+  return stations.slice(1).map((station, i) => (station - stations[i]) / width.value);
+}

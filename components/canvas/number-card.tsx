@@ -3,6 +3,10 @@ import { useSession, useSessionStore } from '@/components/hooks/use-session';
 import { type Field, type ThingId, fieldsOf } from '@/lib/casefile/fields';
 import { isQuantity, nodeAt } from '@/lib/casefile/quantities';
 import type { CaseFile } from '@/lib/casefile/schema';
+import type { Vec } from '@/lib/geometry/vector';
+import type { Scene, Speeds } from '@/lib/scene/scene';
+import { type Size, type View, toScreen } from '@/lib/scene/view';
+import { placeOf } from '@/lib/session/place-of';
 import { formatValue, unitOf } from '@/lib/units/format';
 import { parseEntry } from '@/lib/units/parse';
 import styles from './board.module.css';
@@ -20,17 +24,41 @@ function fieldsOfThing(casefile: CaseFile, thing: ThingId): Field[] {
   return own;
 }
 
+const CARD = { width: 190, row: 29, padding: 18, off: 18 };
+/** What the card keeps clear of: the tools to the left, the hint above, the strip below, pixels. */
+const CLEAR = { left: 64, top: 48, right: 8, bottom: 52 };
+
+/** Beside a pixel, inside the board. */
+function cardPlace([x, y]: Vec, size: Size, rows: number): Vec {
+  const height = rows * CARD.row + CARD.padding;
+  const fits = x + CARD.off + CARD.width <= size.width - CLEAR.right;
+  const left = fits ? x + CARD.off : x - CARD.off - CARD.width;
+  return [
+    Math.min(size.width - CARD.width - CLEAR.right, Math.max(CLEAR.left, left)),
+    Math.min(size.height - height - CLEAR.bottom, Math.max(CLEAR.top, y + CARD.off)),
+  ];
+}
+
+interface Props {
+  thing: ThingId;
+  scene: Scene;
+  view: View;
+  size: Size;
+  speeds: Speeds;
+}
+
 /** Beside the selected thing: its numbers, to type. Not modal; Escape steps back. */
-export function NumberCard({ at }: { at: readonly [number, number] }) {
+export function NumberCard({ thing, scene, view, size, speeds }: Props) {
   const casefile = useSession((s) => s.casefile);
-  const selection = useSession((s) => s.selection);
   const moving = useSession((s) => s.gesture !== null);
-  const fields = selection ? fieldsOfThing(casefile, selection) : [];
+  const fields = fieldsOfThing(casefile, thing);
   if (fields.length === 0) return null;
+  const [left, top] = cardPlace(toScreen(view, placeOf(scene, thing, speeds)), size, fields.length);
   return (
     <div
       className={styles.card}
-      style={{ left: at[0], top: at[1] }}
+      style={{ left, top }}
+      data-numbers
       data-moving={moving}
       role="group"
       aria-label="Numbers of what is selected"

@@ -1,7 +1,7 @@
 import { Circle, Group, Layer, Line, Text } from 'react-konva/lib/ReactKonvaCore';
 import { angleOf, distance, subtract, toDegrees } from '@/lib/geometry/vector';
 import { type Grip, handlesOf } from '@/lib/scene/grip';
-import type { Scene, Which } from '@/lib/scene/scene';
+import type { Scene, Speeds } from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import type { Measured } from '@/lib/session/tools/measure';
 import type { Theme } from './theme';
@@ -19,7 +19,7 @@ export function OverlayLayer({
   scene: Scene;
   view: View;
   theme: Theme;
-  speeds: Partial<Record<Which, number>>;
+  speeds: Speeds;
   hovered: Grip | null;
   measured: Measured | null;
   lengthText: (metres: number) => string;

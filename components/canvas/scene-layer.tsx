@@ -2,12 +2,20 @@ import { Arrow, Group, Layer, Line, Wedge, Ellipse, Text } from 'react-konva/lib
 import type { ThingId } from '@/lib/casefile/fields';
 import { type Vec, add, scale, toDegrees, unit } from '@/lib/geometry/vector';
 import { PLANE_REACH } from '@/lib/scene/grip';
-import { type Scene, type Which, approachTail, centreOf, noseOf, pathOf, restPose, tailReach } from '@/lib/scene/scene';
+import {
+  type Scene,
+  type Speeds,
+  type Which,
+  approachTail,
+  approachTip,
+  centreOf,
+  noseOf,
+  pathOf,
+  restPose,
+} from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import type { Theme } from './theme';
 import { GhostShape, VehicleShape } from './vehicle-shape';
-
-type Speeds = Partial<Record<Which, number>>;
 
 interface Props {
   scene: Scene;
@@ -150,7 +158,7 @@ function Approach({
   const tail = approachTail(scene, which, speed);
   if (!direction || !tail) return null;
   const centre = centreOf(vehicle);
-  const tip = add(centre, scale(unit(direction.angle), -tailReach(vehicle)));
+  const tip = approachTip(scene, which) ?? centre;
   const before = speed === undefined ? null : add(centre, scale(unit(direction.angle), -0.5 * speed));
   return (
     <>

@@ -1,69 +1,44 @@
 import { type KeyboardEvent, useRef } from 'react';
 import { useSessionStore } from '@/components/hooks/use-session';
-import type { Edit } from '@/lib/casefile/edit';
-import { labelOf, type ThingId } from '@/lib/casefile/fields';
-import type { CaseFile } from '@/lib/casefile/schema';
 import type { Vec } from '@/lib/geometry/vector';
-import { nudgeEdit } from '@/lib/session/drag';
+import { nudgeEdit } from '@/lib/session/nudge';
+import { type NamedEdit, deletion, duplication, whyKept } from '@/lib/session/thing-edits';
+import { nameOf } from '@/lib/session/thing-names';
 
 const ARROWS: Record<string, Vec> = { ArrowLeft: [-1, 0], ArrowRight: [1, 0], ArrowUp: [0, 1], ArrowDown: [0, -1] };
-const TURNS: Record<string, number> = { '[': 1, ']': -1, '{': 1, '}': -1 };
+const TURNS: Record<string, number> = { BracketLeft: 1, BracketRight: -1 };
 /** One nudge: 0.1 m or 1 degree; ten times with Shift, a tenth with Alt. */
 const STEP = { metres: 0.1, degrees: 1 };
 
 const factorOf = (event: KeyboardEvent): number => (event.shiftKey ? 10 : event.altKey ? 0.1 : 1);
+const isCommand = (event: KeyboardEvent): boolean => event.ctrlKey || event.metaKey;
+/** '[' by what is written on the key, or by its place on keyboards that write something else there. */
+const turnOf = (event: KeyboardEvent): number =>
+  event.key === '[' ? 1 : event.key === ']' ? -1 : (TURNS[event.code] ?? 0);
 
-/** What Delete takes away; null for what every case has. */
-export function deletion(casefile: CaseFile, thing: ThingId): { label: string; edit: Edit } | null {
-  const [kind, which = '', k = ''] = thing.split('.');
-  if (kind === 'approach')
-    return { label: `delete the approach of ${which}`, edit: { do: 'set', path: `${thing}.direction`, to: null } };
-  if (kind === 'departure')
-    return { label: `delete the travel of ${which}`, edit: { do: 'set', path: thing, to: null } };
-  if (kind !== 'leg') return null;
-  const departure = casefile.departure[which as 'A' | 'B'];
-  const only = departure?.kind === 'legs' && departure.legs.length === 1;
-  return {
-    label: `delete leg ${Number(k) + 1} of ${which}`,
-    edit: only
-      ? { do: 'set', path: `departure.${which}`, to: null }
-      : { do: 'remove', path: `departure.${which}.legs`, index: Number(k) },
-  };
-}
-
-/** What Duplicate copies: a leg, behind itself. */
-export function duplication(casefile: CaseFile, thing: ThingId): { label: string; edit: Edit } | null {
-  const [kind, which = '', k = ''] = thing.split('.');
-  const departure = casefile.departure[which as 'A' | 'B'];
-  if ((kind !== 'leg' && kind !== 'departure') || departure?.kind !== 'legs') return null;
-  const index = kind === 'leg' ? Number(k) : departure.legs.length - 1;
-  return {
-    label: `duplicate leg ${index + 1} of ${which}`,
-    edit: {
-      do: 'insert',
-      path: `departure.${which}.legs`,
-      index: index + 1,
-      entry: structuredClone(departure.legs[index]),
-    },
-  };
+interface Doing {
+  /** Lets go of what the pointer holds. */
+  cancel: () => void;
+  /** Says why nothing happened. */
+  say: (words: string | null) => void;
+  /** Goes to the numbers of the selected thing. */
+  openNumbers: () => boolean;
 }
 
 /** Keys on the board and on its list of things: nudge, turn, delete, duplicate, step back. A held key is one step of undo. */
-export function useBoardKeys(cancel: () => void) {
+export function useBoardKeys({ cancel, say, openNumbers }: Doing) {
   const session = useSessionStore();
   const total = useRef<{ step: Vec; turn: number } | null>(null);
 
   const nudge = (step: Vec, turn: number): boolean => {
     const { selection, casefile, gesture, begin, preview } = session.getState();
-    if (!selection) return false;
-    if (!total.current) {
-      if (!nudgeEdit(casefile, selection, step, turn)) return false;
-      begin(`nudge ${labelOf(casefile, selection)}`);
-      total.current = { step: [0, 0], turn: 0 };
-    }
-    const { step: sum, turn: turned } = total.current;
-    total.current = { step: [sum[0] + step[0], sum[1] + step[1]], turn: turned + turn };
-    const edit = nudgeEdit(gesture?.casefile ?? casefile, selection, total.current.step, total.current.turn);
+    if (!selection || (gesture && !total.current)) return false;
+    const sum = total.current ?? { step: [0, 0], turn: 0 };
+    const next = { step: [sum.step[0] + step[0], sum.step[1] + step[1]] as const, turn: sum.turn + turn };
+    const edit = nudgeEdit(gesture?.casefile ?? casefile, selection, next.step, next.turn);
+    if (!total.current && !edit) return false;
+    if (!total.current) begin(`nudge ${nameOf(selection)}`);
+    total.current = next;
     if (edit) preview(edit);
     return true;
   };
@@ -74,44 +49,54 @@ export function useBoardKeys(cancel: () => void) {
     session.getState().commit();
   };
 
-  const act = (found: { label: string; edit: Edit } | null): boolean => {
-    if (!found) return false;
-    session.getState().edit(found.label, found.edit);
+  const carryOut = (found: NamedEdit | null): boolean => {
+    if (found) session.getState().edit(found.label, found.edit);
+    return found !== null;
+  };
+
+  const stepBack = (): boolean => {
+    const state = session.getState();
+    total.current = null;
+    if (state.gesture) {
+      cancel();
+      state.cancel();
+    } else if (state.tool !== 'select') state.use('select');
+    else if (state.selection) state.select(null);
+    else return false;
+    return true;
+  };
+
+  const remove = (): boolean => {
+    const { selection, casefile, select } = session.getState();
+    if (!selection) return false;
+    const done = carryOut(deletion(casefile, selection));
+    if (done) select(null);
+    say(done ? null : whyKept(selection));
     return true;
   };
 
   const handled = (event: KeyboardEvent): boolean => {
-    const { selection, casefile, gesture, select, use, tool } = session.getState();
-    const by = factorOf(event);
+    const { selection, casefile } = session.getState();
     const arrow = ARROWS[event.key];
-    const plain = !event.ctrlKey && !event.metaKey;
-    if (arrow && plain) return nudge([arrow[0] * STEP.metres * by, arrow[1] * STEP.metres * by], 0);
-    if (event.key in TURNS && plain) return nudge([0, 0], TURNS[event.key] * STEP.degrees * by);
-    if (event.key === 'Escape') {
-      total.current = null;
-      if (gesture) cancel();
-      else if (tool !== 'select') use('select');
-      else if (selection) select(null);
-      else return false;
-      session.getState().cancel();
-      return true;
-    }
-    if (!selection) return false;
-    if (event.key === 'Delete' || event.key === 'Backspace') {
-      const done = act(deletion(casefile, selection));
-      if (done) select(null);
-      return done;
-    }
-    return event.key.toLowerCase() === 'd' && (event.ctrlKey || event.metaKey) && act(duplication(casefile, selection));
+    const turn = turnOf(event);
+    const by = factorOf(event);
+    if (event.key === 'Escape') return stepBack();
+    if (isCommand(event))
+      return event.key.toLowerCase() === 'd' && selection !== null && carryOut(duplication(casefile, selection));
+    if (arrow) return nudge([arrow[0] * STEP.metres * by, arrow[1] * STEP.metres * by], 0);
+    if (turn !== 0) return nudge([0, 0], turn * STEP.degrees * by);
+    if (event.key === 'Delete' || event.key === 'Backspace') return remove();
+    return event.key === 'Enter' && openNumbers();
   };
 
   return {
     onKeyDown: (event: KeyboardEvent) => {
       if (event.target instanceof HTMLInputElement || event.target instanceof HTMLSelectElement) return;
+      say(null);
       if (handled(event)) event.preventDefault();
     },
     onKeyUp: (event: KeyboardEvent) => {
-      if (event.key in ARROWS || event.key in TURNS) finish();
+      if (event.key in ARROWS || turnOf(event) !== 0) finish();
     },
     onBlur: finish,
   };

@@ -1,20 +1,16 @@
-import {
-  type PointerEvent as ReactPointerEvent,
-  type RefObject,
-  useCallback,
-  useEffect,
-  useRef,
-  useState,
-} from 'react';
+import { type PointerEvent as ReactPointerEvent, type RefObject, useCallback, useRef, useState } from 'react';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
 import { sceneOf } from '@/lib/casefile/scene-of';
 import type { Vec } from '@/lib/geometry/vector';
-import { type Grip, gripAt } from '@/lib/scene/grip';
-import type { Which } from '@/lib/scene/scene';
-import { type View, panBy, toWorld } from '@/lib/scene/view';
+import { type Grip, gripAt, isSameGrip } from '@/lib/scene/grip';
+import type { Speeds } from '@/lib/scene/scene';
+import { type View, toWorld } from '@/lib/scene/view';
+import type { SessionActions } from '@/lib/session/session';
 import { TOOL_OF } from '@/lib/session/tools/all';
 import type { Measured } from '@/lib/session/tools/measure';
-import type { Act, PointerEvent, ToolContext } from '@/lib/session/tools/tool';
+import type { Act, PointerEvent, ToolId } from '@/lib/session/tools/tool';
+import { usePan } from './use-pan';
+import { usePinch } from './use-pinch';
 
 /** How near counts as on a handle, pixels: more for a finger. */
 const REACH = { mouse: 11, pen: 14, touch: 24 } as const;
@@ -24,97 +20,92 @@ interface Board {
   frame: RefObject<HTMLDivElement | null>;
   view: View;
   setView: (change: (view: View) => View) => void;
-  speeds: Partial<Record<Which, number>>;
+  speeds: Speeds;
+}
+
+/** What a tool is in the middle of; another tool starts afresh. */
+interface Doing {
+  tool: ToolId;
+  state: unknown;
 }
 
 /** Forwards the pointer to the tool in hand and carries out what it wants done. */
 export function useTool({ frame, view, setView, speeds }: Board) {
   const session = useSessionStore();
-  const toolId = useSession((s) => s.tool);
-  const state = useRef<unknown>(null);
-  const pan = useRef<Vec | null>(null);
+  const inHand = useSession((s) => s.tool);
+  const doing = useRef<Doing>({ tool: 'select', state: null });
   const [hovered, setHovered] = useState<Grip | null>(null);
   const [measured, setMeasured] = useState<Measured | null>(null);
-  const [panning, setPanning] = useState(false);
-
-  const send = useCallback(
-    (event: PointerEvent, reach: number) => {
-      const { gesture, casefile } = session.getState();
-      const base = gesture?.casefile ?? casefile;
-      const context: ToolContext = { casefile: base, scene: sceneOf(base), speeds, reach };
-      const { tool } = TOOL_OF[session.getState().tool];
-      const next = tool.step(state.current, event, context);
-      state.current = next.state;
-      if (tool.id === 'measure') setMeasured(next.state as Measured | null);
-      for (const act of next.acts) if (act.do !== 'pan') carryOut(session.getState(), act);
-      return next.acts.some((act) => act.do === 'pan');
-    },
-    [session, speeds],
-  );
-
-  const cancel = useCallback(() => {
-    send({ type: 'cancel', at: [0, 0], coarse: false }, 0);
-    state.current = null;
-    pan.current = null;
-    setPanning(false);
-  }, [send]);
-
-  useEffect(() => {
-    state.current = null;
-    setMeasured(null);
-  }, [toolId]);
-
   const pixelOf = (event: ReactPointerEvent): Vec => {
     const box = frame.current?.getBoundingClientRect();
     return [event.clientX - (box?.left ?? 0), event.clientY - (box?.top ?? 0)];
   };
+  const pan = usePan(pixelOf, setView);
+  const pinch = usePinch(pixelOf, setView);
+
+  /** Returns whether the tool took hold of the sheet itself. */
+  const send = useCallback(
+    (event: PointerEvent, reach: number): boolean => {
+      const state = session.getState();
+      const casefile = state.gesture?.casefile ?? state.casefile;
+      const { tool } = TOOL_OF[state.tool];
+      const before = doing.current.tool === tool.id ? doing.current.state : null;
+      const next = tool.step(before, event, { casefile, scene: sceneOf(casefile), speeds, reach });
+      doing.current = { tool: tool.id, state: next.state };
+      if (tool.id === 'measure') setMeasured(next.state as Measured | null);
+      for (const act of next.acts) carryOut(state, act);
+      return next.acts.some((act) => act.do === 'pan');
+    },
+    [session, speeds],
+  );
+  const cancel = (): void => {
+    send({ type: 'cancel', at: [0, 0], coarse: false }, 0);
+    pan.stop();
+  };
   const pass = (type: PointerEvent['type'], event: ReactPointerEvent): boolean =>
     send({ type, at: toWorld(view, pixelOf(event)), coarse: event.shiftKey }, reachOf(event.pointerType) / view.scale);
-  const startPan = (event: ReactPointerEvent): void => {
-    pan.current = pixelOf(event);
-    setPanning(true);
+  const hover = (event: ReactPointerEvent): void => {
+    const at = toWorld(view, pixelOf(event));
+    const grip = gripAt(sceneOf(session.getState().casefile), speeds, at, reachOf(event.pointerType) / view.scale);
+    setHovered((before) => (isSameGrip(before, grip) ? before : grip));
   };
 
-  return {
-    hovered,
-    measured,
-    panning,
-    cancel,
-    onPointerDown: (event: ReactPointerEvent) => {
+  const handlers = {
+    onPointerDown: (event: ReactPointerEvent): void => {
       event.currentTarget.setPointerCapture(event.pointerId);
-      if (event.button === 1 || event.altKey) startPan(event);
-      else if (event.button === 0 && pass('down', event)) startPan(event);
+      if (pinch.down(event)) cancel();
+      else if (pan.isAsked(event) || (event.button === 0 && pass('down', event))) pan.start(event);
     },
-    onPointerMove: (event: ReactPointerEvent) => {
-      const last = pan.current;
-      if (last) {
-        const now = pixelOf(event);
-        pan.current = now;
-        setView((v) => panBy(v, now[0] - last[0], now[1] - last[1]));
-      } else if (session.getState().gesture || session.getState().tool === 'measure') pass('move', event);
-      else {
-        const at = toWorld(view, pixelOf(event));
-        const grip = gripAt(sceneOf(session.getState().casefile), speeds, at, reachOf(event.pointerType) / view.scale);
-        setHovered((before) => (JSON.stringify(before) === JSON.stringify(grip) ? before : grip));
-      }
+    onPointerMove: (event: ReactPointerEvent): void => {
+      if (pinch.move(event) || pan.move(event)) return;
+      if (event.buttons === 0) hover(event);
+      else pass('move', event);
     },
-    onPointerUp: (event: ReactPointerEvent) => {
-      if (pan.current) {
-        pan.current = null;
-        setPanning(false);
-      } else pass('up', event);
+    onPointerUp: (event: ReactPointerEvent): void => {
+      if (pinch.up(event) || pan.stop()) return;
+      if (event.button === 0) pass('up', event);
     },
-    onPointerCancel: cancel,
+    onPointerCancel: (event: ReactPointerEvent): void => {
+      pinch.up(event);
+      cancel();
+    },
+    onPointerLeave: (): void => setHovered(null),
   };
+  return { hovered, measured: inHand === 'measure' ? measured : null, panning: pan.panning, cancel, handlers };
 }
 
-function carryOut(
-  session: ReturnType<ReturnType<typeof useSessionStore>['getState']>,
-  act: Exclude<Act, { do: 'pan' }>,
-): void {
-  if (act.do === 'begin') session.begin(act.label);
-  else if (act.do === 'preview') session.preview(act.edit);
-  else if (act.do === 'commit') session.commit();
-  else if (act.do === 'cancel') session.cancel();
-  else session.select(act.thing);
+function carryOut(session: SessionActions, act: Act): void {
+  switch (act.do) {
+    case 'begin':
+      return session.begin(act.label);
+    case 'preview':
+      return session.preview(act.edit);
+    case 'commit':
+      return session.commit();
+    case 'cancel':
+      return session.cancel();
+    case 'select':
+      return session.select(act.thing);
+    case 'pan':
+  }
 }

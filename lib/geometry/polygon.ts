@@ -1,3 +1,5 @@
+import { distanceToSegment } from './segment';
+
 export type Point = readonly [number, number];
 
 /** Corners of a vehicle's outline in the world, m, counter-clockwise from the rear right. */
@@ -24,7 +26,7 @@ const edges = (polygon: readonly Point[]) =>
     const to = polygon[(i + 1) % polygon.length];
     const [dx, dy] = [to[0] - from[0], to[1] - from[1]];
     const length = Math.sqrt(dx * dx + dy * dy);
-    return { from, to, length, normal: [dy / length, -dx / length] as const };
+    return { from, to, normal: [dy / length, -dx / length] as const };
   });
 
 const along = ([nx, ny]: Point, p: Point, from: Point): number => nx * (p[0] - from[0]) + ny * (p[1] - from[1]);
@@ -34,15 +36,7 @@ export function distanceOutside(point: Point, polygon: readonly Point[]): number
   const sides = edges(polygon);
   const inside = Math.max(...sides.map(({ normal, from }) => along(normal, point, from)));
   if (inside <= 0) return inside;
-  return Math.min(
-    ...sides.map(({ from, to, length }) => {
-      const t =
-        ((point[0] - from[0]) * (to[0] - from[0]) + (point[1] - from[1]) * (to[1] - from[1])) / (length * length);
-      const s = Math.min(1, Math.max(0, t));
-      const [qx, qy] = [from[0] + s * (to[0] - from[0]) - point[0], from[1] + s * (to[1] - from[1]) - point[1]];
-      return Math.sqrt(qx * qx + qy * qy);
-    }),
-  );
+  return Math.min(...sides.map(({ from, to }) => distanceToSegment(point, from, to)));
 }
 
 /**

@@ -1,6 +1,17 @@
 import { distanceOutside } from '@/lib/geometry/polygon';
-import { type Vec, add, angleOf, distance, fromBody, scale, subtract, unit } from '@/lib/geometry/vector';
-import { type Scene, type Which, approachTail, centreOf, noseOf, outlineAt, pathOf } from './scene';
+import { distanceToSegment } from '@/lib/geometry/segment';
+import { type Vec, add, distance, fromBody, scale, subtract, unit } from '@/lib/geometry/vector';
+import {
+  type Scene,
+  type Speeds,
+  type Which,
+  approachTail,
+  approachTip,
+  centreOf,
+  noseOf,
+  outlineAt,
+  pathOf,
+} from './scene';
 
 /** What can be taken hold of on the board, and where. */
 export type Grip =
@@ -9,9 +20,14 @@ export type Grip =
   | { part: 'point' }
   | { part: 'plane' }
   | { part: 'approach'; which: Which }
+  /** Between two legs. */
   | { part: 'joint'; which: Which; leg: number }
-  | { part: 'end'; which: Which };
+  | { part: 'end'; which: Which }
+  /** The line of a leg itself. */
+  | { part: 'leg'; which: Which; leg: number }
+  | { part: 'mark'; index: number };
 
+const BOTH = ['A', 'B'] as const;
 /** Beyond the nose, m. */
 const TURN_REACH = 0.9;
 /** From the contact point to the handle of the plane, m. */
@@ -24,57 +40,86 @@ export const turnHandle = (scene: Scene, which: Which): Vec => {
 
 export const planeHandle = ({ point, plane }: Scene): Vec => add(point.at, scale(unit(plane.angle), PLANE_REACH));
 
-interface Handle {
+export interface Handle {
   grip: Grip;
   at: Vec;
 }
 
-/** The handles of a scene; small things before what they lie on. `speeds`: computed approach speeds, for the arrows. */
-export function handlesOf(scene: Scene, speeds: Partial<Record<Which, number>>): Handle[] {
-  const each = (['A', 'B'] as const).flatMap((which): Handle[] => {
-    const tail = approachTail(scene, which, speeds[which]);
-    const path = pathOf(scene, which);
-    const legs = path.slice(1);
-    return [
-      { grip: { part: 'turn', which }, at: turnHandle(scene, which) },
-      ...(tail ? [{ grip: { part: 'approach', which } as const, at: tail }] : []),
-      ...legs.map((at, k): Handle => ({
-        grip: k === legs.length - 1 ? { part: 'end', which } : { part: 'joint', which, leg: k },
-        at,
-      })),
-    ];
-  });
+/** The handles of a scene; small things before what they lie on. */
+export function handlesOf(scene: Scene, speeds: Speeds): Handle[] {
   return [
     { grip: { part: 'point' }, at: scene.point.at },
     { grip: { part: 'plane' }, at: planeHandle(scene) },
-    ...each,
+    ...BOTH.flatMap((which) => handlesOfVehicle(scene, which, speeds[which])),
   ];
 }
 
-/** What lies under a point: the nearest handle within `reach` (m), else a vehicle, else nothing. */
-export function gripAt(scene: Scene, speeds: Partial<Record<Which, number>>, at: Vec, reach: number): Grip | null {
-  const near = handlesOf(scene, speeds)
-    .map((handle) => ({ ...handle, off: distance(handle.at, at) }))
-    .filter(({ off }) => off <= reach)
-    .sort((p, q) => p.off - q.off)[0];
-  if (near) return near.grip;
+function handlesOfVehicle(scene: Scene, which: Which, speed: number | undefined): Handle[] {
+  const tail = approachTail(scene, which, speed);
+  const ends = pathOf(scene, which).slice(1);
+  return [
+    { grip: { part: 'turn', which }, at: turnHandle(scene, which) },
+    ...(tail ? [{ grip: { part: 'approach', which } as const, at: tail }] : []),
+    ...ends.map((at, leg): Handle => ({
+      grip: leg === ends.length - 1 ? { part: 'end', which } : { part: 'joint', which, leg },
+      at,
+    })),
+  ];
+}
+
+export const isSameGrip = (a: Grip | null, b: Grip | null): boolean => JSON.stringify(a) === JSON.stringify(b);
+
+/** What lies under a point: the nearest handle within `reach` (m), else a vehicle, else the nearest line, else nothing. */
+export function gripAt(scene: Scene, speeds: Speeds, at: Vec, reach: number): Grip | null {
+  const near = nearest(
+    handlesOf(scene, speeds).map(({ grip, at: handle }) => ({ grip, off: distance(handle, at) })),
+    reach,
+  );
+  if (near) return near;
   const which = vehicleAt(scene, at);
   if (which) return { part: 'vehicle', which };
-  return nearPlane(scene, at, reach / 2) ? { part: 'plane' } : null;
+  return nearest(
+    linesOf(scene, speeds).map(({ grip, points }) => ({ grip, off: offLine(at, points) })),
+    reach / 2,
+  );
+}
+
+function nearest(found: { grip: Grip; off: number }[], reach: number): Grip | null {
+  return found.filter(({ off }) => off <= reach).sort((p, q) => p.off - q.off)[0]?.grip ?? null;
 }
 
 /** The vehicle whose outline holds a point; of two, the one whose centre is nearer. */
 export function vehicleAt(scene: Scene, at: Vec): Which | null {
-  const holding = (['A', 'B'] as const).filter((which) => distanceOutside(at, outlineAt(scene.vehicles[which])) <= 0);
-  return (
-    holding.sort((p, q) => distance(centreOf(scene.vehicles[p]), at) - distance(centreOf(scene.vehicles[q]), at))[0] ??
-    null
-  );
+  const holding = BOTH.filter((which) => distanceOutside(at, outlineAt(scene.vehicles[which])) <= 0);
+  const off = (which: Which): number => distance(centreOf(scene.vehicles[which]), at);
+  return holding.sort((p, q) => off(p) - off(q))[0] ?? null;
 }
 
-function nearPlane({ point, plane }: Scene, at: Vec, reach: number): boolean {
-  const off = subtract(at, point.at);
-  const turned = angleOf(off) - plane.angle;
-  const size = distance(at, point.at);
-  return Math.abs(size * Math.sin(turned)) <= reach && Math.abs(size * Math.cos(turned)) <= PLANE_REACH;
+interface Line {
+  grip: Grip;
+  points: readonly Vec[];
+}
+
+/** What is drawn as a line and can be taken hold of anywhere along it. */
+function linesOf(scene: Scene, speeds: Speeds): Line[] {
+  const { point, plane } = scene;
+  const half = scale(unit(plane.angle), PLANE_REACH);
+  return [
+    { grip: { part: 'plane' }, points: [subtract(point.at, half), add(point.at, half)] },
+    ...BOTH.flatMap((which): Line[] => {
+      const [tail, tip] = [approachTail(scene, which, speeds[which]), approachTip(scene, which)];
+      const path = pathOf(scene, which);
+      return [
+        ...(tail && tip ? [{ grip: { part: 'approach', which } as const, points: [tail, tip] }] : []),
+        ...path.slice(1).map((to, leg): Line => ({ grip: { part: 'leg', which, leg }, points: [path[leg], to] })),
+      ];
+    }),
+    ...scene.marks.map(({ points }, index): Line => ({ grip: { part: 'mark', index }, points })),
+  ];
+}
+
+/** Distance from a point to a line of one or more points, m. */
+function offLine(at: Vec, points: readonly Vec[]): number {
+  if (points.length === 1) return distance(at, points[0]);
+  return Math.min(...points.slice(1).map((to, k) => distanceToSegment(at, points[k], to)));
 }

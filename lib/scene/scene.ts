@@ -6,6 +6,9 @@ import { boundsOf } from './view';
 /** What the board shows, in world metres and radians: plain data that knows neither forms nor pixels. */
 export type Which = 'A' | 'B';
 
+/** Computed approach speeds, m/s, where there is an answer. */
+export type Speeds = Partial<Record<Which, number>>;
+
 export interface ScenePose {
   x: number;
   y: number;
@@ -85,7 +88,7 @@ export function restPose(scene: Scene, which: Which): ScenePose | null {
 }
 
 /** From the mass centre to just behind the tail, m. */
-export const tailReach = (vehicle: SceneVehicle): number => vehicle.body.length - noseOf(vehicle) + 0.15;
+const tailReach = (vehicle: SceneVehicle): number => vehicle.body.length - noseOf(vehicle) + 0.15;
 
 /** Length of the approach arrow, m: what is covered in a third of a second at the computed speed, within what fits. */
 const arrowLength = (speed: number | undefined): number =>
@@ -100,6 +103,13 @@ export function approachTail(scene: Scene, which: Which, speed: number | undefin
 
 /** Room to draw in, to either side of the contact point, m. */
 const ROOM: Vec = [7, 5];
+
+/** Where the approach arrow arrives: behind the tail. */
+export function approachTip(scene: Scene, which: Which): Vec | null {
+  const direction = scene.approach[which];
+  const vehicle = scene.vehicles[which];
+  return direction && add(centreOf(vehicle), scale(unit(direction.angle), -tailReach(vehicle)));
+}
 
 /** All that a view should show. */
 export function sceneBounds(scene: Scene): Bounds {

@@ -1,4 +1,4 @@
-import type { Vec } from '@/lib/geometry/vector';
+import { type Vec, add, distance, scale } from '@/lib/geometry/vector';
 
 /** How the world is seen: pixels per metre, and the pixel where the world's origin lies. y runs up in the world, down on the screen. */
 export interface View {
@@ -31,13 +31,21 @@ export const toWorld = (view: View, [px, py]: Vec): Vec => [
 /** From a whole junction to a bumper, pixels per metre. */
 const LEAST = 2;
 const MOST = 600;
-const clamped = (scale: number): number => Math.min(MOST, Math.max(LEAST, scale));
+const clamped = (perMetre: number): number => Math.min(MOST, Math.max(LEAST, perMetre));
 
 /** Zooms by a factor; the world point under the pixel stays there. */
 export function zoomAbout(view: View, at: Vec, factor: number): View {
-  const scale = clamped(view.scale * factor);
-  const by = scale / view.scale;
-  return { scale, originX: at[0] + (view.originX - at[0]) * by, originY: at[1] + (view.originY - at[1]) * by };
+  const to = clamped(view.scale * factor);
+  const by = to / view.scale;
+  return { scale: to, originX: at[0] + (view.originX - at[0]) * by, originY: at[1] + (view.originY - at[1]) * by };
+}
+
+/** Two fingers went from one pair of pixels to another: what lay under their middle lies under it still. */
+export function pinch(view: View, from: readonly [Vec, Vec], to: readonly [Vec, Vec]): View {
+  const apart = ([p, q]: readonly [Vec, Vec]): number => Math.max(1, distance(p, q));
+  const middle = ([p, q]: readonly [Vec, Vec]): Vec => scale(add(p, q), 0.5);
+  const [before, after] = [middle(from), middle(to)];
+  return panBy(zoomAbout(view, before, apart(to) / apart(from)), after[0] - before[0], after[1] - before[1]);
 }
 
 export const panBy = (view: View, dx: number, dy: number): View => ({
@@ -55,9 +63,9 @@ export function boundsOf(points: readonly Vec[]): Bounds {
 export function fit(bounds: Bounds, size: Size, margin: number): View {
   const width = Math.max(1, bounds.right - bounds.left);
   const height = Math.max(1, bounds.top - bounds.bottom);
-  const scale = clamped(
+  const widest = clamped(
     Math.min(Math.max(1, size.width - 2 * margin) / width, Math.max(1, size.height - 2 * margin) / height),
   );
   const [x, y] = [(bounds.left + bounds.right) / 2, (bounds.bottom + bounds.top) / 2];
-  return { scale, originX: size.width / 2 - x * scale, originY: size.height / 2 + y * scale };
+  return { scale: widest, originX: size.width / 2 - x * widest, originY: size.height / 2 + y * widest };
 }

@@ -1,11 +1,11 @@
 import { defaultDeparture, drawnQuantity } from '@/lib/casefile/defaults';
 import type { Edit } from '@/lib/casefile/edit';
 import type { ThingId } from '@/lib/casefile/fields';
-import type { CaseFile } from '@/lib/casefile/schema';
+import type { CaseFile, Leg } from '@/lib/casefile/schema';
 import { sceneOf } from '@/lib/casefile/scene-of';
 import { type Vec, angleOf, distance, subtract, toDegrees, unit } from '@/lib/geometry/vector';
 import type { Grip } from '@/lib/scene/grip';
-import { type Which, centreOf, pathOf } from '@/lib/scene/scene';
+import { type Scene, type Which, centreOf, pathOf } from '@/lib/scene/scene';
 
 /** Drawn figures are kept to the centimetre and the tenth of a degree: finer than anyone draws. */
 const centimetres = (x: number): number => Math.round(x * 100) / 100;
@@ -26,11 +26,13 @@ const degreesOf = (v: Vec, coarse: boolean): number => {
 
 const value = (path: string, to: number): Edit => ({ do: 'value', path, value: to });
 
-/** A line has no sense: its direction lies in [0, 180). */
-const asLine = (degrees: number): number => tenths(((degrees % 180) + 180) % 180) % 180;
+/** A line has no sense: its direction lies in [0, 180). Kept to the thousandth, where sums of decimals are still clean. */
+export const asLine = (degrees: number): number => Number((((degrees % 180) + 180) % 180).toFixed(3)) % 180;
 
 /** Standard uncertainty that a drawn direction gets, deg. */
 const DRAWN_DIRECTION = 3;
+/** Standard uncertainty that a drawn leg gets, m. */
+const DRAWN_LENGTH = 0.15;
 /** Shortest leg that can be drawn, m. */
 const SHORTEST = 0.05;
 
@@ -73,6 +75,10 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
       return travelEdit(casefile, grip.which, to, coarse);
     case 'joint':
       return jointEdit(casefile, grip.which, grip.leg, to);
+    case 'leg':
+      return value(`departure.${grip.which}.direction`, degreesOf(subtract(to, centre(casefile, grip.which)), coarse));
+    case 'mark':
+      return markEdit(casefile, grip.index, by);
   }
 }
 
@@ -110,6 +116,19 @@ export function travelEdit(casefile: CaseFile, which: Which, to: Vec, coarse: bo
   };
 }
 
+/** A leg like the last one, from its end to where the pointer lies along the path; null where there is no travel yet. */
+export function addLegEdit(casefile: CaseFile, which: Which, to: Vec): Edit | null {
+  const departure = casefile.departure[which];
+  if (departure?.kind !== 'legs') return null;
+  const scene = sceneOf(casefile);
+  const along = unit(scene.travel[which]?.direction.angle ?? 0);
+  const way = subtract(to, pathOf(scene, which).at(-1) ?? to);
+  const reach = centimetres(Math.max(SHORTEST, way[0] * along[0] + way[1] * along[1]));
+  const last = departure.legs[departure.legs.length - 1];
+  const entry: Leg = { ...last, distance: drawnQuantity(reach, DRAWN_LENGTH) };
+  return { do: 'insert', path: `departure.${which}.legs`, index: departure.legs.length, entry };
+}
+
 /** The end of a leg moves along the path; the next leg takes up the difference. */
 function jointEdit(casefile: CaseFile, which: Which, leg: number, to: Vec): Edit {
   const departure = casefile.departure[which];
@@ -128,6 +147,13 @@ function jointEdit(casefile: CaseFile, which: Which, leg: number, to: Vec): Edit
   };
 }
 
+/** A mark moves as a whole. */
+export function markEdit(casefile: CaseFile, index: number, by: Vec): Edit {
+  const points = casefile.scene?.marks?.[index]?.points ?? [];
+  const to = points.map(([x, y]): [number, number] => [centimetres(x + by[0]), centimetres(y + by[1])]);
+  return { do: 'set', path: `scene.marks.${index}.points`, to };
+}
+
 /** The contact plane drawn as a line from one place to another: through the first, along both. */
 export function planeEdit(from: Vec, to: Vec, coarse: boolean): Edit {
   const turned = distance(from, to) > 0.1 ? [value('impact.plane', asLine(degreesOf(subtract(to, from), coarse)))] : [];
@@ -135,8 +161,8 @@ export function planeEdit(from: Vec, to: Vec, coarse: boolean): Edit {
   return { do: 'all', edits: [...placed, ...turned] };
 }
 
-/** What is selected when a grip is taken. */
-export function thingOf(grip: Grip): ThingId {
+/** What is selected when a grip is taken: a travel of one leg as a whole. */
+export function thingOf(grip: Grip, scene: Scene): ThingId {
   switch (grip.part) {
     case 'vehicle':
     case 'turn':
@@ -148,7 +174,10 @@ export function thingOf(grip: Grip): ThingId {
     case 'approach':
       return `approach.${grip.which}`;
     case 'joint':
-      return `leg.${grip.which}.${grip.leg}`;
+    case 'leg':
+      return scene.travel[grip.which]?.legs.length === 1 ? `departure.${grip.which}` : `leg.${grip.which}.${grip.leg}`;
+    case 'mark':
+      return `mark.${grip.index}`;
     case 'end':
       return `departure.${grip.which}`;
   }
@@ -169,53 +198,11 @@ export function labelOfGrip(grip: Grip): string {
       return `direction of approach of ${grip.which}`;
     case 'joint':
       return `legs of ${grip.which}`;
+    case 'leg':
+      return `direction of travel of ${grip.which}`;
+    case 'mark':
+      return 'move a mark';
     case 'end':
       return `travel of ${grip.which}`;
   }
-}
-
-/** The edit that nudges the selected thing: by a step in world axes (m) and a turn (deg). null where it has neither. */
-export function nudgeEdit(casefile: CaseFile, thing: ThingId, step: Vec, turn: number): Edit | null {
-  const [kind, which = '', k] = thing.split('.') as [string, string?, string?];
-  const { impact, approach, departure } = casefile;
-  const by = (path: string, from: number, change: number, digits: number): Edit[] =>
-    change === 0 ? [] : [value(path, Number((from + change).toFixed(digits)))];
-  const turnOf = (path: string, from: number, line = false): Edit[] =>
-    turn === 0
-      ? []
-      : [
-          value(
-            path,
-            line ? ((Number((from + turn).toFixed(3)) % 180) + 180) % 180 : wrapped(Number((from + turn).toFixed(3))),
-          ),
-        ];
-  const edits = ((): Edit[] => {
-    if (kind === 'vehicle') {
-      const pose = impact[which as Which];
-      const at = `impact.${which}`;
-      return [
-        ...by(`${at}.x`, pose.x.value, step[0], 4),
-        ...by(`${at}.y`, pose.y.value, step[1], 4),
-        ...turnOf(`${at}.heading`, pose.heading.value),
-      ];
-    }
-    if (thing === 'contact.point' || thing === 'contact.plane')
-      return [
-        ...by('impact.point.x', impact.point.x.value, step[0], 4),
-        ...by('impact.point.y', impact.point.y.value, step[1], 4),
-        ...turnOf('impact.plane', impact.plane.value, true),
-      ];
-    const direction = approach[which as Which]?.direction;
-    if (kind === 'approach' && direction) return turnOf(`approach.${which}.direction`, direction.value);
-    const legs = departure[which as Which];
-    if (legs?.kind !== 'legs' || (kind !== 'departure' && kind !== 'leg')) return [];
-    const leg = kind === 'leg' ? Number(k) : legs.legs.length - 1;
-    const along = step[0] + step[1];
-    const reach = legs.legs[leg].distance.value;
-    return [
-      ...by(`departure.${which}.legs.${leg}.distance`, reach, Math.max(along, -reach), 4),
-      ...turnOf(`departure.${which}.direction`, legs.direction.value),
-    ];
-  })();
-  return edits.length === 0 ? null : { do: 'all', edits };
 }

@@ -69,7 +69,12 @@ export function createSession(casefile: CaseFile) {
         return edited.issues;
       }
       if (edited.casefile !== before)
-        set((s) => ({ casefile: edited.casefile, past: pushed(s.past, { label, casefile: before }), future: [], refused: [] }));
+        set((s) => ({
+          casefile: edited.casefile,
+          past: pushed(s.past, { label, casefile: before }),
+          future: [],
+          refused: [],
+        }));
       return [];
     },
 

@@ -5,7 +5,7 @@ import { sceneOf } from '@/lib/casefile/scene-of';
 import type { CaseFile } from '@/lib/casefile/schema';
 import type { Vec } from '@/lib/geometry/vector';
 import { planeHandle, turnHandle } from '@/lib/scene/grip';
-import { nudgeEdit } from '@/lib/session/drag';
+import { nudgeEdit } from '@/lib/session/nudge';
 import { TOOL_OF } from '@/lib/session/tools/all';
 import type { Act, PointerEvent, ToolId } from '@/lib/session/tools/tool';
 import { q } from '../support/build-case';

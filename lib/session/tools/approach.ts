@@ -7,5 +7,5 @@ export const approachTool = drawFromVehicle({
   hint: 'Press on a vehicle and drag back to where it came from',
   label: (which) => `direction of approach of ${which}`,
   thing: (which) => `approach.${which}`,
-  edit: approachEdit,
+  edit: (casefile, { which }, to, coarse) => approachEdit(casefile, which, to, coarse),
 });

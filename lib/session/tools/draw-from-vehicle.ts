@@ -4,11 +4,13 @@ import type { CaseFile } from '@/lib/casefile/schema';
 import { type Vec, distance } from '@/lib/geometry/vector';
 import { type Scene, type Which, centreOf } from '@/lib/scene/scene';
 import { vehicleAt } from '@/lib/scene/grip';
-import type { Tool, ToolId } from './tool';
+import type { PointerEvent, Tool, ToolContext, ToolId } from './tool';
 
 interface Drawing {
   which: Which;
   from: Vec;
+  /** Whether Shift was held when the pointer went down. */
+  shift: boolean;
   /** Whether the pointer has gone far enough to mean something. */
   drawn: boolean;
 }
@@ -19,45 +21,42 @@ const SHORTEST_STROKE = 0.3;
 const NEARBY = 4;
 
 function pressed(scene: Scene, at: Vec): Which | null {
-  const on = vehicleAt(scene, at);
-  if (on) return on;
-  const byDistance = (['A', 'B'] as const).map((which) => ({
-    which,
-    off: distance(centreOf(scene.vehicles[which]), at),
-  }));
-  const nearest = byDistance.sort((p, q) => p.off - q.off)[0];
-  return nearest.off < NEARBY ? nearest.which : null;
+  const off = (which: Which): number => distance(centreOf(scene.vehicles[which]), at);
+  const nearest = off('A') <= off('B') ? 'A' : 'B';
+  return vehicleAt(scene, at) ?? (off(nearest) < NEARBY ? nearest : null);
 }
 
-/** A tool that is pressed on a vehicle and dragged away from it. */
-export function drawFromVehicle(options: {
+interface Options {
   id: ToolId;
   hint: string;
   label: (which: Which) => string;
   thing: (which: Which) => ThingId;
-  edit: (casefile: CaseFile, which: Which, to: Vec, coarse: boolean) => Edit;
-}): Tool<Drawing> {
+  /** The edit for a stroke of this vehicle that has come to `to`. */
+  edit: (casefile: CaseFile, drawing: { which: Which; shift: boolean }, to: Vec, coarse: boolean) => Edit;
+}
+
+/** A tool that is pressed on a vehicle and dragged away from it. */
+export function drawFromVehicle({ id, hint, label, thing, edit }: Options): Tool<Drawing> {
+  const press = (event: PointerEvent, { scene }: ToolContext): ReturnType<Tool<Drawing>['step']> => {
+    const which = pressed(scene, event.at);
+    if (!which) return { state: null, acts: [{ do: 'pan' }] };
+    const state = { which, from: event.at, shift: event.coarse, drawn: false };
+    return { state, acts: [{ do: 'begin', label: label(which) }] };
+  };
   return {
-    id: options.id,
-    hint: options.hint,
-    step(drawing, event, { casefile, scene }) {
-      if (event.type === 'down') {
-        const which = pressed(scene, event.at);
-        if (!which) return { state: null, acts: [{ do: 'pan' }] };
-        return { state: { which, from: event.at, drawn: false }, acts: [{ do: 'begin', label: options.label(which) }] };
-      }
+    id,
+    hint,
+    step(drawing, event, context) {
+      if (event.type === 'down') return press(event, context);
       if (!drawing) return { state: null, acts: [] };
-      const { which, from } = drawing;
       if (event.type === 'cancel' || (event.type === 'up' && !drawing.drawn))
         return { state: null, acts: [{ do: 'cancel' }] };
       if (event.type === 'up')
-        return { state: null, acts: [{ do: 'commit' }, { do: 'select', thing: options.thing(which) }] };
-      const drawn = drawing.drawn || distance(from, event.at) > SHORTEST_STROKE;
+        return { state: null, acts: [{ do: 'commit' }, { do: 'select', thing: thing(drawing.which) }] };
+      const drawn = drawing.drawn || distance(drawing.from, event.at) > SHORTEST_STROKE;
       if (!drawn) return { state: drawing, acts: [] };
-      return {
-        state: { which, from, drawn },
-        acts: [{ do: 'preview', edit: options.edit(casefile, which, event.at, event.coarse) }],
-      };
+      const stroke = edit(context.casefile, drawing, event.at, event.coarse);
+      return { state: { ...drawing, drawn }, acts: [{ do: 'preview', edit: stroke }] };
     },
   };
 }

@@ -2,7 +2,7 @@ import type { Edit } from '@/lib/casefile/edit';
 import type { ThingId } from '@/lib/casefile/fields';
 import type { CaseFile } from '@/lib/casefile/schema';
 import type { Vec } from '@/lib/geometry/vector';
-import type { Scene, Which } from '@/lib/scene/scene';
+import type { Scene, Speeds } from '@/lib/scene/scene';
 
 /** The tools at the edge of the board. Each is a small state machine in a file of its own. */
 export const TOOLS = ['select', 'approach', 'travel', 'plane', 'measure'] as const;
@@ -22,7 +22,7 @@ export interface ToolContext {
   casefile: CaseFile;
   scene: Scene;
   /** Computed approach speeds, m/s, for the arrows. */
-  speeds: Partial<Record<Which, number>>;
+  speeds: Speeds;
   /** How far from a handle counts as on it, m. */
   reach: number;
 }

@@ -1,0 +1,13 @@
+import type { ThingId } from '@/lib/casefile/fields';
+import { type Vec, fromBody } from '@/lib/geometry/vector';
+import { type Scene, type Speeds, type Which, approachTail, noseOf, pathOf } from '@/lib/scene/scene';
+
+/** The place in the world, m, that the numbers of a thing stand beside. */
+export function placeOf(scene: Scene, thing: ThingId, speeds: Speeds): Vec {
+  const [kind, which, k] = thing.split('.') as [string, Which, string?];
+  if (kind === 'vehicle') return fromBody([noseOf(scene.vehicles[which]) + 0.9, 0], scene.vehicles[which].pose);
+  if (kind === 'approach') return approachTail(scene, which, speeds[which]) ?? scene.point.at;
+  if (kind === 'departure' || kind === 'rest') return pathOf(scene, which).at(-1) ?? scene.point.at;
+  if (kind === 'leg') return pathOf(scene, which)[Number(k) + 1] ?? scene.point.at;
+  return scene.point.at;
+}

@@ -1,0 +1,20 @@
+import type { ThingId } from '@/lib/casefile/fields';
+
+/** A thing of the board in words, as they stand inside a sentence. */
+export function nameOf(thing: ThingId): string {
+  const [kind, which = '', k = ''] = thing.split('.');
+  switch (kind) {
+    case 'vehicle':
+      return which;
+    case 'contact':
+      return `the contact ${which}`;
+    case 'approach':
+      return `the approach of ${which}`;
+    case 'leg':
+      return `leg ${Number(k) + 1} of ${which}`;
+    case 'mark':
+      return `mark ${Number(which) + 1}`;
+    default:
+      return `the travel of ${which}`;
+  }
+}

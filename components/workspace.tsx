@@ -2,8 +2,10 @@
 import dynamic from 'next/dynamic';
 import { type KeyboardEvent, useState } from 'react';
 import { AnswerProvider } from '@/components/hooks/use-answer';
+import { CommandsProvider } from '@/components/hooks/use-commands';
 import { SessionProvider } from '@/components/hooks/use-session';
 import { ShowProvider, useShow } from '@/components/hooks/use-show';
+import { CommandPalette } from '@/components/panels/command-palette';
 import { Ledger } from '@/components/panels/ledger';
 import { TitleBar } from '@/components/panels/title-bar';
 import { AnswerPanel } from '@/components/results/answer-panel';
@@ -23,7 +25,9 @@ export function Workspace({ id, revision, casefile }: { id: string; revision: nu
     <SessionProvider session={session}>
       <AnswerProvider>
         <ShowProvider>
-          <Sheet id={id} revision={revision} />
+          <CommandsProvider>
+            <Sheet id={id} revision={revision} />
+          </CommandsProvider>
         </ShowProvider>
       </AnswerProvider>
     </SessionProvider>
@@ -48,6 +52,7 @@ function Sheet({ id, revision }: { id: string; revision: number }) {
         <AnswerPanel />
       </section>
       <LedgerDrawer />
+      <CommandPalette />
     </div>
   );
 }

@@ -44,7 +44,7 @@ export function FileMenu({ files }: { files: CaseFiles }) {
 }
 
 /** Hands the case to the browser as <title>.case.json. */
-function saveFile(casefile: CaseFile): void {
+export function saveFile(casefile: CaseFile): void {
   const blob = new Blob([`${JSON.stringify(casefile, null, 2)}\n`], { type: 'application/json' });
   const link = document.createElement('a');
   link.href = URL.createObjectURL(blob);

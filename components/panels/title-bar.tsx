@@ -12,6 +12,7 @@ import { SaveChoice, SaveStatus } from './save-status';
 import { SavedLink } from './saved-link';
 import { TextInPlace } from './text-in-place';
 import styles from './title-bar.module.css';
+import { useTitleCommands } from './use-title-commands';
 
 /** What the open case is called, how it stands on the server, and what can be done with it as a whole. */
 export function TitleBar({ id, revision }: { id: string; revision: number }) {
@@ -20,6 +21,7 @@ export function TitleBar({ id, revision }: { id: string; revision: number }) {
   const title = useSession((s) => s.casefile.title);
   const reference = useSession((s) => s.casefile.reference ?? '');
   const edit = useSession((s) => s.edit);
+  useTitleCommands(id, saving, files);
   useEffect(() => {
     document.title = `${title} · Retrodict`;
   }, [title]);

@@ -15,6 +15,9 @@ const LEVELS: Record<Level, { word: string; Icon: LucideIcon }> = {
 };
 const SPEAKING: readonly Level[] = ['fail', 'caution', 'note'];
 
+/** Where the list stands on the page. */
+export const AGAINST = 'against';
+
 /** «2 things speak against it» in the fewest words. */
 export function againstWords({ checks }: Result): string {
   const count = (level: Level): number => checks.filter((check) => check.level === level).length;
@@ -32,7 +35,7 @@ export function Against({ result, of }: { result: Result; of: CaseFile }) {
   const passed = result.checks.filter((check) => check.level === 'pass');
   const isAnyImpossible = Object.values(result.impossible).some((count) => count > 0);
   return (
-    <div className={styles.against}>
+    <div className={styles.against} id={AGAINST} tabIndex={-1}>
       <h3>What speaks against it</h3>
       {speaking.length === 0 && <p>No screening test was triggered; this is not validation.</p>}
       <ul className={styles.list}>

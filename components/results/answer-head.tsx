@@ -2,7 +2,7 @@ import { ChevronDown, ChevronUp } from 'lucide-react';
 import type { Answer } from '@/components/hooks/answer';
 import buttons from '@/components/ui/button.module.css';
 import { failuresOf } from '@/lib/report/failures';
-import { percent } from '@/lib/report/numbers';
+import { percent, unitText } from '@/lib/report/numbers';
 import { METHOD_WORDS } from '@/lib/report/method-section';
 import { againstWords } from './against';
 import styles from './answer-head.module.css';
@@ -22,9 +22,11 @@ export function AnswerHead({ answer, strip, isTable, onTable }: Props) {
     <div className={styles.head}>
       <h2>Answer</h2>
       {strip.collapsed && <OneLine answer={answer} />}
-      <p className={styles.state} data-status={answer.status} data-stale={answer.stale}>
-        {stateWords(answer)}
-      </p>
+      {!(strip.collapsed && answer.status === 'settled') && (
+        <p className={styles.state} data-status={answer.status} data-stale={answer.stale}>
+          {stateWords(answer)}
+        </p>
+      )}
       {answer.progress !== null && (
         <>
           <progress className={styles.progress} value={answer.progress} aria-label="Calculating" />
@@ -42,7 +44,7 @@ export function AnswerHead({ answer, strip, isTable, onTable }: Props) {
             disabled={!answer.result}
             onClick={() => onTable(!isTable)}
           >
-            {isTable ? 'As picture' : 'As table'}
+            As table
           </button>
         )}
         <button
@@ -73,22 +75,28 @@ function stateWords({ status, result, stale }: Answer): string {
 }
 
 const SHORT = [
-  ['A.approachSpeed', 'A'],
+  ['A.approachSpeed', 'approach A'],
   ['B.approachSpeed', 'B'],
   ['A.deltaV', 'delta-V A'],
-  ['B.deltaV', 'delta-V B'],
+  ['B.deltaV', 'B'],
 ] as const;
 
 function OneLine({ answer: { result, of } }: { answer: Answer }) {
   if (!result || !of) return null;
   if (failuresOf(result).length > 0) return <p className={styles.line}>withheld: {againstWords(result)}</p>;
+  const units = unitsShown(of);
   const figures = SHORT.flatMap(([name, label]) => {
-    const found = said(result, name, unitsShown(of));
-    return found ? [`${label} ${found.figure} ${found.unit} (${found.interval})`] : [];
+    const found = said(result, name, units);
+    return found ? [{ label, ...found }] : [];
   });
   return (
     <p className={styles.line}>
-      {figures.join(' · ')} · {againstWords(result)}
+      {figures.map(({ label, figure, interval }, k) => (
+        <span key={k}>
+          {label} <strong>{figure}</strong> ({interval}){' · '}
+        </span>
+      ))}
+      {unitText('speed', units)} · {againstWords(result)}
     </p>
   );
 }

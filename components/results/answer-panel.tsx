@@ -1,9 +1,10 @@
 'use client';
 import { useState } from 'react';
+import { useTakeOn } from '@/components/hooks/use-commands';
 import { useAnswer } from '@/components/hooks/use-answer';
 import type { Answer } from '@/components/hooks/answer';
 import { failuresOf } from '@/lib/report/failures';
-import { Against } from './against';
+import { AGAINST, Against } from './against';
 import { AnswerHead } from './answer-head';
 import styles from './answer-panel.module.css';
 import { NoAnswer } from './no-answer';
@@ -19,11 +20,20 @@ export function AnswerPanel() {
   const answer = useAnswer();
   const strip = useStrip();
   const [isTable, setTable] = useState(false);
+  const unfolded = (then: () => void) => (): void => {
+    strip.setCollapsed(false);
+    then();
+  };
+  useTakeOn({
+    'view.table': unfolded(() => setTable(strip.collapsed || !isTable)),
+    'view.against': unfolded(() => requestAnimationFrame(() => document.getElementById(AGAINST)?.focus())),
+    'view.fold': () => strip.setCollapsed(!strip.collapsed),
+  });
   return (
     <div
       className={styles.panel}
       data-collapsed={strip.collapsed}
-      style={strip.collapsed ? undefined : { ['--strip' as string]: `${strip.height}px` }}
+      style={strip.height === null ? undefined : { ['--strip' as string]: `${strip.height}px` }}
     >
       {!strip.collapsed && <StripEdge strip={strip} />}
       <AnswerHead answer={answer} strip={strip} isTable={isTable} onTable={setTable} />

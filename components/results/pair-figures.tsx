@@ -12,8 +12,8 @@ const ROWS: [ResultName, string][] = [
   ['impulseRatio', 'Impulse ratio'],
   ['energyLost', 'Energy lost'],
   ['slidingSpeed', 'Sliding speed'],
-  ['A.meanAcceleration', 'Mean accel. A'],
-  ['B.meanAcceleration', 'Mean accel. B'],
+  ['A.meanAcceleration', 'Mean acceleration A'],
+  ['B.meanAcceleration', 'Mean acceleration B'],
 ];
 
 /** An interval of directions wider than this says nothing, deg. */

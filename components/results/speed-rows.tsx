@@ -25,13 +25,6 @@ export function SpeedRows({ result, shapes, of }: { result: Result; shapes: Shap
     <div className={styles.speeds}>
       <table className={styles.figures}>
         <caption className="visually-hidden">Speeds: median and {percent(result.coverage)} interval</caption>
-        <thead className="visually-hidden">
-          <tr>
-            <th scope="col">Speed</th>
-            <th scope="col">Median</th>
-            <th scope="col">Interval</th>
-          </tr>
-        </thead>
         <tbody>
           {rows.map((row) => (
             <Figures key={row.name} row={row} result={result} units={units} />
@@ -44,8 +37,7 @@ export function SpeedRows({ result, shapes, of }: { result: Result; shapes: Shap
         label={`Densities of the speeds on one axis in ${unitText('speed', units)}; the figures are in the table beside it.`}
       />
       <p className={styles.key}>
-        <span>tick: median · bar: {percent(result.coverage)} interval · outline: where the draws lie</span>
-        <span>speed, {unitText('speed', units)}</span>
+        {unitText('speed', units)} · tick: median · bar: {percent(result.coverage)} interval · outline: the draws
       </p>
     </div>
   );
@@ -60,11 +52,13 @@ function Figures({ row, result, units }: { row: SpeedRow; result: Result; units:
         <i className={styles.swatch} data-vehicle={vehicleOf(row.name) ?? 'pair'} aria-hidden />
         {NAMES[row.name]}
       </th>
-      <td className={styles.median} data-bound={found.median !== undefined}>
-        {found.figure} <small>{found.unit}</small>
-      </td>
-      <td className={styles.interval} title={found.median && `median ${found.median} ${found.unit}`}>
-        {found.interval}
+      <td>
+        <span className={styles.median}>
+          {found.figure} <small>{found.unit}</small>
+        </span>
+        <span className={styles.interval} title={found.median && `median ${found.median} ${found.unit}`}>
+          {found.interval}
+        </span>
       </td>
     </tr>
   );

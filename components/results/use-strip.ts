@@ -3,7 +3,8 @@ import { useEffect, useState } from 'react';
 
 /** How tall the strip of the answer is, and whether it is folded to one line; remembered by the browser. */
 export interface Strip {
-  height: number;
+  /** px; null until someone has chosen: then it goes by the height of the window. */
+  height: number | null;
   collapsed: boolean;
   setHeight: (height: number) => void;
   setCollapsed: (collapsed: boolean) => void;
@@ -11,18 +12,17 @@ export interface Strip {
 
 export const LOWEST = 160;
 export const HIGHEST = 640;
-const USUAL = 260;
 const KEY = 'retrodict.answer-strip';
 
 interface Remembered {
-  height: number;
+  height: number | null;
   collapsed: boolean;
 }
 
 const kept = (height: number): number => Math.round(Math.min(HIGHEST, Math.max(LOWEST, height)));
 
 export function useStrip(): Strip {
-  const [strip, setStrip] = useState<Remembered>({ height: USUAL, collapsed: false });
+  const [strip, setStrip] = useState<Remembered>({ height: null, collapsed: false });
   // Not at the first rendering: the server does not know what the browser remembers.
   useEffect(() => {
     const remembered = recalled();
@@ -43,8 +43,9 @@ export function useStrip(): Strip {
 function recalled(): Remembered | null {
   try {
     const found = JSON.parse(localStorage.getItem(KEY) ?? 'null') as Partial<Remembered> | null;
-    if (typeof found?.height !== 'number' || !Number.isFinite(found.height)) return null;
-    return { height: kept(found.height), collapsed: found.collapsed === true };
+    if (!found) return null;
+    const height = typeof found.height === 'number' && Number.isFinite(found.height) ? kept(found.height) : null;
+    return { height, collapsed: found.collapsed === true };
   } catch {
     return null;
   }

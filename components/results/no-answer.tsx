@@ -4,6 +4,7 @@ import { useShow } from '@/components/hooks/use-show';
 import buttons from '@/components/ui/button.module.css';
 import { labelOf } from '@/lib/casefile/fields';
 import type { Issue } from '@/lib/casefile/issue';
+import type { Method } from '@/lib/casefile/schema';
 import type { ToolId } from '@/lib/session/tools/tool';
 import styles from './no-answer.module.css';
 
@@ -46,6 +47,9 @@ function IssueItem({ issue: { path, says } }: { issue: Issue }) {
   const casefile = useSession((s) => s.casefile);
   const use = useSession((s) => s.use);
   const { showField } = useShow();
+  const edit = useSession((s) => s.edit);
+  const toRestitution = (): void =>
+    void edit('method', { do: 'set', path: 'analysis.method', to: 'restitution' satisfies Method });
   const drawn = DRAWN.find(([pattern]) => pattern.test(path));
   const take = (tool: ToolId): void => {
     use(tool);
@@ -59,6 +63,11 @@ function IssueItem({ issue: { path, says } }: { issue: Issue }) {
       {drawn && (
         <button type="button" className={buttons.button} onClick={() => take(drawn[1])}>
           {drawn[2]}
+        </button>
+      )}
+      {/use the method restitution/.test(says) && (
+        <button type="button" className={buttons.button} onClick={toRestitution}>
+          Use the method restitution
         </button>
       )}
       <button type="button" className={buttons.quiet} onClick={() => showField(path)}>

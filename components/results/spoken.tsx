@@ -1,5 +1,7 @@
 import { useEffect, useState } from 'react';
 import type { Answer } from '@/components/hooks/answer';
+import { useSessionStore } from '@/components/hooks/use-session';
+import { labelOf } from '@/lib/casefile/fields';
 import { failuresOf } from '@/lib/report/failures';
 import { resultLabel } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
@@ -13,11 +15,14 @@ const READ_OUT = ['A.approachSpeed', 'B.approachSpeed', 'A.deltaV', 'B.deltaV'] 
 export function Spoken({ answer }: { answer: Answer }) {
   const [words, setWords] = useState('');
   const { status, result, of, issues } = answer;
+  const session = useSessionStore();
   useEffect(() => {
     if (status === 'settled' && result && of) setWords(summary(result, unitsShown(of)));
     else if (status === 'refused' || status === 'unsolved' || status === 'failed')
-      setWords(`No answer: ${issues.map(({ says }) => says).join('; ')}.`);
-  }, [status, result, of, issues]);
+      setWords(
+        `No answer: ${issues.map(({ path, says }) => `${labelOf(session.getState().casefile, path)}, ${says}`).join('; ')}.`,
+      );
+  }, [status, result, of, issues, session]);
   return (
     <p className="visually-hidden" role="status">
       {words}

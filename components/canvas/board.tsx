@@ -1,5 +1,5 @@
 'use client';
-import { useCallback, useMemo, useRef, useState } from 'react';
+import { useMemo, useRef, useState } from 'react';
 import { Stage } from 'react-konva/lib/ReactKonvaCore';
 import './shapes';
 import { useAnswer } from '@/components/hooks/use-answer';
@@ -7,6 +7,7 @@ import { useSession, useSessionStore } from '@/components/hooks/use-session';
 import { sceneOf } from '@/lib/casefile/scene-of';
 import { METRES_PER } from '@/lib/scene/grid';
 import type { Speeds } from '@/lib/scene/scene';
+import type { Dimension } from '@/lib/units/dimension';
 import { formatWithUnit } from '@/lib/units/format';
 import styles from './board.module.css';
 import { BoardHint } from './board-hint';
@@ -14,6 +15,7 @@ import { GridLayer } from './grid-layer';
 import { MapMarks } from './map-marks';
 import { NumberCard } from './number-card';
 import { OverlayLayer } from './overlay-layer';
+import type { Shown } from './scene-labels';
 import { SceneLayer } from './scene-layer';
 import { useTheme } from './theme';
 import { ThingStrip } from './thing-strip';
@@ -49,11 +51,12 @@ export function Board() {
   useSheetKeys({ fitAll, zoom });
 
   const units = casefile.display?.units ?? 'metric';
-  const lengthText = useCallback(
-    (metres: number): string => formatWithUnit(metres, 'length', units, { decimals: 2 }),
-    [units],
-  );
-  const drawn = { scene, view, theme, speeds, selection, lengthText };
+  const shown = useMemo((): Shown => {
+    const as = (dimension: Dimension, decimals: number) => (value: number) =>
+      formatWithUnit(value, dimension, units, { decimals });
+    return { length: as('length', 2), speed: as('speed', 1), angle: as('angle', 1) };
+  }, [units]);
+  const drawn = { scene, view, theme, speeds, selection, shown };
 
   return (
     <div
@@ -87,7 +90,7 @@ export function Board() {
       <Toolbar fitAll={fitAll} zoom={zoom} />
       <BoardHint said={said} />
       {selection && tool === 'select' && size.width > 0 && (
-        <NumberCard thing={selection} scene={scene} view={view} size={size} speeds={speeds} />
+        <NumberCard thing={selection} view={view} size={size} speeds={speeds} />
       )}
       <MapMarks view={view} units={units} north={scene.north} />
       <ThingStrip />
@@ -95,10 +98,10 @@ export function Board() {
   );
 }
 
-/** Computed approach speeds of the newest answer, m/s. */
+/** Approach speeds of the newest answer, m/s: the medians, as the answer states them. */
 function useSpeeds(): Speeds {
   const { result } = useAnswer();
-  const A = result?.central['A.approachSpeed'];
-  const B = result?.central['B.approachSpeed'];
+  const A = result?.bands['A.approachSpeed']?.median;
+  const B = result?.bands['B.approachSpeed']?.median;
   return useMemo(() => ({ ...(A === undefined ? {} : { A }), ...(B === undefined ? {} : { B }) }), [A, B]);
 }

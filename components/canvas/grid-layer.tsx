@@ -1,10 +1,21 @@
+import { memo } from 'react';
 import { Layer, Shape } from 'react-konva/lib/ReactKonvaCore';
 import { gridOf } from '@/lib/scene/grid';
 import { type Size, type View, toScreen } from '@/lib/scene/view';
 import type { Theme } from './theme';
 
 /** The quiet grid, which thins out with zoom. `unit`: metres in one unit of the grid. */
-export function GridLayer({ view, size, unit, theme }: { view: View; size: Size; unit: number; theme: Theme }) {
+export const GridLayer = memo(function GridLayer({
+  view,
+  size,
+  unit,
+  theme,
+}: {
+  view: View;
+  size: Size;
+  unit: number;
+  theme: Theme;
+}) {
   const { xs, ys } = gridOf(view, size, unit);
   return (
     <Layer listening={false}>
@@ -33,4 +44,4 @@ export function GridLayer({ view, size, unit, theme }: { view: View; size: Size;
       />
     </Layer>
   );
-}
+});

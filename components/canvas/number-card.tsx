@@ -2,9 +2,10 @@ import { useState } from 'react';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
 import { type Field, type ThingId, fieldsOf } from '@/lib/casefile/fields';
 import { isQuantity, nodeAt } from '@/lib/casefile/quantities';
+import { sceneOf } from '@/lib/casefile/scene-of';
 import type { CaseFile } from '@/lib/casefile/schema';
-import type { Vec } from '@/lib/geometry/vector';
-import type { Scene, Speeds } from '@/lib/scene/scene';
+import { inkOf, placeBeside } from '@/lib/scene/beside';
+import type { Speeds } from '@/lib/scene/scene';
 import { type Size, type View, toScreen } from '@/lib/scene/view';
 import { placeOf } from '@/lib/session/place-of';
 import { formatValue, unitOf } from '@/lib/units/format';
@@ -24,36 +25,30 @@ function fieldsOfThing(casefile: CaseFile, thing: ThingId): Field[] {
   return own;
 }
 
-const CARD = { width: 190, row: 29, padding: 18, off: 18 };
+/** Pixels: the card's width, a row, and what surrounds the rows. */
+const CARD = { width: 190, row: 29, around: 18 };
 /** What the card keeps clear of: the tools to the left, the hint above, the strip below, pixels. */
 const CLEAR = { left: 64, top: 48, right: 8, bottom: 52 };
 
-/** Beside a pixel, inside the board. */
-function cardPlace([x, y]: Vec, size: Size, rows: number): Vec {
-  const height = rows * CARD.row + CARD.padding;
-  const fits = x + CARD.off + CARD.width <= size.width - CLEAR.right;
-  const left = fits ? x + CARD.off : x - CARD.off - CARD.width;
-  return [
-    Math.min(size.width - CARD.width - CLEAR.right, Math.max(CLEAR.left, left)),
-    Math.min(size.height - height - CLEAR.bottom, Math.max(CLEAR.top, y + CARD.off)),
-  ];
-}
-
 interface Props {
   thing: ThingId;
-  scene: Scene;
   view: View;
   size: Size;
   speeds: Speeds;
 }
 
 /** Beside the selected thing: its numbers, to type. Not modal; Escape steps back. */
-export function NumberCard({ thing, scene, view, size, speeds }: Props) {
+export function NumberCard({ thing, view, size, speeds }: Props) {
   const casefile = useSession((s) => s.casefile);
   const moving = useSession((s) => s.gesture !== null);
+  // While something moves the card stays where it was.
+  const placedBy = useSession((s) => s.gesture?.casefile ?? s.casefile);
   const fields = fieldsOfThing(casefile, thing);
   if (fields.length === 0) return null;
-  const [left, top] = cardPlace(toScreen(view, placeOf(scene, thing, speeds)), size, fields.length);
+  const card = { width: CARD.width, height: fields.length * CARD.row + CARD.around };
+  const scene = sceneOf(placedBy);
+  const at = toScreen(view, placeOf(scene, thing, speeds));
+  const [left, top] = placeBeside(at, card, size, CLEAR, inkOf(scene, speeds, view));
   return (
     <div
       className={styles.card}

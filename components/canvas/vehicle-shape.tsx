@@ -62,11 +62,13 @@ export function GhostShape({
   pose,
   theme,
   dash,
+  opacity,
 }: {
   vehicle: SceneVehicle;
   pose: ScenePose;
   theme: Theme;
   dash: number[];
+  opacity: number;
 }) {
   const { length, width } = vehicle.body;
   return (
@@ -82,7 +84,7 @@ export function GhostShape({
       strokeWidth={1.25}
       strokeScaleEnabled={false}
       dash={dash}
-      opacity={0.8}
+      opacity={opacity}
     />
   );
 }
@@ -116,7 +118,7 @@ function tracePath(context: Context, nose: number, length: number, width: number
   context.closePath();
 }
 
-/** A is hatched one way, B the other and wider. */
+/** A is a plain tint, B is hatched, as in the answer and in the report. */
 function fillBody(context: Context, vehicle: SceneVehicle, theme: Theme): void {
   const { which, body } = vehicle;
   const nose = noseOf(vehicle);
@@ -124,17 +126,21 @@ function fillBody(context: Context, vehicle: SceneVehicle, theme: Theme): void {
   tracePath(context, nose, body.length, body.width);
   context.setAttr('fillStyle', which === 'A' ? theme.ASoft : theme.BSoft);
   context.fill();
-  context.clip();
-  context.setAttr('strokeStyle', theme[which]);
+  if (which === 'B') {
+    context.clip();
+    hatch(context, nose, body, theme.B);
+  }
+  context.restore();
+}
+
+function hatch(context: Context, nose: number, { length, width }: SceneVehicle['body'], colour: string): void {
+  context.setAttr('strokeStyle', colour);
   context.setAttr('globalAlpha', 0.3);
   context.setAttr('lineWidth', 0.025);
-  const slope = which === 'A' ? body.width : -body.width;
-  const step = which === 'A' ? HATCH : HATCH * 2;
   context.beginPath();
-  for (let x = nose - body.length - body.width; x < nose + body.width; x += step) {
-    context.moveTo(x, -body.width / 2);
-    context.lineTo(x + slope, body.width / 2);
+  for (let x = nose - length - width; x < nose + width; x += HATCH) {
+    context.moveTo(x, -width / 2);
+    context.lineTo(x + width, width / 2);
   }
   context.stroke();
-  context.restore();
 }

@@ -1,0 +1,73 @@
+import type { Vec } from '@/lib/geometry/vector';
+import { legLabelAt, letterAt, restLabelAt } from '@/lib/scene/labels';
+import { type Scene, type Speeds, type Which, approachTail } from '@/lib/scene/scene';
+import { type View, toScreen } from '@/lib/scene/view';
+import { BoardLabel } from './board-label';
+import type { Theme } from './theme';
+
+/** How numbers are shown, with their unit. */
+export interface Shown {
+  length: (metres: number) => string;
+  speed: (metresPerSecond: number) => string;
+  angle: (degrees: number) => string;
+}
+
+interface Props {
+  scene: Scene;
+  which: Which;
+  view: View;
+  theme: Theme;
+  speeds: Speeds;
+  shown: Shown;
+}
+
+/** How far words stand off what they name, pixels. */
+const OFF = { rest: 14, leg: 20, speed: [46, 18] } as const;
+/** Legs shorter than this carry no length, pixels. */
+const SHORT = 36;
+
+/** The letter of a vehicle, its computed speed, the lengths of its legs, and where it came to rest. */
+export function SceneLabels({ scene, which, view, theme, speeds, shown }: Props) {
+  const screen = (at: Vec): Vec => toScreen(view, at);
+  const rest = restLabelAt(scene, which, OFF.rest / view.scale);
+  const speed = speeds[which];
+  const tail = approachTail(scene, which, speed);
+  return (
+    <>
+      <BoardLabel
+        at={screen(letterAt(scene, which))}
+        text={which}
+        theme={theme}
+        colour={theme[which]}
+        size={17}
+        strong
+      />
+      {rest && <BoardLabel at={screen(rest)} text={`${which} at rest`} theme={theme} colour={theme[which]} />}
+      {tail && speed !== undefined && (
+        <BoardLabel
+          at={besideTail(screen(tail), screen(scene.point.at))}
+          text={shown.speed(speed)}
+          theme={theme}
+          colour={theme.inkSoft}
+        />
+      )}
+      {scene.travel[which]?.legs.map((leg, k) =>
+        leg * view.scale < SHORT ? null : (
+          <BoardLabel
+            key={k}
+            at={screen(legLabelAt(scene, which, k, OFF.leg / view.scale))}
+            text={shown.length(leg)}
+            theme={theme}
+            colour={theme.ink}
+          />
+        ),
+      )}
+    </>
+  );
+}
+
+/** Beyond the tail of an arrow, seen from the contact. */
+function besideTail([x, y]: Vec, [px, py]: Vec): Vec {
+  const reach = Math.hypot(x - px, y - py) || 1;
+  return [x + ((x - px) / reach) * OFF.speed[0], y + ((y - py) / reach) * OFF.speed[1]];
+}

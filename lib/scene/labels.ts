@@ -1,0 +1,61 @@
+import { distanceOutside } from '@/lib/geometry/polygon';
+import { type Vec, add, fromBody, scale, unit } from '@/lib/geometry/vector';
+import { type Scene, type Which, centreOf, noseOf, outlineAt, pathOf, restPose } from './scene';
+
+/**
+ * Where words stand so that they cover as little as can be, in world metres. `off`: how far they stand off what they
+ * name, m; it depends on the zoom.
+ */
+
+/** How far a point is from the nearest vehicle; negative inside one. */
+const clearance = (scene: Scene, at: Vec): number =>
+  Math.min(...(['A', 'B'] as const).map((which) => distanceOutside(at, outlineAt(scene.vehicles[which]))));
+
+/** The clearest of some places; an earlier one where several are clear enough. */
+function clearest(scene: Scene, places: readonly Vec[], enough: number): Vec {
+  const rated = places.map((at) => ({ at, clear: Math.min(enough, clearance(scene, at)) }));
+  return rated.reduce((best, next) => (next.clear > best.clear + 1e-9 ? next : best)).at;
+}
+
+/** Outside the middle of a side of the vehicle at rest, best ahead of it. */
+export function restLabelAt(scene: Scene, which: Which, off: number): Vec | null {
+  const rest = restPose(scene, which);
+  if (!rest) return null;
+  const vehicle = scene.vehicles[which];
+  const nose = noseOf(vehicle);
+  const { length, width } = vehicle.body;
+  const [middle, side] = [nose - length / 2, width / 2 + off];
+  const places: Vec[] = [
+    [nose + off, 0],
+    [middle, side],
+    [middle, -side],
+    [nose - length - off, 0],
+  ];
+  return clearest(
+    scene,
+    places.map((at) => fromBody(at, rest)),
+    off * 2,
+  );
+}
+
+/** Along a leg, in the order they are tried. */
+const ALONG = [0.5, 0.7, 0.3, 0.85, 1];
+
+/** Beside a leg, in its middle where that is free. */
+export function legLabelAt(scene: Scene, which: Which, leg: number, off: number): Vec {
+  const path = pathOf(scene, which);
+  const [from, to] = [path[leg], path[leg + 1]];
+  const across = unit((scene.travel[which]?.direction.angle ?? 0) + Math.PI / 2);
+  const places = ALONG.flatMap((share) => {
+    const on = add(scale(from, 1 - share), scale(to, share));
+    return [add(on, scale(across, off)), add(on, scale(across, -off))];
+  });
+  return clearest(scene, places, off);
+}
+
+/** On the tail of a vehicle. */
+export function letterAt(scene: Scene, which: Which): Vec {
+  const vehicle = scene.vehicles[which];
+  const back = noseOf(vehicle) - vehicle.body.length + Math.min(0.7, vehicle.body.length / 4);
+  return add(centreOf(vehicle), scale(unit(vehicle.pose.heading), back));
+}

@@ -5,7 +5,6 @@ import { AnswerProvider } from '@/components/hooks/use-answer';
 import { CommandsProvider } from '@/components/hooks/use-commands';
 import { SessionProvider } from '@/components/hooks/use-session';
 import { ShowProvider, useShow } from '@/components/hooks/use-show';
-import { CommandPalette } from '@/components/panels/command-palette';
 import { Ledger } from '@/components/panels/ledger';
 import { TitleBar } from '@/components/panels/title-bar';
 import { AnswerPanel } from '@/components/results/answer-panel';
@@ -52,7 +51,6 @@ function Sheet({ id, revision }: { id: string; revision: number }) {
         <AnswerPanel />
       </section>
       <LedgerDrawer />
-      <CommandPalette />
     </div>
   );
 }
@@ -74,9 +72,12 @@ function LedgerDrawer() {
         aria-expanded={isLedgerOpen}
         aria-controls="ledger"
         onClick={() => openLedger(!isLedgerOpen)}
+        onKeyDown={close}
       >
         Ledger
       </button>
+      {/* Escape steps back from whatever has the focus in it. */}
+      {/* oxlint-disable-next-line jsx-a11y/no-noninteractive-element-interactions */}
       <aside
         className={styles.ledger}
         id="ledger"

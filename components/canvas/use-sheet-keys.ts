@@ -1,4 +1,5 @@
 import { useEffect } from 'react';
+import { useTakeOn } from '@/components/hooks/use-commands';
 import { useSessionStore } from '@/components/hooks/use-session';
 import type { Session } from '@/lib/session/session';
 import { TOOL_OF } from '@/lib/session/tools/all';
@@ -17,6 +18,7 @@ const ZOOMS: Record<string, number> = { '+': 1.25, '=': 1.25, '-': 0.8, _: 0.8 }
 
 /** Keys that act wherever the focus is, except while typing: tools by letter, the view, undo and redo. */
 export function useSheetKeys({ fitAll, zoom }: Sheet): void {
+  useTakeOn({ 'view.fit': fitAll });
   const session = useSessionStore();
   useEffect(() => {
     const onKey = (event: KeyboardEvent): void => {

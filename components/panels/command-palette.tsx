@@ -1,5 +1,5 @@
 'use client';
-import { type KeyboardEvent, useEffect, useId, useRef, useState } from 'react';
+import { type KeyboardEvent, useCallback, useEffect, useId, useRef, useState } from 'react';
 import { useCommands } from '@/components/hooks/use-commands';
 import { type Command, matching } from '@/lib/session/commands';
 import styles from './command-palette.module.css';
@@ -17,28 +17,36 @@ export function CommandPalette() {
   const { list } = useCommands();
   const dialog = useRef<HTMLDialogElement>(null);
   const [commands, setCommands] = useState<Command[] | null>(null);
+  const close = (): void => dialog.current?.close();
+  const open = useCallback((): void => {
+    setCommands(list());
+    dialog.current?.showModal();
+  }, [list]);
   useEffect(() => {
     const onKey = (event: globalThis.KeyboardEvent): void => {
       if (!opens(event)) return;
       event.preventDefault();
-      if (dialog.current?.open) return dialog.current.close();
-      setCommands(list());
-      dialog.current?.showModal();
+      if (dialog.current?.open) dialog.current.close();
+      else open();
     };
     window.addEventListener('keydown', onKey);
     return () => window.removeEventListener('keydown', onKey);
-  }, [list]);
-  const close = (): void => dialog.current?.close();
+  }, [open]);
   return (
-    <dialog
-      ref={dialog}
-      className={styles.dialog}
-      aria-label="Commands"
-      closedby="any"
-      onClose={() => setCommands(null)}
-    >
-      {commands && <Finder commands={commands} onDone={close} />}
-    </dialog>
+    <>
+      <button type="button" className={styles.trigger} aria-keyshortcuts="Control+K ?" onClick={open}>
+        Commands <kbd>Ctrl K</kbd>
+      </button>
+      <dialog
+        ref={dialog}
+        className={styles.dialog}
+        aria-label="Commands"
+        closedby="any"
+        onClose={() => setCommands(null)}
+      >
+        {commands && <Finder commands={commands} onDone={close} />}
+      </dialog>
+    </>
   );
 }
 
@@ -87,11 +95,11 @@ function Finder({ commands, onDone }: { commands: readonly Command[]; onDone: ()
         }}
         onKeyDown={onKeyDown}
       />
-      <ul id={id} role="listbox" aria-label="Commands" className={styles.list}>
+      <div id={id} role="listbox" aria-label="Commands" className={styles.list}>
         {found.map((command, k) => (
           // The keys are the field's: an option is never focused itself.
           // oxlint-disable-next-line jsx-a11y/click-events-have-key-events, jsx-a11y/interactive-supports-focus
-          <li
+          <div
             key={command.id}
             id={`${id}-${k}`}
             role="option"
@@ -103,9 +111,9 @@ function Finder({ commands, onDone }: { commands: readonly Command[]; onDone: ()
             <span>{command.title}</span>
             <small>{command.group}</small>
             {command.key && <kbd>{command.key}</kbd>}
-          </li>
+          </div>
         ))}
-      </ul>
+      </div>
       {found.length === 0 && <p className={styles.none}>Nothing is called so.</p>}
       <p className={styles.foot}>↑ ↓ choose · Enter does it · Esc closes · the list opens with Ctrl K or ?</p>
     </div>

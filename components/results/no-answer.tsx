@@ -45,14 +45,14 @@ export function NoAnswer({ answer }: { answer: Answer }) {
 
 function IssueItem({ issue: { path, says } }: { issue: Issue }) {
   const casefile = useSession((s) => s.casefile);
-  const use = useSession((s) => s.use);
+  const takeUp = useSession((s) => s.use);
   const { showField } = useShow();
   const edit = useSession((s) => s.edit);
   const toRestitution = (): void =>
     void edit('method', { do: 'set', path: 'analysis.method', to: 'restitution' satisfies Method });
   const drawn = DRAWN.find(([pattern]) => pattern.test(path));
   const take = (tool: ToolId): void => {
-    use(tool);
+    takeUp(tool);
     document.getElementById('board')?.focus();
   };
   return (

@@ -48,7 +48,7 @@ export function PairFigures({ result, of }: { result: Result; of: CaseFile }) {
         {share !== undefined && (
           <div>
             <dt>Share of the closing energy lost</dt>
-            <dd>{percent(Math.round(share * 100) / 100)}</dd>
+            <dd>{shareWords(share)}</dd>
           </div>
         )}
         {VEHICLE_IDS.map((id) => (
@@ -58,6 +58,12 @@ export function PairFigures({ result, of }: { result: Result; of: CaseFile }) {
     </div>
   );
 }
+
+/** More than all of it cannot be lost: then what is stated does not belong to one contact. */
+const shareWords = (share: number): string => {
+  const figure = percent(Math.round(share * 100) / 100);
+  return share > 1 ? `${figure}, more than there was: yaw rates, plane and contact point do not agree` : figure;
+};
 
 /** The side that the push came from: opposite to the direction of delta-V, which the table of all results states. */
 function Push({ id, result }: { id: VehicleId; result: Result }) {

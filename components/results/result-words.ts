@@ -17,8 +17,8 @@ export interface Said {
   unit: string;
   /** «23.9 to 29.4». */
   interval: string;
-  /** What the figure is, where it is not the median. */
-  median?: string;
+  /** Whether the figure is an upper bound; the interval then says the median. */
+  isBound?: boolean;
 }
 
 /** Median and interval of a result; null where it has none. */
@@ -30,7 +30,7 @@ export function said(result: Result, name: ResultName, units: UnitSystem): Said 
   const unit = unitText(dimension, units);
   if (band.low === band.high) return { figure: median, unit, interval: 'no spread' };
   if (dimension === 'speed' && reachesZero(band))
-    return { figure: `at most ${shortest[1]}`, unit, interval: `from ${shortest[0]}`, median };
+    return { figure: `at most ${shortest[1]}`, unit, interval: `median ${median}`, isBound: true };
   return { figure: median, unit, interval: `${low} to ${high}` };
 }
 

@@ -56,9 +56,7 @@ function Figures({ row, result, units }: { row: SpeedRow; result: Result; units:
         <span className={styles.median}>
           {found.figure} <small>{found.unit}</small>
         </span>
-        <span className={styles.interval} title={found.median && `median ${found.median} ${found.unit}`}>
-          {found.interval}
-        </span>
+        <span className={styles.interval}>{found.interval}</span>
       </td>
     </tr>
   );

@@ -1,7 +1,8 @@
-import { useEffect, useState } from 'react';
+import { useState } from 'react';
 import type { Answer } from '@/components/hooks/answer';
-import { useSessionStore } from '@/components/hooks/use-session';
+import { useSession } from '@/components/hooks/use-session';
 import { labelOf } from '@/lib/casefile/fields';
+import type { CaseFile } from '@/lib/casefile/schema';
 import { failuresOf } from '@/lib/report/failures';
 import { resultLabel } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
@@ -13,21 +14,22 @@ const READ_OUT = ['A.approachSpeed', 'B.approachSpeed', 'A.deltaV', 'B.deltaV'] 
 
 /** Reads the answer out when it comes to rest; says nothing while it is being changed. */
 export function Spoken({ answer }: { answer: Answer }) {
+  const casefile = useSession((s) => s.casefile);
   const [words, setWords] = useState('');
-  const { status, result, of, issues } = answer;
-  const session = useSessionStore();
-  useEffect(() => {
-    if (status === 'settled' && result && of) setWords(summary(result, unitsShown(of)));
-    else if (status === 'refused' || status === 'unsolved' || status === 'failed')
-      setWords(
-        `No answer: ${issues.map(({ path, says }) => `${labelOf(session.getState().casefile, path)}, ${says}`).join('; ')}.`,
-      );
-  }, [status, result, of, issues, session]);
+  const atRest = wordsAtRest(answer, casefile);
+  if (atRest !== null && atRest !== words) setWords(atRest);
   return (
     <p className="visually-hidden" role="status">
       {words}
     </p>
   );
+}
+
+/** Null while the answer is on its way. */
+function wordsAtRest({ status, result, of, stale, issues }: Answer, casefile: CaseFile): string | null {
+  if (status === 'settled' && result && of && !stale) return summary(result, unitsShown(of));
+  if (status !== 'refused' && status !== 'unsolved' && status !== 'failed') return null;
+  return `No answer: ${issues.map(({ path, says }) => `${labelOf(casefile, path)}, ${says}`).join('; ')}.`;
 }
 
 function summary(result: Result, units: UnitSystem): string {

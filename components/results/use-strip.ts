@@ -1,5 +1,5 @@
 'use client';
-import { useEffect, useState } from 'react';
+import { useMemo, useSyncExternalStore } from 'react';
 
 /** How tall the strip of the answer is, and whether it is folded to one line; remembered by the browser. */
 export interface Strip {
@@ -19,43 +19,58 @@ interface Remembered {
   collapsed: boolean;
 }
 
-const kept = (height: number): number => Math.round(Math.min(HIGHEST, Math.max(LOWEST, height)));
+const listeners = new Set<() => void>();
+/** What was chosen in this tab; a browser that keeps nothing only forgets it with the tab. */
+let chosen: string | null = null;
 
-export function useStrip(): Strip {
-  const [strip, setStrip] = useState<Remembered>({ height: null, collapsed: false });
-  // Not at the first rendering: the server does not know what the browser remembers.
-  useEffect(() => {
-    const remembered = recalled();
-    if (remembered) setStrip(remembered);
-  }, []);
-  const change = (to: Partial<Remembered>): void => {
-    const next = { ...strip, ...to };
-    setStrip(next);
-    remember(next);
-  };
-  return {
-    ...strip,
-    setHeight: (height) => change({ height: kept(height) }),
-    setCollapsed: (collapsed) => change({ collapsed }),
-  };
+function subscribe(listener: () => void): () => void {
+  listeners.add(listener);
+  return () => listeners.delete(listener);
 }
 
-function recalled(): Remembered | null {
+function recalled(): string | null {
   try {
-    const found = JSON.parse(localStorage.getItem(KEY) ?? 'null') as Partial<Remembered> | null;
-    if (!found) return null;
-    const height = typeof found.height === 'number' && Number.isFinite(found.height) ? kept(found.height) : null;
-    return { height, collapsed: found.collapsed === true };
+    return chosen ?? localStorage.getItem(KEY);
   } catch {
     return null;
   }
 }
 
-/** A browser that keeps nothing only forgets a height. */
 function remember(strip: Remembered): void {
+  chosen = JSON.stringify(strip);
   try {
-    localStorage.setItem(KEY, JSON.stringify(strip));
+    localStorage.setItem(KEY, chosen);
   } catch {
-    return;
+    // Not allowed to keep anything: `chosen` serves this tab.
   }
+  for (const listener of listeners) listener();
+}
+
+const kept = (height: number): number => Math.round(Math.min(HIGHEST, Math.max(LOWEST, height)));
+
+/** Whatever stands there may be of another version, or of someone's hand. */
+function parsed(text: string | null): Remembered {
+  try {
+    const found = JSON.parse(text ?? '{}') as Partial<Remembered> | null;
+    const height = found?.height;
+    return {
+      height: typeof height === 'number' && Number.isFinite(height) ? kept(height) : null,
+      collapsed: found?.collapsed === true,
+    };
+  } catch {
+    return { height: null, collapsed: false };
+  }
+}
+
+export function useStrip(): Strip {
+  // The server does not know what the browser remembers.
+  const text = useSyncExternalStore(subscribe, recalled, () => null);
+  return useMemo(() => {
+    const strip = parsed(text);
+    return {
+      ...strip,
+      setHeight: (height) => remember({ ...strip, height: kept(height) }),
+      setCollapsed: (collapsed) => remember({ ...strip, collapsed }),
+    };
+  }, [text]);
 }

@@ -32,7 +32,7 @@ const BY_LAST_KEY: Record<string, Support> = {
   restitution: SHARE,
 };
 
-/** The support of the quantity at a dotted path (models.md section 7, truncation). */
+/** The support of the quantity at a dotted path: draws are kept inside it. */
 export function supportOf(path: string): Support {
   if (path === 'impact.friction') return NON_NEGATIVE;
   if (/^damage\.[AB]\.depths\.\d+$/.test(path)) return NON_NEGATIVE;

@@ -33,7 +33,7 @@ function travelOf({ departure }: CaseFile, which: Which): SceneTravel | null {
   return { direction: direction(stated.direction), legs: stated.legs.map(({ distance }) => distance.value) };
 }
 
-/** The angle of the normal from A into B (models.md section 2). */
+/** The angle of the normal from A into B. */
 function normalOf(plane: number, a: SceneVehicle, b: SceneVehicle): number {
   const normal: Vec = [Math.sin(plane), -Math.cos(plane)];
   const towards = normal[0] * (b.pose.x - a.pose.x) + normal[1] * (b.pose.y - a.pose.y);

@@ -4,7 +4,7 @@ import { G } from './legs';
 import { CORNERING, brakingWithRolling, tyreForce } from './wheel';
 
 /**
- * Travel from separation to rest: a rigid vehicle in the plane on four wheels (models.md section 4). SI and radians;
+ * Travel from separation to rest: a rigid vehicle in the plane on four wheels. SI and radians;
  * world axes for position and velocity.
  */
 

@@ -44,16 +44,29 @@ const wrapped = (degrees: number): number => {
 
 /** The values of a result over the possible draws in the units of the contract, directions unwrapped about the centre. */
 function valuesOf(solution: Solution, name: ResultName): Float64Array {
+  const drawn = solution.values[name as FigureName];
   const factor = unitFactor(name);
-  const values = solution.values[name as FigureName].filter((x) => !Number.isNaN(x)).map((x) => x * factor);
-  if (!isDirection(name) || values.length === 0) return values;
-  const centre = solution.central.figures[name as FigureName] * factor;
-  const about = Number.isFinite(centre) ? wrapped(centre) : values[0];
-  return values.map((x) => x - 360 * Math.round((x - about) / 360));
+  const values = new Float64Array(drawn.length);
+  let n = 0;
+  for (let k = 0; k < drawn.length; k++) if (!Number.isNaN(drawn[k])) values[n++] = drawn[k] * factor;
+  const existing = n === drawn.length ? values : values.slice(0, n);
+  if (isDirection(name) && n > 0) {
+    const centre = solution.central.figures[name as FigureName] * factor;
+    unwrap(existing, Number.isFinite(centre) ? wrapped(centre) : existing[0]);
+  }
+  return existing;
+}
+
+/** Turns every direction, deg, by whole circles until it lies within half a circle of another. */
+function unwrap(directions: Float64Array, about: number): void {
+  for (let k = 0; k < directions.length; k++) directions[k] -= 360 * Math.round((directions[k] - about) / 360);
 }
 
 /** Mean, spread and intervals of every result (JCGM 101:2008 clause 7), and the shapes of their distributions. */
-export function bandsOf(solution: Solution, coverage: number): { bands: Partial<Record<ResultName, Band>>; shapes: Shapes } {
+export function bandsOf(
+  solution: Solution,
+  coverage: number,
+): { bands: Partial<Record<ResultName, Band>>; shapes: Shapes } {
   const bands: Partial<Record<ResultName, Band>> = {};
   const shapes: Shapes = {};
   for (const name of namesOf(solution)) {
@@ -71,14 +84,15 @@ export function bandsOf(solution: Solution, coverage: number): { bands: Partial<
 function shapeOf(values: Float64Array, { low, high }: Band): Shape {
   const width = high - low;
   let [min, max] = [Infinity, -Infinity];
-  for (const x of values) {
-    if (x < min) min = x;
-    if (x > max) max = x;
+  for (let k = 0; k < values.length; k++) {
+    min = Math.min(min, values[k]);
+    max = Math.max(max, values[k]);
   }
   const from = Math.max(min, low - width);
   const to = Math.min(max, high + width);
-  const counts = new Array<number>(BINS).fill(0);
-  for (const x of values)
-    if (x >= from && x <= to) counts[Math.min(BINS - 1, Math.floor(((x - from) / (to - from || 1)) * BINS))]++;
-  return { low: from, high: to, counts };
+  const counts = new Uint32Array(BINS);
+  const perUnit = BINS / (to - from || 1);
+  for (let k = 0; k < values.length; k++)
+    if (values[k] >= from && values[k] <= to) counts[Math.min(BINS - 1, Math.floor((values[k] - from) * perUnit))]++;
+  return { low: from, high: to, counts: [...counts] };
 }

@@ -10,7 +10,8 @@ export function moreOf(solution: Solution): Result['more'] {
   const { problem, central } = solution;
   const { state, answer, figures } = central;
   const { A, B } = state;
-  const peak = (meanOf: number | undefined): number | undefined => (meanOf === undefined ? undefined : peakAcceleration(meanOf));
+  const peak = (meanOf: number | undefined): number | undefined =>
+    meanOf === undefined ? undefined : peakAcceleration(meanOf);
   const more: Result['more'] = {
     ...(problem.method === 'directions'
       ? { condition: answer.condition, sinBetween: answer.sinBetween }
@@ -30,7 +31,9 @@ export function moreOf(solution: Solution): Result['more'] {
     tyreShare: tyreShareOf(problem, figures.impulse) ?? undefined,
   };
   return Object.fromEntries(
-    Object.entries(more).filter(([, value]) => [value].flat().every((x) => typeof x === 'number' && Number.isFinite(x))),
+    Object.entries(more).filter(([, value]) =>
+      [value].flat().every((x) => typeof x === 'number' && Number.isFinite(x)),
+    ),
   );
 }
 

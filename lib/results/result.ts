@@ -59,7 +59,7 @@ export const resultSchema = z
     hypotheses: z.array(z.never()),
     seats: z.strictObject({ A: z.array(seatResult), B: z.array(seatResult) }),
     more: z.strictObject({
-      /** 1-norm condition number of [mA hA, mB hB], scaled by the masses (directions). */
+      /** 2-norm condition number of [mA hA, mB hB] (directions). */
       condition: number.optional(),
       /** Sine of the angle between the approach directions (directions). */
       sinBetween: number.optional(),
@@ -82,7 +82,7 @@ export const resultSchema = z
       momentumAfter: z.tuple([number, number]).optional(),
       angularMomentumBefore: number.optional(),
       angularMomentumAfter: number.optional(),
-      /** Tyre impulse over contact impulse, an upper bound (models.md section 9). */
+      /** Tyre impulse over contact impulse, an upper bound. */
       tyreShare: number.optional(),
     }),
   })

@@ -9,7 +9,12 @@ import type { SeatResult } from './result';
 export function seatResults(solution: Solution, id: VehicleId, coverage: number): SeatResult[] {
   return solution.problem.seats[id].map((seat) => {
     const { figures } = solution.central;
-    const central = seatDeltaV(figures[`${id}.deltaVForward`], figures[`${id}.deltaVLeft`], figures[`${id}.yawRateChange`], seat);
+    const central = seatDeltaV(
+      figures[`${id}.deltaVForward`],
+      figures[`${id}.deltaVLeft`],
+      figures[`${id}.yawRateChange`],
+      seat,
+    );
     return {
       name: seat.name,
       central: Number.isFinite(central.forward) ? named(central.forward, central.left) : {},
@@ -18,15 +23,29 @@ export function seatResults(solution: Solution, id: VehicleId, coverage: number)
   });
 }
 
-const named = (forward: number, left: number) => ({ deltaV: hypot(forward, left), deltaVForward: forward, deltaVLeft: left });
+const named = (forward: number, left: number) => ({
+  deltaV: hypot(forward, left),
+  deltaVForward: forward,
+  deltaVLeft: left,
+});
 
-function seatBands(solution: Solution, id: VehicleId, seat: { x: number; y: number }, coverage: number): SeatResult['bands'] {
+function seatBands(
+  solution: Solution,
+  id: VehicleId,
+  seat: { x: number; y: number },
+  coverage: number,
+): SeatResult['bands'] {
   const { values } = solution;
   const n = values[`${id}.deltaVForward`].length;
   if (n === 0) return {};
   const [size, forward, left] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
   for (let k = 0; k < n; k++) {
-    const at = seatDeltaV(values[`${id}.deltaVForward`][k], values[`${id}.deltaVLeft`][k], values[`${id}.yawRateChange`][k], seat);
+    const at = seatDeltaV(
+      values[`${id}.deltaVForward`][k],
+      values[`${id}.deltaVLeft`][k],
+      values[`${id}.yawRateChange`][k],
+      seat,
+    );
     forward[k] = at.forward;
     left[k] = at.left;
     size[k] = hypot(at.forward, at.left);

@@ -13,7 +13,11 @@ import type { Solution } from '@/lib/solve/solve';
 export const ENGINE = 'retrodict 0.1.0';
 
 /** Puts a solution into the result file. `coverage` is that of the intervals. */
-export function summarise(casefile: CaseFile, solution: Solution, coverage: number): { result: Result; shapes: Shapes } {
+export function summarise(
+  casefile: CaseFile,
+  solution: Solution,
+  coverage: number,
+): { result: Result; shapes: Shapes } {
   const central = centralResults(solution);
   const { bands, shapes } = bandsOf(solution, coverage);
   const result: Result = {

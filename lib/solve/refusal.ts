@@ -1,4 +1,5 @@
 import type { Issue } from '@/lib/casefile/issue';
+import { LEAST_RESTITUTION } from '@/lib/mechanics/impact-backwards';
 import type { Problem } from '@/lib/evidence/problem';
 import type { Central } from './central';
 
@@ -6,7 +7,7 @@ import type { Central } from './central';
 const PARALLEL = 1e-9;
 
 /**
- * Why nothing can be computed from the central values (what models.md section 3 and 4 refuse or call an error), with
+ * Why nothing can be computed from the central values (what the methods refuse, or the travel cannot have been), with
  * the path that it hangs on; null where there is an answer, if perhaps an impossible one that the checks speak of.
  */
 export function refusalOf(problem: Problem, central: Central): Issue | null {
@@ -23,7 +24,7 @@ export function refusalOf(problem: Problem, central: Central): Issue | null {
       path: 'approach.B.direction',
       says: 'the approach directions are parallel, so momentum alone cannot part the two speeds: use the method restitution',
     };
-  if (problem.method === 'restitution' && reason === 'restitution')
+  if (problem.method === 'restitution' && state.e < LEAST_RESTITUTION - 1e-12)
     return {
       path: 'impact.restitution',
       says: `the restitution ${state.e} is below 0.05: the speed of parting would be multiplied more than 20 times, so no answer is given`,

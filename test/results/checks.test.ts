@@ -30,11 +30,23 @@ const levelOf = async (id: string, name: 'junction' | 'queue', ...edits: Edit[])
   (await checksAfter(name, ...edits)).get(id)?.level;
 
 describe('off in the examples where nothing is wrong', () => {
-  test.each(['energyGain', 'restitutionRange', 'friction', 'slidingReversal', 'closing', 'contactPoint', 'overlap', 'nearlyInLine', 'sideSlip', 'yawMismatch', 'speedRange', 'wide'])(
-    '%s passes at the junction',
-    async (id) => expect(await levelOf(id, 'junction')).toBe('pass'),
+  test.each([
+    'energyGain',
+    'restitutionRange',
+    'friction',
+    'slidingReversal',
+    'closing',
+    'contactPoint',
+    'overlap',
+    'nearlyInLine',
+    'sideSlip',
+    'yawMismatch',
+    'speedRange',
+    'wide',
+  ])('%s passes at the junction', async (id) => expect(await levelOf(id, 'junction')).toBe('pass'));
+  test.each(['amplification', 'misfit', 'impossibleShare'])('%s passes in the queue', async (id) =>
+    expect(await levelOf(id, 'queue')).toBe('pass'),
   );
-  test.each(['amplification', 'misfit', 'impossibleShare'])('%s passes in the queue', async (id) => expect(await levelOf(id, 'queue')).toBe('pass'));
   test('checks that do not apply are not there', async () => {
     const [junction, queue] = [await checksAfter('junction'), await checksAfter('queue')];
     expect(junction.has('amplification')).toBe(false);
@@ -47,11 +59,27 @@ type Case = [id: string, level: string, name: 'junction' | 'queue', edits: Edit[
 
 /** What turns each check on. */
 const ON: Case[] = [
-  ['energyGain', 'fail', 'queue', [set('impact.restitution', q(1)), set('impact.impulseRatio', q(0.6)), set('impact.A.y', q(0.75)), set('departure.A.yawRate', q(-90)), set('departure.B.yawRate', q(-90))]],
+  [
+    'energyGain',
+    'fail',
+    'queue',
+    [
+      set('impact.restitution', q(1)),
+      set('impact.impulseRatio', q(0.6)),
+      set('impact.A.y', q(0.75)),
+      set('departure.A.yawRate', q(-90)),
+      set('departure.B.yawRate', q(-90)),
+    ],
+  ],
   ['restitutionRange', 'fail', 'junction', [set('departure.B.direction', q(40))]],
   ['friction', 'caution', 'junction', [set('impact.plane', q(110))]],
   ['friction', 'fail', 'junction', [set('impact.plane', q(122))]],
-  ['slidingReversal', 'caution', 'queue', [set('impact.impulseRatio', q(-0.4)), set('departure.B.direction', q(-20)), set('departure.A.direction', q(30))]],
+  [
+    'slidingReversal',
+    'caution',
+    'queue',
+    [set('impact.impulseRatio', q(-0.4)), set('departure.B.direction', q(-20)), set('departure.A.direction', q(30))],
+  ],
   ['closing', 'fail', 'junction', [set('impact.plane', q(150))]],
   ['contactPoint', 'caution', 'junction', [set('impact.point.y', q(3))]],
   ['overlap', 'caution', 'queue', [set('impact.A.x', q(-3.4))]],
@@ -66,16 +94,27 @@ const ON: Case[] = [
   ['yawMismatch', 'caution', 'queue', [set('departure.A.yawRate', q(120, 1))]],
   ['tyreImpulse', 'caution', 'queue', []],
   ['tyreImpulse', 'pass', 'queue', [set('pulse', q(0.005))]],
-  ['speedRange', 'caution', 'junction', [set('departure.A.legs.0.distance', q(60)), set('departure.B.legs.0.distance', q(90))]],
+  [
+    'speedRange',
+    'caution',
+    'junction',
+    [set('departure.A.legs.0.distance', q(60)), set('departure.B.legs.0.distance', q(90))],
+  ],
   ['misfit', 'caution', 'queue', [set('approach.A.speed', q(12, 0.5))]],
   ['impossibleShare', 'caution', 'junction', [set('departure.B.direction', q(29, 6))]],
-  ['wide', 'caution', 'queue', [set('impact.restitution', { value: 0.3, spread: { shape: 'rectangular', low: 0.06, high: 0.6 } })]],
+  [
+    'wide',
+    'caution',
+    'queue',
+    [set('impact.restitution', { value: 0.3, spread: { shape: 'rectangular', low: 0.06, high: 0.6 } })],
+  ],
 ];
 
 describe('on', () => {
   test.each(ON)('%s: %s', async (id, level, name, edits) => expect(await levelOf(id, name, ...edits)).toBe(level));
 
-  test('every check is turned on here', () => expect(new Set(ON.map(([id]) => id))).toEqual(new Set(CHECKS.map(({ id }) => id))));
+  test('every check is turned on here', () =>
+    expect(new Set(ON.map(([id]) => id))).toEqual(new Set(CHECKS.map(({ id }) => id))));
 });
 
 test('every check says what it found, what to do where it speaks up, and where its limit comes from', async () => {

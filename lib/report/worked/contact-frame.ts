@@ -15,7 +15,7 @@ export interface Body {
   heading: number;
 }
 
-/** The contact frame and the inverse effective masses (models.md, section 2), 1/kg. */
+/** The contact frame and the inverse effective masses, 1/kg. */
 export interface ContactFrame {
   n: Vector;
   t: Vector;

@@ -7,7 +7,7 @@ import type { Sheet } from './sheet';
 import { type Vector, asDegrees, cross, dot, less, radians, scaled, size, sum, unit } from './vector';
 
 /**
- * The method directions, line by line (models.md, section 3): the momentum of the pair along two known directions of
+ * The method directions, line by line: the momentum of the pair along two known directions of
  * approach gives both speeds; the impulse, and with it restitution and energy, follow.
  */
 export function directionsLines(

@@ -9,7 +9,7 @@ import { type Vector, asDegrees, cross, directionOf, radians, scaled, size, sum 
 const STANDING = 1e-9;
 
 /**
- * The method restitution, line by line (models.md, section 3): how the bodies part, with the restitution, gives how they
+ * The method restitution, line by line: how the bodies part, with the restitution, gives how they
  * closed; the impulse takes each back to its approach.
  */
 export function restitutionLines(

@@ -6,7 +6,7 @@ import { type Vector, asDegrees, scaled, unit } from './vector';
 /** Standard gravity, m/s^2: exact (NIST SP 811). */
 const GRAVITY = 9.80665;
 
-/** Writes the lines from rest back to separation and answers the separation velocity, m/s (models.md, section 4). */
+/** Writes the lines from rest back to separation and answers the separation velocity, m/s. */
 export function separationVelocity(departure: LegsDeparture, id: VehicleId, sheet: Sheet): Vector {
   const { legs, endSpeed, direction } = departure;
   sheet.begin(`Travel of ${id}, from its end back to separation`);

@@ -16,7 +16,7 @@ export interface CheckContext {
 export type Finding = Omit<Check, 'id' | 'source' | 'paths'> & { paths?: string[] };
 
 /**
- * One check: an id of models.md section 9, where its limit comes from, and the test itself, which returns null where it
+ * One check: an id, where its limit comes from, and the test itself, which returns null where it
  * does not apply to the case.
  */
 export interface CheckRule {

@@ -18,9 +18,15 @@ function mismatchOf({ casefile, solution }: CheckContext, id: VehicleId) {
   const before = casefile.approach[id].yawRate.value;
   const wanted = directions ? central.figures[`${id}.predictedYawRate`] * toRate : central.figures[size] * toRate;
   const given = directions ? central.figures[size] * toRate : before;
-  const draws = directions ? values[size].map((w, k) => w - values[`${id}.predictedYawRate`][k]) : values[size];
+  const draws = directions ? difference(values[size], values[`${id}.predictedYawRate`]) : values[size];
   const spread = draws.length > 1 ? meanAndSd(draws).sd * toRate : 0;
   return { id, wanted, given, off: Math.abs(wanted - given), limit: LEAST + 2 * spread, directions };
+}
+
+function difference(a: Float64Array, b: Float64Array): Float64Array {
+  const found = new Float64Array(a.length);
+  for (let k = 0; k < a.length; k++) found[k] = a[k] - b[k];
+  return found;
 }
 
 export const yawMismatch: CheckRule = {

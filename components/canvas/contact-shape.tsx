@@ -28,7 +28,14 @@ export function ContactShape({ scene: { point, plane }, theme, zoom, selected }:
   return (
     <>
       {[plane.angle, plane.angle + Math.PI].map((angle) => (
-        <Fan key={angle} centre={point.at} angle={angle} half={plane.fan} radius={PLANE_REACH} fill={theme.ink} />
+        <Fan
+          key={angle}
+          centre={point.at}
+          angle={angle}
+          half={plane.fan}
+          radius={PLANE_REACH}
+          fill={theme.lineStrong}
+        />
       ))}
       {point.spread[0] > 0 && point.spread[1] > 0 && (
         <Ellipse x={x} y={y} radiusX={point.spread[0]} radiusY={point.spread[1]} fill={theme.ink} opacity={0.12} />

@@ -1,3 +1,4 @@
+import { toDegrees } from '@/lib/geometry/vector';
 import { METRES_PER, scaleBar } from '@/lib/scene/grid';
 import type { View } from '@/lib/scene/view';
 import type { UnitSystem } from '@/lib/units/dimension';
@@ -11,13 +12,15 @@ export function MapMarks({ view, units, north }: { view: View; units: UnitSystem
   const text = `${Number(count.toPrecision(3))} ${units === 'metric' ? 'm' : 'ft'}`;
   return (
     <div className={styles.marks} aria-hidden>
-      <svg width="28" height="36" viewBox="-14 -18 28 36">
-        <g transform={`rotate(${90 - (north * 180) / Math.PI})`}>
-          <path d="M0 -15 L6 8 L0 4 L-6 8 Z" className={styles.northArrow} />
-          <text y="17" className={styles.northLetter}>
-            N
-          </text>
-        </g>
+      <svg width="40" height="40" viewBox="-20 -20 40 40">
+        <path
+          d="M0 -12 L6 10 L0 6 L-6 10 Z"
+          className={styles.northArrow}
+          transform={`rotate(${90 - toDegrees(north)})`}
+        />
+        <text x={16 * Math.cos(north)} y={4 - 16 * Math.sin(north)} className={styles.northLetter}>
+          N
+        </text>
       </svg>
       <div className={styles.scaleBar} style={{ width: pixels }}>
         <span>{text}</span>

@@ -108,10 +108,11 @@ function CardNumber({ field, casefile }: { field: Field; casefile: CaseFile }) {
         onBlur={commit}
         onKeyDown={(event) => {
           if (event.key === 'Enter') commit();
-          if (event.key === 'Escape' && draft !== null) {
+          if (event.key === 'Escape') {
             event.stopPropagation();
-            setDraft(null);
             setWrong(null);
+            if (draft === null) backToList(event.currentTarget);
+            else setDraft(null);
           }
         }}
       />
@@ -123,4 +124,11 @@ function CardNumber({ field, casefile }: { field: Field; casefile: CaseFile }) {
       )}
     </label>
   );
+}
+
+/** Steps back from the numbers to the entry of the list that they belong to. */
+function backToList(input: HTMLElement): void {
+  const board = input.closest('[role=group][tabindex]');
+  const entry = board?.querySelector<HTMLElement>('li [aria-pressed=true]') ?? board;
+  if (entry instanceof HTMLElement) entry.focus();
 }

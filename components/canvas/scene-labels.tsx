@@ -22,14 +22,14 @@ interface Props {
 }
 
 /** How far words stand off what they name, pixels. */
-const OFF = { rest: 14, leg: 20, speed: [46, 18] } as const;
+const OFF = { rest: [38, 13], leg: 20, speed: [46, 18] } as const;
 /** Legs shorter than this carry no length, pixels. */
 const SHORT = 36;
 
 /** The letter of a vehicle, its computed speed, the lengths of its legs, and where it came to rest. */
 export function SceneLabels({ scene, which, view, theme, speeds, shown }: Props) {
   const screen = (at: Vec): Vec => toScreen(view, at);
-  const rest = restLabelAt(scene, which, OFF.rest / view.scale);
+  const rest = restLabelAt(scene, which, [OFF.rest[0] / view.scale, OFF.rest[1] / view.scale]);
   const speed = speeds[which];
   const tail = approachTail(scene, which, speed);
   return (

@@ -3,7 +3,7 @@ import { type Scene, sceneBounds } from '@/lib/scene/scene';
 import { type Size, type View, fit, zoomAbout } from '@/lib/scene/view';
 
 /** Free pixels around what the board must show. */
-const MARGIN = 64;
+const MARGIN = 76;
 /** Zoom per pixel of a wheel's turn, and of a pinch on a touch pad, which reports smaller turns. */
 const NOTCH = { wheel: 1.0015, pinch: 1.01 };
 /** Pixels in a line, for wheels that count in lines. */

@@ -17,25 +17,21 @@ function clearest(scene: Scene, places: readonly Vec[], enough: number): Vec {
   return rated.reduce((best, next) => (next.clear > best.clear + 1e-9 ? next : best)).at;
 }
 
-/** Outside the middle of a side of the vehicle at rest, best ahead of it. */
-export function restLabelAt(scene: Scene, which: Which, off: number): Vec | null {
+/** Outside the middle of a side of the vehicle at rest, best ahead of it. `half`: half the width and height of the words, m. */
+export function restLabelAt(scene: Scene, which: Which, half: Vec): Vec | null {
   const rest = restPose(scene, which);
   if (!rest) return null;
   const vehicle = scene.vehicles[which];
-  const nose = noseOf(vehicle);
   const { length, width } = vehicle.body;
-  const [middle, side] = [nose - length / 2, width / 2 + off];
-  const places: Vec[] = [
-    [nose + off, 0],
-    [middle, side],
-    [middle, -side],
-    [nose - length - off, 0],
-  ];
-  return clearest(
-    scene,
-    places.map((at) => fromBody(at, rest)),
-    off * 2,
-  );
+  const nose = noseOf(vehicle);
+  const middle = nose - length / 2;
+  const places = [0, 1, 3, 2].map((quarter) => {
+    const away = unit(rest.heading + (quarter * Math.PI) / 2);
+    const off = Math.abs(away[0]) * half[0] + Math.abs(away[1]) * half[1];
+    const side = quarter % 2 === 0 ? length / 2 : width / 2;
+    return add(fromBody([middle, 0], rest), scale(away, side + off));
+  });
+  return clearest(scene, places, half[0]);
 }
 
 /** Along a leg, in the order they are tried. */

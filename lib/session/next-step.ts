@@ -10,7 +10,7 @@ export function nextStep(casefile: CaseFile): string | null {
   const begun = VEHICLE_IDS.some((id) => approach[id].direction || departure[id]);
   const isDefault = ({ source }: { source?: string }): boolean => source === DEFAULT_SOURCE;
   if (!begun && VEHICLE_IDS.every((id) => isDefault(impact[id].x) && isDefault(impact[id].heading)))
-    return 'Next: drag A and B to where they met, and turn them by the handle ahead of the nose';
+    return 'Next: drag A and B to where they met; turn them by the handle ahead of the nose';
   if (!begun && isDefault(impact.plane) && isDefault(impact.point.x))
     return 'Next: draw the line in which the bodies met, with the contact plane tool (P)';
   for (const id of VEHICLE_IDS)

@@ -1,6 +1,7 @@
 'use client';
 import { type KeyboardEvent, useCallback, useEffect, useId, useRef, useState } from 'react';
 import { useCommands } from '@/components/hooks/use-commands';
+import buttons from '@/components/ui/button.module.css';
 import { type Command, matching } from '@/lib/session/commands';
 import styles from './command-palette.module.css';
 
@@ -34,7 +35,12 @@ export function CommandPalette() {
   }, [open]);
   return (
     <>
-      <button type="button" className={styles.trigger} aria-keyshortcuts="Control+K ?" onClick={open}>
+      <button
+        type="button"
+        className={`${buttons.quiet} ${styles.trigger}`}
+        aria-keyshortcuts="Control+K ?"
+        onClick={open}
+      >
         Commands <kbd>Ctrl K</kbd>
       </button>
       <dialog

@@ -1,5 +1,6 @@
 import { ChevronDown, ChevronUp } from 'lucide-react';
 import type { Answer } from '@/components/hooks/answer';
+import { CommandPalette } from '@/components/panels/command-palette';
 import buttons from '@/components/ui/button.module.css';
 import { failuresOf } from '@/lib/report/failures';
 import { percent, unitText } from '@/lib/report/numbers';
@@ -36,6 +37,7 @@ export function AnswerHead({ answer, strip, isTable, onTable }: Props) {
         </>
       )}
       <span className={styles.end}>
+        <CommandPalette />
         {!strip.collapsed && (
           <button
             type="button"
@@ -91,9 +93,9 @@ function OneLine({ answer: { result, of } }: { answer: Answer }) {
   });
   return (
     <p className={styles.line}>
-      {figures.map(({ label, figure, interval }, k) => (
+      {figures.map(({ label, bound, figure, interval }, k) => (
         <span key={k}>
-          {label} <strong>{figure}</strong> ({interval}){' · '}
+          {label} {bound} <strong>{figure}</strong> ({interval}){' · '}
         </span>
       ))}
       {unitText('speed', units)} · {againstWords(result)}

@@ -3,7 +3,6 @@ import { useState } from 'react';
 import { useTakeOn } from '@/components/hooks/use-commands';
 import { useAnswer } from '@/components/hooks/use-answer';
 import type { Answer } from '@/components/hooks/answer';
-import { CommandPalette } from '@/components/panels/command-palette';
 import { failuresOf } from '@/lib/report/failures';
 import { AGAINST, Against } from './against';
 import { AnswerHead } from './answer-head';
@@ -43,13 +42,10 @@ export function AnswerPanel() {
           <Body answer={answer} isTable={isTable} />
         </div>
       )}
-      <div className={styles.foot}>
-        <p>
-          Decision aid for a qualified person; it does not replace a licensed engineer or qualified reconstructionist.
-          No conclusion about injury.
-        </p>
-        <CommandPalette />
-      </div>
+      <p className={styles.foot}>
+        Decision aid for a qualified person; it does not replace a licensed engineer or qualified reconstructionist. No
+        conclusion about injury.
+      </p>
       <Spoken answer={answer} />
     </div>
   );

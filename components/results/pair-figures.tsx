@@ -35,7 +35,7 @@ export function PairFigures({ result, of }: { result: Result; of: CaseFile }) {
                 <tr key={name}>
                   <th scope="row">{label}</th>
                   <td className={styles.figure}>
-                    {found.figure} {found.unit}
+                    {found.bound} {found.figure} {found.unit}
                   </td>
                   <td className={styles.interval}>{found.interval}</td>
                 </tr>

@@ -12,13 +12,13 @@ export const vehicleOf = (name: ResultName): VehicleId | null =>
 export const unitsShown = (casefile: CaseFile): UnitSystem => casefile.display?.units ?? 'metric';
 
 export interface Said {
-  /** «26.6», or «at most 12.3» where the interval reaches down to 0. */
+  /** Where the interval reaches down to 0 the figure is its upper end, and the interval says the median. */
+  bound?: 'at most';
+  /** «26.6». */
   figure: string;
   unit: string;
   /** «23.9 to 29.4». */
   interval: string;
-  /** Whether the figure is an upper bound; the interval then says the median. */
-  isBound?: boolean;
 }
 
 /** Median and interval of a result; null where it has none. */
@@ -30,14 +30,14 @@ export function said(result: Result, name: ResultName, units: UnitSystem): Said 
   const unit = unitText(dimension, units);
   if (band.low === band.high) return { figure: median, unit, interval: 'no spread' };
   if (dimension === 'speed' && reachesZero(band))
-    return { figure: `at most ${shortest[1]}`, unit, interval: `median ${median}`, isBound: true };
+    return { bound: 'at most', figure: shortest[1], unit, interval: `median ${median}` };
   return { figure: median, unit, interval: `${low} to ${high}` };
 }
 
 /** «26.6 km/h, 23.9 to 29.4», for reading out; a dash where there is none. */
 export function spokenResult(result: Result, name: ResultName, units: UnitSystem): string {
   const found = said(result, name, units);
-  return found ? `${found.figure} ${found.unit}, ${found.interval}` : NOTHING;
+  return found ? `${found.bound ?? ''} ${found.figure} ${found.unit}, ${found.interval}`.trim() : NOTHING;
 }
 
 export const intervalTitle = (result: Result): string => `${percent(result.coverage)} interval`;

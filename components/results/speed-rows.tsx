@@ -54,6 +54,7 @@ function Figures({ row, result, units }: { row: SpeedRow; result: Result; units:
       </th>
       <td>
         <span className={styles.median}>
+          {found.bound && <small>{found.bound} </small>}
           {found.figure} <small>{found.unit}</small>
         </span>
         <span className={styles.interval}>{found.interval}</span>

@@ -1,3 +1,4 @@
+import { readFile } from 'node:fs/promises';
 import { type Locator, type Page, expect } from '@playwright/test';
 
 type Place = readonly [x: number, y: number];
@@ -59,10 +60,9 @@ export class AnswerStrip {
   /** The result file, as the page saves it. */
   async save(): Promise<string> {
     const downloading = this.page.waitForEvent('download');
-    await this.page.getByRole('button', { name: /^Save result/ }).click();
-    const path = await (await downloading).path();
-    const { readFile } = await import('node:fs/promises');
-    return readFile(path, 'utf8');
+    await this.page.getByRole('button', { name: 'File', exact: true }).click();
+    await this.page.getByRole('button', { name: 'Save result…' }).click();
+    return readFile(await (await downloading).path(), 'utf8');
   }
 }
 

@@ -1,15 +1,17 @@
 'use client';
 import { useId, useRef } from 'react';
 import type { CaseFiles } from '@/components/hooks/use-case-files';
+import { useAnswer } from '@/components/hooks/use-answer';
 import { useSessionStore } from '@/components/hooks/use-session';
 import buttons from '@/components/ui/button.module.css';
-import type { CaseFile } from '@/lib/casefile/schema';
 import { FileButton } from './file-button';
+import { saveFile, saveResult } from './save-file';
 import styles from './file-menu.module.css';
 
-/** Everything about the case as a file: new, duplicate, open, save. */
+/** Everything about the case as a file: new, duplicate, open, save, and its result. */
 export function FileMenu({ files }: { files: CaseFiles }) {
   const session = useSessionStore();
+  const { result, stale } = useAnswer();
   const id = useId();
   const menu = useRef<HTMLDivElement>(null);
   const then = (act: () => void) => (): void => {
@@ -38,26 +40,15 @@ export function FileMenu({ files }: { files: CaseFiles }) {
         <button type="button" className={buttons.quiet} onClick={then(() => saveFile(session.getState().casefile))}>
           Save file…
         </button>
+        <button
+          type="button"
+          className={buttons.quiet}
+          disabled={result === null || stale}
+          onClick={then(() => result && saveResult(session.getState().casefile, result))}
+        >
+          Save result…
+        </button>
       </div>
     </>
   );
 }
-
-/** Hands the case to the browser as <title>.case.json. */
-export function saveFile(casefile: CaseFile): void {
-  const blob = new Blob([`${JSON.stringify(casefile, null, 2)}\n`], { type: 'application/json' });
-  const link = document.createElement('a');
-  link.href = URL.createObjectURL(blob);
-  link.download = `${fileName(casefile.title)}.case.json`;
-  link.click();
-  URL.revokeObjectURL(link.href);
-}
-
-/** A title as a file name on every system: no separators, no control characters, not empty. */
-const fileName = (title: string): string =>
-  title
-    .replace(/[\\/:*?"<>|\p{Cc}]+/gu, ' ')
-    .replace(/\s+/g, ' ')
-    .trim()
-    .replace(/^\.+|\.+$/g, '')
-    .slice(0, 80) || 'case';

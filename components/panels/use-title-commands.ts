@@ -2,7 +2,7 @@ import type { Saving } from '@/components/hooks/use-autosave';
 import type { CaseFiles } from '@/components/hooks/use-case-files';
 import { useTakeOn } from '@/components/hooks/use-commands';
 import { useSessionStore } from '@/components/hooks/use-session';
-import { saveFile } from './file-menu';
+import { saveFile } from './save-file';
 
 /** What the title bar offers, by command. */
 export function useTitleCommands(id: string, saving: Saving, files: CaseFiles): void {

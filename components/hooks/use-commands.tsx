@@ -34,10 +34,10 @@ export function CommandsProvider({ children }: { children: ReactNode }) {
       if (taken.current.get(id) === handler) taken.current.delete(id);
     };
   }, []);
-  const list = useCallback(
-    () => commandsOf(session.getState().casefile).filter(({ id, does }) => does.do !== 'ask' || taken.current.has(id)),
-    [session],
-  );
+  const list = useCallback(() => {
+    const { casefile, selection } = session.getState();
+    return commandsOf(casefile, selection).filter(({ id, does }) => does.do !== 'ask' || taken.current.has(id));
+  }, [session]);
   const run = useCallback(
     ({ id, does }: Command): void => {
       const { use, undo, redo, edit, select } = session.getState();
@@ -50,6 +50,9 @@ export function CommandsProvider({ children }: { children: ReactNode }) {
           return redo();
         case 'edit':
           return void edit(does.label, does.edit);
+        case 'delete':
+          edit(does.label, does.edit);
+          return select(null);
         case 'select':
           return select(does.thing);
         case 'row':

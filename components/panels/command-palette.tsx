@@ -121,7 +121,12 @@ function Finder({ commands, onDone }: { commands: readonly Command[]; onDone: ()
         ))}
       </div>
       {found.length === 0 && <p className={styles.none}>Nothing is called so.</p>}
-      <p className={styles.foot}>↑ ↓ choose · Enter does it · Esc closes · the list opens with Ctrl K or ?</p>
+      <p className={styles.foot}>
+        ↑ ↓ choose · Enter does it · Esc closes · Ctrl K (on a Mac Cmd K) or ? opens this list.
+        <br />
+        On the board: arrows move what is selected, [ and ] turn it, with Shift ten times and with Alt a tenth as far;
+        Enter goes to its numbers; Esc steps back; + and − zoom.
+      </p>
     </div>
   );
 }

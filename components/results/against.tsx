@@ -36,7 +36,7 @@ export function Against({ result, of }: { result: Result; of: CaseFile }) {
   const isAnyImpossible = Object.values(result.impossible).some((count) => count > 0);
   return (
     <div className={styles.against} id={AGAINST} tabIndex={-1}>
-      <h3>What speaks against it</h3>
+      <h3>What speaks against it{speaking.length > 0 && <small>: {againstWords(result)}</small>}</h3>
       {speaking.length === 0 && <p>No screening test was triggered; this is not validation.</p>}
       <ul className={styles.list}>
         {speaking.map((check) => (

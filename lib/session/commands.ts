@@ -1,7 +1,7 @@
 import type { Edit } from '@/lib/casefile/edit';
 import { type ThingId, fieldsOf, labelOf } from '@/lib/casefile/fields';
 import { type CaseFile, type Method, VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
-import { duplication } from './thing-edits';
+import { type NamedEdit, deletion, duplication } from './thing-edits';
 import { nameOf } from './thing-names';
 import { TOOL_OF } from './tools/all';
 import { TOOLS, type ToolId } from './tools/tool';
@@ -25,6 +25,8 @@ export type Doing =
   | { do: 'undo' }
   | { do: 'redo' }
   | { do: 'edit'; label: string; edit: Edit }
+  /** As edit, of what is selected, which is then selected no more. */
+  | { do: 'delete'; label: string; edit: Edit }
   | { do: 'select'; thing: ThingId }
   | { do: 'row'; path: string }
   | { do: 'ask' };
@@ -50,11 +52,12 @@ const ASKED: readonly Command[] = [
   ask('view.fold', 'View', 'Fold or unfold the answer'),
 ];
 
-/** All commands that make sense for the case as it stands. */
-export const commandsOf = (casefile: CaseFile): Command[] => [
+/** All commands that make sense for the case as it stands, and for what is selected. */
+export const commandsOf = (casefile: CaseFile, selection: ThingId | null = null): Command[] => [
   ...TOOLS.map((tool) => toolCommand(tool)),
   { id: 'undo', title: 'Undo', group: 'Case', key: 'Ctrl Z', does: { do: 'undo' } },
   { id: 'redo', title: 'Redo', group: 'Case', key: 'Ctrl Shift Z', does: { do: 'redo' } },
+  ...(selection ? selectionCommands(casefile, selection) : []),
   ...ASKED,
   ...analysisCommands(casefile),
   ...selectCommands(casefile),
@@ -112,6 +115,20 @@ function selectCommands(casefile: CaseFile): Command[] {
     does: { do: 'select', thing },
   }));
 }
+
+/** What can be done with the selected thing. */
+function selectionCommands(casefile: CaseFile, selection: ThingId): Command[] {
+  const command = (found: NamedEdit | null, key: string, verb: 'delete' | 'edit'): Command[] =>
+    found
+      ? [{ id: `selected.${verb}`, title: capital(found.label), group: 'Case', key, does: { do: verb, ...found } }]
+      : [];
+  return [
+    ...command(duplication(casefile, selection), 'Ctrl D', 'edit'),
+    ...command(deletion(casefile, selection), 'Delete', 'delete'),
+  ];
+}
+
+const capital = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);
 
 /** A further leg where there is travel; where there is none, the place to enter it. */
 function travelCommand(casefile: CaseFile, id: VehicleId): Command {

@@ -60,6 +60,26 @@ test('switching the units keeps the paper', () => {
   expect(edited.ok && edited.casefile.display).toEqual({ units: 'us', paper: 'Letter' });
 });
 
+describe('what can be done with the selected thing', () => {
+  const casefile = example('junction');
+  const verbs = (thing: Parameters<typeof commandsOf>[1]): string[] =>
+    titles(commandsOf(casefile, thing).filter(({ id }) => id.startsWith('selected.')));
+
+  test('depends on the thing', () => {
+    expect(verbs(null)).toEqual([]);
+    expect(verbs('vehicle.A')).toEqual([]);
+    expect(verbs('leg.B.1')).toEqual(['Duplicate leg 2 of B', 'Delete leg 2 of B']);
+    expect(verbs('approach.A')).toEqual(['Delete the approach of A']);
+  });
+
+  test('deleting is an edit that is accepted', () => {
+    const command = commandsOf(casefile, 'leg.B.1').find(({ id }) => id === 'selected.delete');
+    if (command?.does.do !== 'delete') throw new Error('no such command');
+    const edited = applyEdit(casefile, command.does.edit);
+    expect(edited.ok && edited.casefile.departure.B).toMatchObject({ legs: [{}] });
+  });
+});
+
 describe('finding a command', () => {
   const commands = commandsOf(example('junction'));
 

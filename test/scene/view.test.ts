@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
+import type { Vec } from '@/lib/geometry/vector';
 import { gridOf, roundStep, scaleBar } from '@/lib/scene/grid';
-import { type View, fit, panBy, toScreen, toWorld, zoomAbout } from '@/lib/scene/view';
+import { type View, fit, panBy, pinch, toScreen, toWorld, zoomAbout } from '@/lib/scene/view';
 
 const pixel = fc.double({ min: -2000, max: 2000, noNaN: true });
 const views = fc.record<View>({ scale: fc.double({ min: 2, max: 600, noNaN: true }), originX: pixel, originY: pixel });
@@ -39,6 +40,26 @@ describe('the view', () => {
         const [x0, y1] = toScreen(view, [left, bottom]);
         const [x1, y0] = toScreen(view, [left + w, bottom + h]);
         return x0 >= 50 - 1e-6 && y0 >= 50 - 1e-6 && x1 <= 950 + 1e-6 && y1 <= 650 + 1e-6;
+      }),
+      seeded,
+    );
+  });
+
+  test('two fingers keep what lies under their middle, and the distance between them', () => {
+    const finger = fc.tuple(fc.double({ min: 0, max: 900, noNaN: true }), fc.double({ min: 0, max: 600, noNaN: true }));
+    fc.assert(
+      fc.property(finger, finger, finger, finger, (a, b, c, d) => {
+        const apart = (p: Vec, q: Vec): number => Math.hypot(p[0] - q[0], p[1] - q[1]);
+        fc.pre(apart(a, b) > 20 && apart(c, d) > 20);
+        const view = { scale: 40, originX: 450, originY: 300 };
+        const pinched = pinch(view, [a, b], [c, d]);
+        const middle = (p: Vec, q: Vec): Vec => [(p[0] + q[0]) / 2, (p[1] + q[1]) / 2];
+        const [before, after] = [toWorld(view, middle(a, b)), toWorld(pinched, middle(c, d))];
+        const isLimited = pinched.scale === 2 || pinched.scale === 600;
+        return (
+          apart(before, after) < 1e-6 &&
+          (isLimited || Math.abs(apart(a, b) / view.scale - apart(c, d) / pinched.scale) < 1e-6)
+        );
       }),
       seeded,
     );

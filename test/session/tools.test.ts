@@ -52,6 +52,24 @@ describe('select', () => {
     expect(after.impact.A.y.value).toBe(1);
     expect(after.impact.A.x.source).toBe('drawn on the board');
   });
+  test('a press that hardly moves changes nothing', () => {
+    const { acts, after } = play(fresh, 'select', [
+      ['down', [-2.2, 0.3]],
+      ['move', [-2.18, 0.33]],
+      ['up', [-2.18, 0.33]],
+    ]);
+    expect(kinds(acts)).toEqual(['select', 'begin', 'commit']);
+    expect(after).toBe(fresh);
+  });
+  test('a handle taken off its centre does not jump', () => {
+    const [x, y] = planeHandle(sceneOf(fresh));
+    const { after } = play(fresh, 'select', [
+      ['down', [x + 0.1, y]],
+      ['move', [x + 0.1, y + 0.5]],
+      ['up', [x + 0.1, y + 0.5]],
+    ]);
+    expect(after.impact.plane.value).toBe(90);
+  });
   test('the handle ahead of the nose turns', () => {
     const handle = turnHandle(sceneOf(fresh), 'A');
     const { after } = play(fresh, 'select', [
@@ -112,6 +130,23 @@ describe('drawing', () => {
     if (departure?.kind !== 'legs') throw new Error('no legs');
     expect(departure.direction.value).toBeCloseTo(53.1, 9);
     expect(departure.legs.map((leg) => leg.distance.value)).toEqual([5]);
+  });
+  test('travel with Shift adds a leg along the path', () => {
+    const first = play(fresh, 'travel', [
+      ['down', [2.2, 0]],
+      ['move', [6.2, 0]],
+      ['up', [6.2, 0]],
+    ]).after;
+    const { after } = play(first, 'travel', [
+      ['down', [2.2, 0], true],
+      ['move', [8.7, 0.4], true],
+      ['up', [8.7, 0.4], true],
+    ]);
+    const departure = after.departure.B;
+    if (departure?.kind !== 'legs') throw new Error('no legs');
+    expect(departure.direction.value).toBe(0);
+    expect(departure.legs.map((leg) => leg.distance.value)).toEqual([4, 2.5]);
+    expect(departure.legs[1].friction).toEqual(departure.legs[0].friction);
   });
   test('a slip of the hand draws nothing', () => {
     const { after, acts } = play(fresh, 'travel', [

@@ -73,7 +73,7 @@ function CheckItem({ check, of }: { check: Check; of: CaseFile }) {
           <details>
             <summary>Limit</summary>
             <p>
-              {CHECK_TITLES[check.id] ?? check.id}. {check.source}.
+              {CHECK_TITLES[check.id] ?? check.id}. Where the limit comes from: {check.source}.
             </p>
           </details>
         </div>

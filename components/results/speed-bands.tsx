@@ -13,7 +13,7 @@ import styles from './speed-bands.module.css';
 export const AXIS = 20;
 const MARGIN = 10;
 /** Between two ticks, px. */
-const TICK = 52;
+const TICK = 36;
 
 interface Placed {
   x: (si: number) => number;

@@ -37,7 +37,7 @@ export function SpeedRows({ result, shapes, of }: { result: Result; shapes: Shap
         label={`Densities of the speeds on one axis in ${unitText('speed', units)}; the figures are in the table beside it.`}
       />
       <p className={styles.key}>
-        {unitText('speed', units)} · tick: median · bar: {percent(result.coverage)} interval · outline: the draws
+        {unitText('speed', units)} · tick median · bar {percent(result.coverage)} interval · outline draws
       </p>
     </div>
   );

@@ -67,7 +67,7 @@ test('a case drawn from nothing with the keyboard alone reaches a printed report
   await press('Shift+ArrowLeft');
   await press('ArrowLeft', 3);
   await press('Shift+ArrowDown');
-  await press('}', 10); // from 180° by ten degrees each to 80°
+  await press('Shift+BracketRight', 10); // from 180° by ten degrees each to 80°
   await tabTo(page, /^Add the approach of A/);
   await press('Enter');
   await tabTo(page, /^Add the approach of B/);
@@ -75,10 +75,10 @@ test('a case drawn from nothing with the keyboard alone reaches a printed report
   await tabTo(page, /^Add the travel of A/);
   await press('Enter');
   await press('Shift+ArrowLeft', 3); // from 5 m to 2 m
-  await press('{'); // from 0° to 10°
+  await press('Shift+BracketLeft'); // from 0° to 10°
   await tabTo(page, /^Add the travel of B/);
   await press('Enter');
-  await press('}', 5); // from 80° to 30°
+  await press('Shift+BracketRight', 5); // from 80° to 30°
 
   await answer.settled();
   await open.saved();

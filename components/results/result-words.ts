@@ -1,5 +1,5 @@
 import type { CaseFile, VehicleId } from '@/lib/casefile/schema';
-import { NOTHING, percent, printedBand, reachesZero, unitText } from '@/lib/report/numbers';
+import { NOTHING, printedBand, reachesZero, unitText } from '@/lib/report/numbers';
 import { type ResultName, resultDimension } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
 import type { UnitSystem } from '@/lib/units/dimension';
@@ -39,5 +39,3 @@ export function spokenResult(result: Result, name: ResultName, units: UnitSystem
   const found = said(result, name, units);
   return found ? `${found.bound ?? ''} ${found.figure} ${found.unit}, ${found.interval}`.trim() : NOTHING;
 }
-
-export const intervalTitle = (result: Result): string => `${percent(result.coverage)} interval`;

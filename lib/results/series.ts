@@ -32,7 +32,7 @@ export function densityOf({ low, high, counts }: Shape): DensityPoint[] {
   let heights = counts.map((count) => count / (total * width));
   for (let pass = 0; pass < PASSES; pass++) heights = smoothed(heights);
   const middle = heights.map((y, k) => ({ x: low + (k + 0.5) * width, y }));
-  // A full bin at the end (speeds cut off at 0) falls straight down there; half its own bin belongs outside the middles.
+  // Out to the ends at the height of the outermost bin: only so is all of its area kept.
   const ends = [
     { x: low, y: heights[0] },
     { x: high, y: heights[heights.length - 1] },

@@ -2,11 +2,9 @@
 import { useMemo, useRef, useState } from 'react';
 import { Stage } from 'react-konva/lib/ReactKonvaCore';
 import './shapes';
-import { useAnswer } from '@/components/hooks/use-answer';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
 import { sceneOf } from '@/lib/casefile/scene-of';
 import { METRES_PER } from '@/lib/scene/grid';
-import type { Speeds } from '@/lib/scene/scene';
 import type { Dimension } from '@/lib/units/dimension';
 import { formatWithUnit } from '@/lib/units/format';
 import styles from './board.module.css';
@@ -22,6 +20,7 @@ import { ThingStrip } from './thing-strip';
 import { Toolbar } from './toolbar';
 import { useBoardKeys } from './use-board-keys';
 import { useSheetKeys } from './use-sheet-keys';
+import { useSpeeds } from './use-speeds';
 import { useTool } from './use-tool';
 import { useView } from './use-view';
 
@@ -35,7 +34,8 @@ export function Board() {
   const tool = useSession((s) => s.tool);
   const [said, say] = useState<string | null>(null);
   const theme = useTheme();
-  const speeds = useSpeeds();
+  const units = casefile.display?.units ?? 'metric';
+  const { speeds, words } = useSpeeds(units);
   const scene = useMemo(() => sceneOf(casefile), [casefile]);
   const { size, view, setView, touch, fitAll, zoom } = useView(frame, scene);
   const { hovered, measured, panning, cancel, handlers } = useTool({ frame, view, setView, speeds });
@@ -50,11 +50,10 @@ export function Board() {
   const keys = useBoardKeys({ cancel, say, openNumbers });
   useSheetKeys({ fitAll, zoom });
 
-  const units = casefile.display?.units ?? 'metric';
   const shown = useMemo((): Shown => {
     const as = (dimension: Dimension, decimals: number) => (value: number) =>
       formatWithUnit(value, dimension, units, { decimals });
-    return { length: as('length', 2), speed: as('speed', 1), angle: as('angle', 1) };
+    return { length: as('length', 2), angle: as('angle', 1) };
   }, [units]);
   const drawn = { scene, view, theme, speeds, selection, shown };
 
@@ -82,7 +81,7 @@ export function Board() {
         {size.width > 0 && (
           <Stage width={size.width} height={size.height} listening={false}>
             <GridLayer view={view} size={size} unit={METRES_PER[units]} theme={theme} />
-            <SceneLayer {...drawn} />
+            <SceneLayer {...drawn} speedWords={words} />
             <OverlayLayer {...drawn} hovered={hovered} measured={measured} />
           </Stage>
         )}
@@ -96,12 +95,4 @@ export function Board() {
       <ThingStrip />
     </div>
   );
-}
-
-/** Approach speeds of the newest answer, m/s: the medians, as the answer states them. */
-function useSpeeds(): Speeds {
-  const { result } = useAnswer();
-  const A = result?.bands['A.approachSpeed']?.median;
-  const B = result?.bands['B.approachSpeed']?.median;
-  return useMemo(() => ({ ...(A === undefined ? {} : { A }), ...(B === undefined ? {} : { B }) }), [A, B]);
 }

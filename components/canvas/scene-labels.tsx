@@ -4,11 +4,11 @@ import { type Scene, type Speeds, type Which, approachTail } from '@/lib/scene/s
 import { type View, toScreen } from '@/lib/scene/view';
 import { BoardLabel } from './board-label';
 import type { Theme } from './theme';
+import type { SpeedsShown } from './use-speeds';
 
 /** How numbers are shown, with their unit. */
 export interface Shown {
   length: (metres: number) => string;
-  speed: (metresPerSecond: number) => string;
   angle: (degrees: number) => string;
 }
 
@@ -18,6 +18,7 @@ interface Props {
   view: View;
   theme: Theme;
   speeds: Speeds;
+  speedWords: SpeedsShown['words'];
   shown: Shown;
 }
 
@@ -27,11 +28,11 @@ const OFF = { rest: [38, 13], leg: 20, speed: [46, 18] } as const;
 const SHORT = 36;
 
 /** The letter of a vehicle, its computed speed, the lengths of its legs, and where it came to rest. */
-export function SceneLabels({ scene, which, view, theme, speeds, shown }: Props) {
+export function SceneLabels({ scene, which, view, theme, speeds, speedWords, shown }: Props) {
   const screen = (at: Vec): Vec => toScreen(view, at);
   const rest = restLabelAt(scene, which, [OFF.rest[0] / view.scale, OFF.rest[1] / view.scale]);
-  const speed = speeds[which];
-  const tail = approachTail(scene, which, speed);
+  const speed = speedWords[which];
+  const tail = approachTail(scene, which, speeds[which]);
   return (
     <>
       <BoardLabel
@@ -43,10 +44,10 @@ export function SceneLabels({ scene, which, view, theme, speeds, shown }: Props)
         strong
       />
       {rest && <BoardLabel at={screen(rest)} text={`${which} at rest`} theme={theme} colour={theme[which]} />}
-      {tail && speed !== undefined && (
+      {tail && speed && (
         <BoardLabel
           at={besideTail(screen(tail), screen(scene.point.at))}
-          text={shown.speed(speed)}
+          text={speed}
           theme={theme}
           colour={theme.inkSoft}
         />

@@ -9,6 +9,7 @@ import { flat } from './ink';
 import { Approach, Fans, Ghosts, Travel } from './motion-shapes';
 import { SceneLabels, type Shown } from './scene-labels';
 import type { Theme } from './theme';
+import type { SpeedsShown } from './use-speeds';
 import { VehicleShape } from './vehicle-shape';
 
 interface Props {
@@ -17,6 +18,7 @@ interface Props {
   theme: Theme;
   selection: ThingId | null;
   speeds: Speeds;
+  speedWords: SpeedsShown['words'];
   shown: Shown;
 }
 
@@ -26,7 +28,15 @@ const isTravel = (selection: ThingId | null, which: Which): boolean =>
   selection === `departure.${which}` || (selection?.startsWith(`leg.${which}.`) ?? false);
 
 /** The collision itself, drawn in world metres. What is known is solid; what follows from it is dashed and lighter. */
-export const SceneLayer = memo(function SceneLayer({ scene, view, theme, selection, speeds, shown }: Props) {
+export const SceneLayer = memo(function SceneLayer({
+  scene,
+  view,
+  theme,
+  selection,
+  speeds,
+  speedWords,
+  shown,
+}: Props) {
   const each = (which: Which) => ({ scene, which, theme, zoom: view.scale, speeds });
   return (
     <Layer listening={false}>
@@ -70,7 +80,16 @@ export const SceneLayer = memo(function SceneLayer({ scene, view, theme, selecti
         />
       ))}
       {BOTH.map((which) => (
-        <SceneLabels key={which} scene={scene} which={which} view={view} theme={theme} speeds={speeds} shown={shown} />
+        <SceneLabels
+          key={which}
+          scene={scene}
+          which={which}
+          view={view}
+          theme={theme}
+          speeds={speeds}
+          speedWords={speedWords}
+          shown={shown}
+        />
       ))}
     </Layer>
   );

@@ -1,5 +1,118 @@
 'use client';
+import { useEffect, useMemo, useRef, useState } from 'react';
+import { useAnswer } from '@/components/hooks/use-answer';
+import { useSession } from '@/components/hooks/use-session';
+import { type Field, type GroupId, GROUPS, fieldsOf } from '@/lib/casefile/fields';
+import type { CaseFile } from '@/lib/casefile/schema';
+import { HEADLINES, type ResultName, resultLabel } from '@/lib/results/names';
+import type { Result } from '@/lib/results/result';
+import { LedgerRow } from './ledger-row';
+import { LedgerSeats } from './ledger-seats';
+import { LedgerSettings } from './ledger-settings';
+import { LedgerTravel } from './ledger-travel';
+import styles from './ledger.module.css';
 
+/** What is known: every value of the case as a row, grouped, with its share in the spread of a chosen result. */
 export function Ledger() {
+  const casefile = useSession((s) => s.casefile);
+  const { result, issues } = useAnswer();
+  const [traced, setTraced] = useState<ResultName>('A.approachSpeed');
+  const units = casefile.display?.units ?? 'metric';
+  const fields = useFields(casefile);
+  const marks = useMemo(() => marksOf(result, issues), [result, issues]);
+  const shares = result?.sensitivity[traced];
+  const frame = useFollowedSelection();
+
+  return (
+    <div ref={frame} className={styles.ledger}>
+      <div className={styles.head}>
+        <h2>Ledger</h2>
+        <label>
+          <span>spread of</span>
+          <select
+            aria-label="Result whose spread is traced"
+            value={traced}
+            onChange={(event) => setTraced(event.target.value as ResultName)}
+          >
+            {HEADLINES.map((name) => (
+              <option key={name} value={name}>
+                {resultLabel(name)}
+              </option>
+            ))}
+          </select>
+        </label>
+      </div>
+      {GROUPS.map(({ id, title }) => (
+        <details key={id} open className={styles.group}>
+          <summary>
+            <h3>{title}</h3>
+          </summary>
+          {fields
+            .filter((field) => field.group === id)
+            .map((field) => (
+              <LedgerRow
+                key={field.path}
+                field={field}
+                units={units}
+                share={shares?.[field.path]?.total ?? null}
+                mark={marks.get(field.path) ?? null}
+              />
+            ))}
+          <GroupTools id={id} units={units} />
+        </details>
+      ))}
+      <details open className={styles.group}>
+        <summary>
+          <h3>How it is solved and shown</h3>
+        </summary>
+        <LedgerSettings />
+      </details>
+    </div>
+  );
+}
+
+function GroupTools({ id, units }: { id: GroupId; units: 'metric' | 'us' }) {
+  if (id === 'A' || id === 'B') return <LedgerSeats id={id} units={units} />;
+  if (id === 'after.A') return <LedgerTravel id="A" />;
+  if (id === 'after.B') return <LedgerTravel id="B" />;
   return null;
+}
+
+/** The rows stay the same objects while only values change, so that only changed rows are drawn anew. */
+function useFields(casefile: CaseFile): Field[] {
+  const kept = useRef(new Map<string, Field>());
+  return useMemo(
+    () =>
+      fieldsOf(casefile).map((field) => {
+        const before = kept.current.get(field.path);
+        if (before && before.thing === field.thing && before.label === field.label) return before;
+        kept.current.set(field.path, field);
+        return field;
+      }),
+    [casefile],
+  );
+}
+
+/** Why each path is pointed at: by the method, or by a check that speaks up. */
+function marksOf(result: Result | null, issues: readonly { path: string; says: string }[]): Map<string, string> {
+  const marks = new Map<string, string>();
+  for (const check of result?.checks ?? [])
+    if (check.level === 'caution' || check.level === 'fail')
+      for (const path of check.paths) if (!marks.has(path)) marks.set(path, check.says);
+  for (const { path, says } of issues) marks.set(path.replace(/\.(value|spread.*)$/, ''), says);
+  return marks;
+}
+
+/** Scrolls the rows of what was selected elsewhere into view. */
+function useFollowedSelection() {
+  const frame = useRef<HTMLDivElement>(null);
+  const selection = useSession((s) => s.selection);
+  useEffect(() => {
+    const element = frame.current;
+    if (!selection || !element || element.contains(document.activeElement)) return;
+    const row = element.querySelector(`[data-thing="${selection}"]`);
+    row?.closest('details')?.setAttribute('open', '');
+    row?.scrollIntoView({ block: 'nearest' });
+  }, [selection]);
+  return frame;
 }

@@ -1,5 +1,5 @@
 import { type Vec, toRadians } from '@/lib/geometry/vector';
-import type { Scene, SceneDirection, SceneTravel, SceneVehicle, Which } from '@/lib/scene/scene';
+import type { Scene, SceneDirection, ScenePose, SceneTravel, SceneVehicle, Which } from '@/lib/scene/scene';
 import type { CaseFile, Quantity } from './schema';
 
 /** Standard uncertainty that a quantity states, in its own unit. */
@@ -33,6 +33,13 @@ function travelOf({ departure }: CaseFile, which: Which): SceneTravel | null {
   return { direction: direction(stated.direction), legs: stated.legs.map(({ distance }) => distance.value) };
 }
 
+function restOf({ departure }: CaseFile, which: Which): ScenePose | null {
+  const stated = departure[which];
+  if (stated?.kind !== 'spin') return null;
+  const { x, y, heading } = stated.rest;
+  return x && y && heading ? { x: x.value, y: y.value, heading: toRadians(heading.value) } : null;
+}
+
 /** The angle of the normal from A into B. */
 function normalOf(plane: number, a: SceneVehicle, b: SceneVehicle): number {
   const normal: Vec = [Math.sin(plane), -Math.cos(plane)];
@@ -58,6 +65,7 @@ export function sceneOf(casefile: CaseFile): Scene {
       return stated ? direction(stated) : null;
     }),
     travel: each((which) => travelOf(casefile, which)),
+    rest: each((which) => restOf(casefile, which)),
     marks: (scene?.marks ?? []).map(({ label, points }) => ({ label, points: points.map(([x, y]): Vec => [x, y]) })),
     north: toRadians(scene?.north ?? 90),
   };

@@ -47,6 +47,8 @@ export interface Scene {
   plane: { angle: number; fan: number; normal: number };
   approach: Record<Which, SceneDirection | null>;
   travel: Record<Which, SceneTravel | null>;
+  /** Where a vehicle is known to have come to rest, when its travel is not given by legs. */
+  rest: Record<Which, ScenePose | null>;
   marks: { label: string; points: Vec[] }[];
   north: number;
 }
@@ -80,9 +82,9 @@ export function pathOf(scene: Scene, which: Which): Vec[] {
   return [start, ...travel.legs.map((leg) => add(start, scale(unit(travel.direction.angle), (done += leg))))];
 }
 
-/** The pose at the end of the travel, drawn with the heading at contact: legs say how far, not how it turned. */
+/** The pose at rest: as known, or the end of the legs with the heading at contact, since legs say how far, not how it turned. */
 export function restPose(scene: Scene, which: Which): ScenePose | null {
-  if (!scene.travel[which]) return null;
+  if (!scene.travel[which]) return scene.rest[which];
   const [x, y] = pathOf(scene, which).at(-1) as Vec;
   return { x, y, heading: scene.vehicles[which].pose.heading };
 }

@@ -12,8 +12,8 @@ export default function ErrorPage({ error, reset }: { error: Error & { digest?: 
     <main className={styles.message}>
       <h1>This page broke</h1>
       <p>
-        That is a mistake in the program, not in your case. What you had entered is saved, or kept in this browser and put
-        back when the case is opened again.
+        That is a mistake in the program, not in your case. What you had entered is saved, or kept in this browser and
+        put back when the case is opened again.
       </p>
       {error.digest && <p className={styles.detail}>The server&rsquo;s log has it under {error.digest}.</p>}
       <p className={styles.actions}>

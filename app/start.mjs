@@ -18,7 +18,15 @@ const data = resolve(root, process.env.DATA_DIR || 'data');
 const environment = { ...process.env, NEXT_TELEMETRY_DISABLED: '1', DATA_DIR: data, NODE_ENV: 'production' };
 
 /** What the build is made of. */
-const SOURCES = ['app', 'components', 'lib', 'proxy.ts', 'instrumentation-client.ts', 'next.config.js', 'package-lock.json'];
+const SOURCES = [
+  'app',
+  'components',
+  'lib',
+  'proxy.ts',
+  'instrumentation-client.ts',
+  'next.config.js',
+  'package-lock.json',
+];
 const LOOPBACK = ['127.0.0.1', 'localhost', '::1'];
 
 const say = (text) => process.stdout.write(`${text}\n`);
@@ -48,9 +56,12 @@ function checkDependencies() {
 }
 
 function checkSettings() {
-  if (!Number.isInteger(port) || port < 1 || port > 65535) stop(`PORT must be a number from 1 to 65535; it is ${process.env.PORT}`);
+  if (!Number.isInteger(port) || port < 1 || port > 65535)
+    stop(`PORT must be a number from 1 to 65535; it is ${process.env.PORT}`);
   if (process.env.DATABASE_URL)
-    stop('DATABASE_URL is set, but this version keeps its cases only in the folder DATA_DIR. Unset DATABASE_URL to start.');
+    stop(
+      'DATABASE_URL is set, but this version keeps its cases only in the folder DATA_DIR. Unset DATABASE_URL to start.',
+    );
 }
 
 /** Whether the port can be had, and if not, why. */
@@ -65,7 +76,9 @@ function portTrouble() {
 async function checkPort() {
   const trouble = await portTrouble();
   if (trouble?.code === 'EADDRINUSE')
-    stop(`Port ${port} on ${host} is taken: is Retrodict running already? Stop that, or choose another port: PORT=4311 npm start`);
+    stop(
+      `Port ${port} on ${host} is taken: is Retrodict running already? Stop that, or choose another port: PORT=4311 npm start`,
+    );
   if (trouble) stop(`Cannot listen on ${host}, port ${port}: ${trouble.message}`);
 }
 
@@ -89,7 +102,11 @@ function build() {
   if (!why) return say('The build is up to date.');
   say(`${why}: building, which takes up to a minute …`);
   const began = performance.now();
-  const { status, stdout, stderr } = spawnSync(process.execPath, [next, 'build'], { cwd: root, env: environment, encoding: 'utf8' });
+  const { status, stdout, stderr } = spawnSync(process.execPath, [next, 'build'], {
+    cwd: root,
+    env: environment,
+    encoding: 'utf8',
+  });
   if (status !== 0) stop(`${stdout}${stderr}\nThe build failed; what it said stands above.`);
   say(`Built in ${((performance.now() - began) / 1000).toFixed(0)} s.`);
 }

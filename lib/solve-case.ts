@@ -14,7 +14,7 @@ import { here, runOn } from '@/lib/solve/lanes';
 import { solve } from '@/lib/solve/solve';
 import type { RunTasks } from '@/lib/solve/task';
 
-export type { Shape, Shapes } from '@/lib/results/bands';
+export type { Shapes } from '@/lib/results/bands';
 
 /** Which of the case's settings to override, and how to run. */
 export interface SolveOptions {

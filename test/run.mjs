@@ -45,7 +45,9 @@ function step(title, ...commands) {
 /** A step that counts its tests in a report; a runner that fails without a failed test counts as one. */
 function tests(title, report, count, ...commands) {
   const ok = run(title, ...commands);
-  const counted = existsSync(report) ? count(JSON.parse(readFileSync(report, 'utf8'))) : { passed: 0, failed: 0, skipped: 0 };
+  const counted = existsSync(report)
+    ? count(JSON.parse(readFileSync(report, 'utf8')))
+    : { passed: 0, failed: 0, skipped: 0 };
   for (const key of Object.keys(total)) total[key] += counted[key];
   if (counted.failed > 0) failures.push(`${title}: ${counted.failed} failed`);
   else if (!ok) fail(title);
@@ -57,7 +59,11 @@ const countUnit = (report) => ({
   failed: report.numFailedTests,
   skipped: report.numPendingTests + report.numTodoTests,
 });
-const countBrowser = ({ stats }) => ({ passed: stats.expected, failed: stats.unexpected + stats.flaky, skipped: stats.skipped });
+const countBrowser = ({ stats }) => ({
+  passed: stats.expected,
+  failed: stats.unexpected + stats.flaky,
+  skipped: stats.skipped,
+});
 
 function checkReady() {
   const [major, minor] = process.versions.node.split('.').map(Number);

@@ -44,7 +44,15 @@ export function startAnswering(session: Session, pool: WorkerPool, show: (answer
 
   function settle(outcome: Outcome, of: CaseFile, status: 'live' | 'settled'): void {
     if (outcome.kind === 'solved')
-      update({ status, result: outcome.result, shapes: outcome.shapes, of, stale: of !== current(), issues: [], progress: null });
+      update({
+        status,
+        result: outcome.result,
+        shapes: outcome.shapes,
+        of,
+        stale: of !== current(),
+        issues: [],
+        progress: null,
+      });
     else {
       const issues = outcome.kind === 'invalid' ? outcome.issues : [outcome.reason];
       const nothing = { result: null, shapes: {}, of: null, stale: false, progress: null };

@@ -13,7 +13,10 @@ const PATIENCE = 15_000;
 
 export type Kept = { ok: true; id: string } | { ok: false; issues: readonly Issue[] };
 
-export const UNREACHABLE: Issue = { path: '(server)', says: 'cannot be reached; nothing was changed. Is it still running?' };
+export const UNREACHABLE: Issue = {
+  path: '(server)',
+  says: 'cannot be reached; nothing was changed. Is it still running?',
+};
 
 const casePath = (id: string): string => `/api/cases/${encodeURIComponent(id)}`;
 

@@ -16,7 +16,7 @@ import { LedgerSpread } from './ledger-spread';
 import styles from './ledger.module.css';
 
 /** What a screen reader and a test call the field of a row: unique in the ledger. */
-export const fieldName = (casefile: CaseFile, field: Field): string => labelOf(casefile, field.path);
+const fieldName = (casefile: CaseFile, field: Field): string => labelOf(casefile, field.path);
 
 export interface RowProps {
   field: Field;
@@ -28,7 +28,16 @@ export interface RowProps {
 }
 
 /** One value of the case: name, value with its spread, unit, source, and its share in the spread of the answer. */
-export const LedgerRow = memo(function LedgerRow({ field, units, share, mark }: RowProps) {
+export const LedgerRow = memo(Row, isSameRow);
+
+/** Rows are listed anew at every edit; what a row shows of the case it reads for itself. */
+function isSameRow(a: RowProps, b: RowProps): boolean {
+  const { path, label, thing } = a.field;
+  const same = path === b.field.path && label === b.field.label && thing === b.field.thing;
+  return same && a.units === b.units && a.share === b.share && a.mark === b.mark;
+}
+
+function Row({ field, units, share, mark }: RowProps) {
   const node = useSession((s) => nodeAt(s.casefile, field.path) ?? null);
   const name = useSession((s) => fieldName(s.casefile, field));
   const selected = useSession((s) => s.selection === field.thing);
@@ -63,7 +72,7 @@ export const LedgerRow = memo(function LedgerRow({ field, units, share, mark }: 
       {!quantity && mark && <p className={styles.marked}>{mark}</p>}
     </div>
   );
-});
+}
 
 /** In its group the name need not say the vehicle again. */
 const short = ({ label }: Field): string => {

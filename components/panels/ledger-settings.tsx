@@ -17,7 +17,7 @@ export function LedgerSettings() {
   const set = (path: string, to: unknown): string | null => edit(path, { do: 'set', path, to })[0]?.says ?? null;
   const shown = { units: display?.units ?? 'metric', paper: display?.paper ?? 'A4' };
   const number = (label: string, path: string, value: string, factor = 1) => (
-    <label>
+    <div className={styles.pair}>
       <span>{label}</span>
       <EntryField
         label={label}
@@ -29,11 +29,11 @@ export function LedgerSettings() {
           return Number.isFinite(figure) ? set(path, figure / factor) : `«${typed}» is not a number`;
         }}
       />
-    </label>
+    </div>
   );
   return (
     <div className={styles.settings}>
-      <label>
+      <label className={styles.pair}>
         <span>Method</span>
         <select
           aria-label="Method"
@@ -64,7 +64,7 @@ export function LedgerSettings() {
         String(Number((100 * (analysis.coverage ?? DEFAULT_COVERAGE)).toPrecision(6))),
         100,
       )}
-      <label>
+      <label className={styles.pair}>
         <span>Units</span>
         <select
           aria-label="Units"
@@ -75,7 +75,7 @@ export function LedgerSettings() {
           <option value="us">US customary: ft, lb, mph</option>
         </select>
       </label>
-      <label>
+      <label className={styles.pair}>
         <span>Paper</span>
         <select
           aria-label="Paper"

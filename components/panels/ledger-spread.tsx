@@ -48,7 +48,7 @@ export function LedgerSpread({
   const { symbol } = unitOf(dimension, units);
 
   const figure = (key: 'sd' | 'low' | 'high', label: string, value: number) => (
-    <label key={key}>
+    <div key={key} className={styles.pair}>
       <span>{label}</span>
       <EntryField
         label={`${label} of ${name}`}
@@ -57,15 +57,15 @@ export function LedgerSpread({
         onEnter={(typed) => {
           const entry = parseEntry(typed, dimension, units);
           if (!entry.ok) return entry.says;
-          return set({ ...quantity, spread: { ...spread, [key]: entry.value } as Spread });
+          return set({ ...quantity, spread: { ...spread, [key]: entry.value } });
         }}
       />
-    </label>
+    </div>
   );
 
   return (
     <div className={styles.spread}>
-      <label>
+      <label className={styles.pair}>
         <span>Shape</span>
         <select
           aria-label={`Shape of the spread of ${name}`}
@@ -86,7 +86,7 @@ export function LedgerSpread({
           {figure('high', 'Upper limit', spread.high)}
         </>
       )}
-      <label>
+      <div className={styles.pair}>
         <span>Source</span>
         <EntryField
           label={`Source of ${name}`}
@@ -94,7 +94,7 @@ export function LedgerSpread({
           wide
           onEnter={(source) => set({ ...quantity, source })}
         />
-      </label>
+      </div>
     </div>
   );
 }

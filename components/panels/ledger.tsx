@@ -2,8 +2,7 @@
 import { useEffect, useMemo, useRef, useState } from 'react';
 import { useAnswer } from '@/components/hooks/use-answer';
 import { useSession } from '@/components/hooks/use-session';
-import { type Field, type GroupId, GROUPS, fieldsOf } from '@/lib/casefile/fields';
-import type { CaseFile } from '@/lib/casefile/schema';
+import { type GroupId, GROUPS, fieldsOf } from '@/lib/casefile/fields';
 import { HEADLINES, type ResultName, resultLabel } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
 import { LedgerRow } from './ledger-row';
@@ -18,7 +17,7 @@ export function Ledger() {
   const { result, issues } = useAnswer();
   const [traced, setTraced] = useState<ResultName>('A.approachSpeed');
   const units = casefile.display?.units ?? 'metric';
-  const fields = useFields(casefile);
+  const fields = useMemo(() => fieldsOf(casefile), [casefile]);
   const marks = useMemo(() => marksOf(result, issues), [result, issues]);
   const shares = result?.sensitivity[traced];
   const frame = useFollowedSelection();
@@ -76,21 +75,6 @@ function GroupTools({ id, units }: { id: GroupId; units: 'metric' | 'us' }) {
   if (id === 'after.A') return <LedgerTravel id="A" />;
   if (id === 'after.B') return <LedgerTravel id="B" />;
   return null;
-}
-
-/** The rows stay the same objects while only values change, so that only changed rows are drawn anew. */
-function useFields(casefile: CaseFile): Field[] {
-  const kept = useRef(new Map<string, Field>());
-  return useMemo(
-    () =>
-      fieldsOf(casefile).map((field) => {
-        const before = kept.current.get(field.path);
-        if (before && before.thing === field.thing && before.label === field.label) return before;
-        kept.current.set(field.path, field);
-        return field;
-      }),
-    [casefile],
-  );
 }
 
 /** Why each path is pointed at: by the method, or by a check that speaks up. */

@@ -1,5 +1,5 @@
 'use client';
-import { type KeyboardEvent, useEffect, useId, useRef, useState } from 'react';
+import { type KeyboardEvent, useId, useState } from 'react';
 import styles from './entry-field.module.css';
 
 export interface EntryFieldProps {
@@ -17,6 +17,14 @@ export interface EntryFieldProps {
   wide?: boolean;
   /** Words about a mark that the field carries. */
   describedBy?: string;
+}
+
+/** What is typed and not in force yet. */
+interface Attempt {
+  typed: string;
+  /** The text in force when it was typed. */
+  against: string;
+  refused: string | null;
 }
 
 /** One step, ten with Shift, a tenth with Alt. */
@@ -40,38 +48,22 @@ export function EntryField({
   wide = false,
   describedBy,
 }: EntryFieldProps) {
-  const [draft, setDraft] = useState<string | null>(null);
-  const [refused, setRefused] = useState<string | null>(null);
-  const field = useRef<HTMLInputElement>(null);
+  const [attempt, setAttempt] = useState<Attempt | null>(null);
   const alertId = useId();
-
-  useEffect(() => {
-    if (document.activeElement !== field.current) {
-      setDraft(null);
-      setRefused(null);
-    }
-  }, [text]);
+  // What was typed against another text is out of date: the value has changed elsewhere.
+  const now = attempt?.against === text ? attempt : null;
+  const refused = now?.refused ?? null;
 
   const enter = (): void => {
-    if (draft === null || draft === text) {
-      setDraft(null);
-      setRefused(null);
-      return;
-    }
-    const why = onEnter(draft);
-    setRefused(why);
-    if (why === null) setDraft(null);
-  };
-  const restore = (): void => {
-    setDraft(null);
-    setRefused(null);
+    if (!now || now.typed === text) return setAttempt(null);
+    const why = onEnter(now.typed);
+    setAttempt(why === null ? null : { ...now, refused: why });
   };
 
   return (
     <span className={styles.field} data-wide={wide}>
       <span className={styles.box} data-refused={refused !== null}>
         <input
-          ref={field}
           id={id}
           type="text"
           autoComplete="off"
@@ -79,16 +71,16 @@ export function EntryField({
           aria-label={label}
           aria-invalid={refused !== null}
           aria-describedby={[refused === null ? null : alertId, describedBy].filter(Boolean).join(' ') || undefined}
-          value={draft ?? text}
+          value={now?.typed ?? text}
           onFocus={onFocus}
-          onChange={(event) => setDraft(event.target.value)}
+          onChange={(event) => setAttempt({ typed: event.target.value, against: text, refused: null })}
           onBlur={enter}
           onKeyDown={(event) => {
             if (event.key === 'Enter') enter();
-            else if (event.key === 'Escape' && (draft !== null || refused !== null)) {
+            else if (event.key === 'Escape' && now) {
               event.stopPropagation();
-              restore();
-            } else if (onStep && draft === null && (event.key === 'ArrowUp' || event.key === 'ArrowDown')) {
+              setAttempt(null);
+            } else if (onStep && !now && (event.key === 'ArrowUp' || event.key === 'ArrowDown')) {
               event.preventDefault();
               onStep(stepsOf(event));
             }

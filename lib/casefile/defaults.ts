@@ -1,4 +1,4 @@
-import type { CaseFile, Departure, Leg, Quantity, Vehicle, VehicleId } from './schema';
+import type { CaseFile, Departure, Leg, Quantity, Vehicle } from './schema';
 
 /** The source of a value that nobody has touched; shown and printed as such. */
 export const DEFAULT_SOURCE = 'default, not measured';
@@ -117,5 +117,3 @@ export function emptyCase(title = 'Untitled case'): CaseFile {
     analysis: { method: 'directions', draws: DEFAULT_DRAWS, seed: DEFAULT_SEED, coverage: DEFAULT_COVERAGE },
   };
 }
-
-export const otherVehicle = (id: VehicleId): VehicleId => (id === 'A' ? 'B' : 'A');

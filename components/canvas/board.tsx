@@ -20,7 +20,7 @@ import { ThingStrip } from './thing-strip';
 import { Toolbar } from './toolbar';
 import { useBoardKeys } from './use-board-keys';
 import { useSheetKeys } from './use-sheet-keys';
-import { useSpeeds } from './use-speeds';
+import { useAnswerDrawn } from './use-answer-drawn';
 import { useTool } from './use-tool';
 import { useView } from './use-view';
 
@@ -35,7 +35,8 @@ export function Board() {
   const [said, say] = useState<string | null>(null);
   const theme = useTheme();
   const units = casefile.display?.units ?? 'metric';
-  const { speeds, words } = useSpeeds(units);
+  const answer = useAnswerDrawn(units);
+  const { speeds } = answer;
   const scene = useMemo(() => sceneOf(casefile), [casefile]);
   const { size, view, setView, touch, fitAll, zoom } = useView(frame, scene);
   const { hovered, measured, panning, cancel, handlers } = useTool({ frame, view, setView, speeds });
@@ -55,7 +56,7 @@ export function Board() {
       formatWithUnit(value, dimension, units, { decimals });
     return { length: as('length', 2), angle: as('angle', 1) };
   }, [units]);
-  const drawn = { scene, view, theme, speeds, selection, shown };
+  const drawn = { scene, view, theme, selection, shown };
 
   return (
     <div
@@ -81,8 +82,8 @@ export function Board() {
         {size.width > 0 && (
           <Stage width={size.width} height={size.height} listening={false}>
             <GridLayer view={view} size={size} unit={METRES_PER[units]} theme={theme} />
-            <SceneLayer {...drawn} speedWords={words} />
-            <OverlayLayer {...drawn} hovered={hovered} measured={measured} />
+            <SceneLayer {...drawn} answer={answer} />
+            <OverlayLayer {...drawn} speeds={speeds} hovered={hovered} measured={measured} />
           </Stage>
         )}
       </div>

@@ -129,10 +129,29 @@ export function Travel({ scene, which, theme, zoom, selected }: Props & { select
   );
 }
 
-/** The direction of approach, which is known, as an arrow whose length grows with the speed, which is computed. */
-export function Approach({ scene, which, theme, zoom, speeds, selected }: Props & { selected: boolean }) {
+/**
+ * The direction of approach as an arrow whose length grows with the computed speed: solid where the direction is known,
+ * dashed where it was computed.
+ */
+export function Approach({
+  scene,
+  which,
+  theme,
+  zoom,
+  speeds,
+  selected,
+  computed,
+}: Props & { selected: boolean; computed: boolean }) {
   const [tail, tip] = [approachTail(scene, which, speeds[which]), approachTip(scene, which)];
   return tail && tip ? (
-    <InkArrow from={tail} to={tip} colour={theme[which]} zoom={zoom} width={selected ? 3.5 : 2} head={13} />
+    <InkArrow
+      from={tail}
+      to={tip}
+      colour={theme[which]}
+      zoom={zoom}
+      width={computed ? 1.25 : selected ? 3.5 : 2}
+      head={computed ? 10 : 13}
+      {...(computed ? { dash: [6, 4] } : {})}
+    />
   ) : null;
 }

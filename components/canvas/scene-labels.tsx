@@ -4,7 +4,7 @@ import { type Scene, type Speeds, type Which, approachTail } from '@/lib/scene/s
 import { type View, toScreen } from '@/lib/scene/view';
 import { BoardLabel } from './board-label';
 import type { Theme } from './theme';
-import type { SpeedsShown } from './use-speeds';
+import type { AnswerDrawn } from './use-answer-drawn';
 
 /** How numbers are shown, with their unit. */
 export interface Shown {
@@ -18,7 +18,7 @@ interface Props {
   view: View;
   theme: Theme;
   speeds: Speeds;
-  speedWords: SpeedsShown['words'];
+  words: AnswerDrawn['words'];
   shown: Shown;
 }
 
@@ -28,10 +28,10 @@ const OFF = { rest: [38, 13], leg: 20, speed: [46, 18] } as const;
 const SHORT = 36;
 
 /** The letter of a vehicle, its computed speed, the lengths of its legs, and where it came to rest. */
-export function SceneLabels({ scene, which, view, theme, speeds, speedWords, shown }: Props) {
+export function SceneLabels({ scene, which, view, theme, speeds, words, shown }: Props) {
   const screen = (at: Vec): Vec => toScreen(view, at);
   const rest = restLabelAt(scene, which, [OFF.rest[0] / view.scale, OFF.rest[1] / view.scale]);
-  const speed = speedWords[which];
+  const speed = words[which];
   const tail = approachTail(scene, which, speeds[which]);
   return (
     <>

@@ -1,7 +1,7 @@
 import { memo } from 'react';
 import { Group, Layer, Line } from 'react-konva/lib/ReactKonvaCore';
 import type { ThingId } from '@/lib/casefile/fields';
-import type { Scene, Speeds, Which } from '@/lib/scene/scene';
+import { type Scene, type Which, withComputed } from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import { BoardLabel } from './board-label';
 import { ContactShape } from './contact-shape';
@@ -9,7 +9,7 @@ import { flat } from './ink';
 import { Approach, Fans, Ghosts, Travel } from './motion-shapes';
 import { SceneLabels, type Shown } from './scene-labels';
 import type { Theme } from './theme';
-import type { SpeedsShown } from './use-speeds';
+import type { AnswerDrawn } from './use-answer-drawn';
 import { VehicleShape } from './vehicle-shape';
 
 interface Props {
@@ -17,8 +17,7 @@ interface Props {
   view: View;
   theme: Theme;
   selection: ThingId | null;
-  speeds: Speeds;
-  speedWords: SpeedsShown['words'];
+  answer: AnswerDrawn;
   shown: Shown;
 }
 
@@ -28,15 +27,9 @@ const isTravel = (selection: ThingId | null, which: Which): boolean =>
   selection === `departure.${which}` || (selection?.startsWith(`leg.${which}.`) ?? false);
 
 /** The collision itself, drawn in world metres. What is known is solid; what follows from it is dashed and lighter. */
-export const SceneLayer = memo(function SceneLayer({
-  scene,
-  view,
-  theme,
-  selection,
-  speeds,
-  speedWords,
-  shown,
-}: Props) {
+export const SceneLayer = memo(function SceneLayer({ scene: known, view, theme, selection, answer, shown }: Props) {
+  const { speeds, words, directions } = answer;
+  const scene = withComputed(known, directions);
   const each = (which: Which) => ({ scene, which, theme, zoom: view.scale, speeds });
   return (
     <Layer listening={false}>
@@ -61,7 +54,12 @@ export const SceneLayer = memo(function SceneLayer({
           />
         ))}
         {BOTH.map((which) => (
-          <Approach {...each(which)} key={which} selected={selection === `approach.${which}`} />
+          <Approach
+            {...each(which)}
+            key={which}
+            selected={selection === `approach.${which}`}
+            computed={!known.approach[which]}
+          />
         ))}
         <ContactShape
           scene={scene}
@@ -87,7 +85,7 @@ export const SceneLayer = memo(function SceneLayer({
           view={view}
           theme={theme}
           speeds={speeds}
-          speedWords={speedWords}
+          words={words}
           shown={shown}
         />
       ))}

@@ -31,7 +31,7 @@ export function restLabelAt(scene: Scene, which: Which, half: Vec): Vec | null {
     const side = quarter % 2 === 0 ? length / 2 : width / 2;
     return add(fromBody([middle, 0], rest), scale(away, side + off));
   });
-  return clearest(scene, places, half[0]);
+  return clearest(scene, places, half[1]);
 }
 
 /** Along a leg, in the order they are tried. */

@@ -53,6 +53,12 @@ export interface Scene {
   north: number;
 }
 
+/** The scene with directions of approach that were computed in place of those that are not known. */
+export function withComputed(scene: Scene, directions: Partial<Record<Which, SceneDirection>>): Scene {
+  const { A, B } = scene.approach;
+  return { ...scene, approach: { A: A ?? directions.A ?? null, B: B ?? directions.B ?? null } };
+}
+
 export const outlineAt = (vehicle: SceneVehicle, pose: ScenePose = vehicle.pose): Vec[] =>
   outlineOf(vehicle.body, pose).map(([x, y]): Vec => [x, y]);
 

@@ -120,6 +120,15 @@ describe('drawing', () => {
     expect(after.approach.A.direction?.spread).toEqual({ shape: 'normal', sd: 3 });
     expect(acts.at(-1)).toEqual({ do: 'select', thing: 'approach.A' });
   });
+  test('approach: also drawn towards the vehicle', () => {
+    const { after } = play(fresh, 'approach', [
+      ['down', [-2.2, -4]],
+      ['move', [-2.2, -3]],
+      ['move', [-2.1, -0.1]],
+      ['up', [-2.1, -0.1]],
+    ]);
+    expect(after.approach.A.direction?.value).toBe(90);
+  });
   test('travel: from the vehicle to where it came to rest', () => {
     const { after } = play(fresh, 'travel', [
       ['down', [2.2, 0]],

@@ -6,7 +6,7 @@ import { type Scene, type Which, centreOf } from '@/lib/scene/scene';
 import { vehicleAt } from '@/lib/scene/grip';
 import type { PointerEvent, Tool, ToolContext, ToolId } from './tool';
 
-interface Drawing {
+export interface Drawing {
   which: Which;
   from: Vec;
   /** Whether Shift was held when the pointer went down. */
@@ -18,7 +18,7 @@ interface Drawing {
 /** A shorter stroke is a slip of the hand, m. */
 const SHORTEST_STROKE = 0.3;
 /** A press this near a mass centre counts as on the vehicle, m. */
-const NEARBY = 4;
+const NEARBY = 6;
 
 function pressed(scene: Scene, at: Vec): Which | null {
   const off = (which: Which): number => distance(centreOf(scene.vehicles[which]), at);
@@ -32,7 +32,7 @@ interface Options {
   label: (which: Which) => string;
   thing: (which: Which) => ThingId;
   /** The edit for a stroke of this vehicle that has come to `to`. */
-  edit: (casefile: CaseFile, drawing: { which: Which; shift: boolean }, to: Vec, coarse: boolean) => Edit;
+  edit: (casefile: CaseFile, drawing: Drawing, to: Vec, coarse: boolean) => Edit;
 }
 
 /** A tool that is pressed on a vehicle and dragged away from it. */

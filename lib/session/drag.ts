@@ -1,7 +1,7 @@
 import { defaultDeparture, drawnQuantity } from '@/lib/casefile/defaults';
 import type { Edit } from '@/lib/casefile/edit';
 import type { ThingId } from '@/lib/casefile/fields';
-import type { CaseFile, Leg } from '@/lib/casefile/schema';
+import type { CaseFile, Leg, Quantity } from '@/lib/casefile/schema';
 import { sceneOf } from '@/lib/casefile/scene-of';
 import { type Vec, angleOf, distance, subtract, toDegrees, unit } from '@/lib/geometry/vector';
 import type { Grip } from '@/lib/scene/grip';
@@ -43,32 +43,16 @@ const SHORTEST = 0.05;
 export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coarse: boolean): Edit {
   const by = subtract(to, from);
   const { impact } = casefile;
+  const turn = (about: Vec): number => degreesOf(subtract(to, about), coarse);
   switch (grip.part) {
-    case 'vehicle': {
-      const at = `impact.${grip.which}`;
-      const { x, y } = impact[grip.which];
-      return {
-        do: 'all',
-        edits: [value(`${at}.x`, centimetres(x.value + by[0])), value(`${at}.y`, centimetres(y.value + by[1]))],
-      };
-    }
+    case 'vehicle':
+      return moveEdit(`impact.${grip.which}`, impact[grip.which], by);
     case 'turn':
-      return value(`impact.${grip.which}.heading`, degreesOf(subtract(to, centre(casefile, grip.which)), coarse));
-    case 'point': {
-      const { x, y } = impact.point;
-      return {
-        do: 'all',
-        edits: [
-          value('impact.point.x', centimetres(x.value + by[0])),
-          value('impact.point.y', centimetres(y.value + by[1])),
-        ],
-      };
-    }
+      return value(`impact.${grip.which}.heading`, turn(centre(casefile, grip.which)));
+    case 'point':
+      return moveEdit('impact.point', impact.point, by);
     case 'plane':
-      return value(
-        'impact.plane',
-        asLine(degreesOf(subtract(to, [impact.point.x.value, impact.point.y.value]), coarse)),
-      );
+      return value('impact.plane', asLine(turn([impact.point.x.value, impact.point.y.value])));
     case 'approach':
       return approachEdit(casefile, grip.which, to, coarse);
     case 'end':
@@ -76,11 +60,16 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
     case 'joint':
       return jointEdit(casefile, grip.which, grip.leg, to);
     case 'leg':
-      return value(`departure.${grip.which}.direction`, degreesOf(subtract(to, centre(casefile, grip.which)), coarse));
+      return value(`departure.${grip.which}.direction`, turn(centre(casefile, grip.which)));
     case 'mark':
       return markEdit(casefile, grip.index, by);
   }
 }
+
+const moveEdit = (path: string, { x, y }: { x: Quantity; y: Quantity }, by: Vec): Edit => ({
+  do: 'all',
+  edits: [value(`${path}.x`, centimetres(x.value + by[0])), value(`${path}.y`, centimetres(y.value + by[1]))],
+});
 
 const centre = (casefile: CaseFile, which: Which): Vec => centreOf(sceneOf(casefile).vehicles[which]);
 

@@ -1,6 +1,6 @@
 'use client';
-import { TriangleAlert, X } from 'lucide-react';
-import { memo } from 'react';
+import { X } from 'lucide-react';
+import { memo, useId } from 'react';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
 import { EntryField } from '@/components/ui/entry-field';
 import { DEFAULT_SOURCE, startingQuantity } from '@/lib/casefile/defaults';
@@ -9,9 +9,11 @@ import { isQuantity, nodeAt } from '@/lib/casefile/quantities';
 import type { CaseFile, Quantity } from '@/lib/casefile/schema';
 import { enterQuantity, stepOf } from '@/lib/session/enter';
 import type { Dimension, UnitSystem } from '@/lib/units/dimension';
-import { entryText, limitsText } from '@/lib/units/entry';
+import { entryText, limitsText, widthOf } from '@/lib/units/entry';
 import { fromDisplay, toDisplay, unitOf } from '@/lib/units/format';
 import { parseEntry } from '@/lib/units/parse';
+import { focusNext } from './focus-next';
+import { LedgerMark } from './ledger-mark';
 import { LedgerSpread } from './ledger-spread';
 import styles from './ledger.module.css';
 
@@ -45,11 +47,11 @@ function Row({ field, units, share, mark }: RowProps) {
   const select = useSession((s) => s.select);
   const dimension = field.dimension ?? 'ratio';
   const quantity = isQuantity(node) ? node : null;
+  const markId = useId();
   return (
-    <div className={styles.row} data-selected={selected} data-thing={field.thing} data-marked={mark !== null}>
+    <div className={styles.row} data-selected={selected} data-thing={field.thing} onFocus={() => select(field.thing)}>
       <div className={styles.name}>
-        {mark && <TriangleAlert className={styles.mark} aria-label={mark} role="img" />}
-        <span title={name}>{short(field)}</span>
+        <span title={name}>{field.label}</span>
       </div>
       {node === null ? (
         <button
@@ -57,28 +59,33 @@ function Row({ field, units, share, mark }: RowProps) {
           id={`field-${field.path}`}
           className={styles.add}
           aria-label={`Add ${name}`}
-          onFocus={() => select(field.thing)}
-          onClick={() => edit(`add ${name}`, { do: 'set', path: field.path, to: startingQuantity(field.path) })}
+          aria-describedby={mark === null ? undefined : markId}
+          onClick={() => {
+            edit(`add ${name}`, { do: 'set', path: field.path, to: startingQuantity(field.path) });
+            focusNext(`field-${field.path}`);
+          }}
         >
-          {field.path.endsWith('yawInertia') ? 'estimated; + state' : '+ add'}
+          + add
         </button>
       ) : (
-        <ValueField field={field} node={node} name={name} units={units} dimension={dimension} />
+        <ValueField
+          field={field}
+          node={node}
+          name={name}
+          units={units}
+          dimension={dimension}
+          describedBy={mark === null ? undefined : markId}
+        />
       )}
       <Share share={share} name={name} />
-      {quantity && (
-        <Below field={field} quantity={quantity} name={name} units={units} dimension={dimension} mark={mark} />
+      {node === null && field.path.endsWith('yawInertia') && (
+        <p className={styles.instead}>estimated from mass and axles</p>
       )}
-      {!quantity && mark && <p className={styles.marked}>{mark}</p>}
+      {mark && <LedgerMark id={markId} says={mark} />}
+      {quantity && <Below field={field} quantity={quantity} name={name} units={units} dimension={dimension} />}
     </div>
   );
 }
-
-/** In its group the name need not say the vehicle again. */
-const short = ({ label }: Field): string => {
-  const plain = label.replace(/^[AB]: /, (prefix) => prefix);
-  return plain.charAt(0).toUpperCase() + plain.slice(1);
-};
 
 function ValueField({
   field,
@@ -86,15 +93,17 @@ function ValueField({
   name,
   units,
   dimension,
+  describedBy,
 }: {
   field: Field;
   node: unknown;
   name: string;
   units: UnitSystem;
   dimension: Dimension;
+  describedBy: string | undefined;
 }) {
   const session = useSessionStore();
-  const { path, kind, thing } = field;
+  const { path, kind } = field;
   const text =
     kind === 'text'
       ? String(node)
@@ -114,7 +123,8 @@ function ValueField({
   function onStep(steps: number): void {
     const si = isQuantity(node) ? node.value : Number(node);
     const shown = toDisplay(si, dimension, units);
-    const to = fromDisplay(Number((shown + steps * stepOf(shown)).toPrecision(10)), dimension, units);
+    const width = isQuantity(node) ? toDisplay(widthOf(node.spread), dimension, units) : 0;
+    const to = fromDisplay(Number((shown + steps * stepOf(shown, width)).toPrecision(10)), dimension, units);
     const { edit } = session.getState();
     edit(name, isQuantity(node) ? enterQuantity(path, node, { value: to }) : { do: 'set', path, to });
   }
@@ -127,24 +137,26 @@ function ValueField({
       unit={kind === 'text' ? undefined : unitOf(dimension, units).symbol}
       onEnter={onEnter}
       onStep={kind === 'text' ? undefined : onStep}
-      onFocus={() => session.getState().select(thing)}
       wide={kind === 'text'}
+      describedBy={describedBy}
     />
   );
 }
 
-/** A bar for the eye and a figure for the ear. */
+/** Shares below this are noise of the draws: nothing is drawn for them. */
+const LEAST_SHARE = 0.005;
+
+/** A bar and a figure for the eye, a sentence for the ear. */
 function Share({ share, name }: { share: number | null; name: string }) {
   if (share === null) return <span />;
-  const percent = Math.round(100 * Math.max(0, share));
+  const percent = Math.round(100 * Math.min(1, Math.max(0, share)));
+  const words = `${name} carries ${share < LEAST_SHARE ? 'less than 1' : percent} % of the spread`;
   return (
-    <span
-      className={styles.share}
-      role="img"
-      aria-label={`${name} carries ${percent} % of the spread`}
-      title={`${percent} % of the spread`}
-    >
-      <i style={{ width: `${Math.min(100, percent)}%` }} />
+    <span className={styles.share} role="img" aria-label={words} title={words}>
+      <span className={styles.track}>
+        <span style={{ width: `${percent}%` }} />
+      </span>
+      {share >= LEAST_SHARE && <span className={styles.percent}>{percent}&nbsp;%</span>}
     </span>
   );
 }
@@ -156,21 +168,18 @@ function Below({
   name,
   units,
   dimension,
-  mark,
 }: {
   field: Field;
   quantity: Quantity;
   name: string;
   units: UnitSystem;
   dimension: Dimension;
-  mark: string | null;
 }) {
   const edit = useSession((s) => s.edit);
   const limits = limitsText(quantity.value, quantity.spread, dimension, units);
   const isDefault = quantity.source === DEFAULT_SOURCE;
   return (
     <div className={styles.below}>
-      {mark && <p className={styles.marked}>{mark}</p>}
       <details>
         <summary aria-label={`Spread and source of ${name}`}>
           {limits && <span>{limits}</span>}
@@ -184,7 +193,10 @@ function Below({
           className={styles.clear}
           aria-label={`Take away ${name}`}
           title="Take this value away"
-          onClick={() => edit(`take away ${name}`, { do: 'set', path: field.path, to: null })}
+          onClick={() => {
+            edit(`take away ${name}`, { do: 'set', path: field.path, to: null });
+            focusNext(`field-${field.path}`);
+          }}
         >
           <X aria-hidden />
         </button>

@@ -5,8 +5,10 @@ import buttons from '@/components/ui/button.module.css';
 import { EntryField } from '@/components/ui/entry-field';
 import type { VehicleId } from '@/lib/casefile/schema';
 import type { UnitSystem } from '@/lib/units/dimension';
-import { formatValue, unitOf } from '@/lib/units/format';
+import { figureText } from '@/lib/units/entry';
+import { unitOf } from '@/lib/units/format';
 import { parseEntry } from '@/lib/units/parse';
+import { focusNext } from './focus-next';
 import styles from './ledger.module.css';
 
 /** Places in a vehicle at which delta-V is wanted: forward and left of the mass centre. */
@@ -19,7 +21,7 @@ export function LedgerSeats({ id, units }: { id: VehicleId; units: UnitSystem })
   const length = (index: number, key: 'x' | 'y', label: string, value: number) => (
     <EntryField
       label={`${label} of seat ${index + 1} of ${id}`}
-      text={formatValue(value, 'length', units)}
+      text={figureText(value, 'length', units)}
       unit={unitOf('length', units).symbol}
       onEnter={(typed) => {
         const entry = parseEntry(typed, 'length', units);
@@ -39,6 +41,7 @@ export function LedgerSeats({ id, units }: { id: VehicleId; units: UnitSystem })
       {seats.map((seat, k) => (
         <div key={k} className={styles.seat}>
           <EntryField
+            id={`field-${path}.${k}.name`}
             label={`Name of seat ${k + 1} of ${id}`}
             text={seat.name}
             wide
@@ -50,7 +53,10 @@ export function LedgerSeats({ id, units }: { id: VehicleId; units: UnitSystem })
             type="button"
             className={styles.clear}
             aria-label={`Take away seat ${k + 1} of ${id}`}
-            onClick={() => edit(`take away seat ${k + 1} of ${id}`, { do: 'remove', path, index: k })}
+            onClick={() => {
+              edit(`take away seat ${k + 1} of ${id}`, { do: 'remove', path, index: k });
+              focusNext(`field-${path}`);
+            }}
           >
             <X aria-hidden />
           </button>
@@ -59,14 +65,17 @@ export function LedgerSeats({ id, units }: { id: VehicleId; units: UnitSystem })
       <button
         type="button"
         className={buttons.quiet}
-        onClick={() =>
+        id={`field-${path}`}
+        aria-label={`Add a seat in ${id}`}
+        onClick={() => {
           edit(`add a seat in ${id}`, {
             do: 'insert',
             path,
             index: seats.length,
             entry: { name: `Seat ${seats.length + 1}`, x: 0, y: 0 },
-          })
-        }
+          });
+          focusNext(`field-${path}.${seats.length}.name`);
+        }}
       >
         <Plus aria-hidden size={14} /> Add a seat
       </button>

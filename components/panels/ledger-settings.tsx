@@ -4,9 +4,9 @@ import { EntryField } from '@/components/ui/entry-field';
 import { DEFAULT_COVERAGE, DEFAULT_DRAWS, DEFAULT_SEED } from '@/lib/casefile/defaults';
 import styles from './ledger.module.css';
 
-const METHODS: [string, string][] = [
-  ['directions', 'directions: both approach directions known, paths cross'],
-  ['restitution', 'restitution: restitution and impulse ratio known'],
+const METHODS: [id: string, name: string, when: string][] = [
+  ['directions', 'two known directions', 'Both directions of approach are known and their paths cross.'],
+  ['restitution', 'known restitution', 'Restitution, impulse ratio and both yaw rates after contact are known.'],
 ];
 
 /** How the case is solved and shown. */
@@ -14,78 +14,123 @@ export function LedgerSettings() {
   const analysis = useSession((s) => s.casefile.analysis);
   const display = useSession((s) => s.casefile.display);
   const edit = useSession((s) => s.edit);
-  const set = (path: string, to: unknown): string | null => edit(path, { do: 'set', path, to })[0]?.says ?? null;
+  const set = (label: string, path: string, to: unknown): string | null =>
+    edit(label, { do: 'set', path, to })[0]?.says ?? null;
   const shown = { units: display?.units ?? 'metric', paper: display?.paper ?? 'A4' };
-  const number = (label: string, path: string, value: string, factor = 1) => (
-    <div className={styles.pair}>
-      <span>{label}</span>
-      <EntryField
-        label={label}
-        text={value}
-        unit={factor === 1 ? '' : '%'}
-        onEnter={(typed) => {
-          if (path === 'analysis.draws' && typed.trim() === 'auto') return set(path, 'auto');
-          const figure = Number(typed.replaceAll(' ', ''));
-          return Number.isFinite(figure) ? set(path, figure / factor) : `«${typed}» is not a number`;
-        }}
-      />
-    </div>
-  );
+  const coverage = String(Number((100 * (analysis.coverage ?? DEFAULT_COVERAGE)).toPrecision(6)));
   return (
     <div className={styles.settings}>
-      <label className={styles.pair}>
-        <span>Method</span>
-        <select
-          aria-label="Method"
-          value={analysis.method}
-          onChange={(event) => set('analysis.method', event.target.value)}
-        >
-          {METHODS.map(([id, words]) => (
-            <option key={id} value={id}>
-              {words}
-            </option>
-          ))}
-          {analysis.method === 'fit' && <option value="fit">fit: not solved by this version</option>}
-        </select>
-      </label>
+      <Choice
+        label="Method"
+        value={analysis.method}
+        options={[
+          ...METHODS.map(([id, name]) => [id, name] as const),
+          ...(analysis.method === 'fit' ? [['fit', 'fit: not solved by this version'] as const] : []),
+        ]}
+        onChoose={(method) => set('method', 'analysis.method', method)}
+      />
+      <p className={styles.hint}>{METHODS.find(([id]) => id === analysis.method)?.[2]}</p>
       {analysis.contact === 'lasting' && (
-        <p className={styles.note}>
+        <p className={styles.hint}>
           The contact that lasts is not solved by this version.{' '}
-          <button type="button" className={styles.add} onClick={() => set('analysis.contact', 'instant')}>
+          <button
+            type="button"
+            className={styles.add}
+            onClick={() => set('instant contact', 'analysis.contact', 'instant')}
+          >
             Use the instant contact
           </button>
         </p>
       )}
-      {number('Draws', 'analysis.draws', String(analysis.draws ?? DEFAULT_DRAWS))}
-      {number('Seed', 'analysis.seed', String(analysis.seed ?? DEFAULT_SEED))}
-      {number(
-        'Coverage',
-        'analysis.coverage',
-        String(Number((100 * (analysis.coverage ?? DEFAULT_COVERAGE)).toPrecision(6))),
-        100,
-      )}
-      <label className={styles.pair}>
-        <span>Units</span>
-        <select
-          aria-label="Units"
-          value={shown.units}
-          onChange={(event) => set('display', { ...shown, units: event.target.value })}
-        >
-          <option value="metric">metric: m, kg, km/h</option>
-          <option value="us">US customary: ft, lb, mph</option>
-        </select>
-      </label>
-      <label className={styles.pair}>
-        <span>Paper</span>
-        <select
-          aria-label="Paper"
-          value={shown.paper}
-          onChange={(event) => set('display', { ...shown, paper: event.target.value })}
-        >
-          <option value="A4">A4</option>
-          <option value="Letter">Letter</option>
-        </select>
-      </label>
+      <Figure
+        label="Draws"
+        text={String(analysis.draws ?? DEFAULT_DRAWS)}
+        onEnter={(typed) =>
+          typed.trim() === 'auto'
+            ? set('draws', 'analysis.draws', 'auto')
+            : withFigure(typed, (figure) => set('draws', 'analysis.draws', figure))
+        }
+      />
+      <Figure
+        label="Seed"
+        text={String(analysis.seed ?? DEFAULT_SEED)}
+        onEnter={(typed) => withFigure(typed, (figure) => set('seed', 'analysis.seed', figure))}
+      />
+      <Figure
+        label="Coverage"
+        text={coverage}
+        unit="%"
+        onEnter={(typed) => withFigure(typed, (figure) => set('coverage', 'analysis.coverage', figure / 100))}
+      />
+      <Choice
+        label="Units"
+        value={shown.units}
+        options={[
+          ['metric', 'metric: m, kg, km/h'],
+          ['us', 'US customary: ft, lb, mph'],
+        ]}
+        onChoose={(units) => set('units', 'display', { ...shown, units })}
+      />
+      <Choice
+        label="Paper"
+        value={shown.paper}
+        options={[
+          ['A4', 'A4'],
+          ['Letter', 'Letter'],
+        ]}
+        onChoose={(paper) => set('paper', 'display', { ...shown, paper })}
+      />
+    </div>
+  );
+}
+
+/** Hands on a plain number, or says that it is none. */
+function withFigure(typed: string, take: (figure: number) => string | null): string | null {
+  const plain = typed.replaceAll(/[\s%]/g, '').replace(',', '.');
+  const figure = Number(plain);
+  return plain !== '' && Number.isFinite(figure) ? take(figure) : `«${typed}» is not a number`;
+}
+
+function Choice({
+  label,
+  value,
+  options,
+  onChoose,
+}: {
+  label: string;
+  value: string;
+  options: readonly (readonly [id: string, words: string])[];
+  onChoose: (id: string) => void;
+}) {
+  return (
+    <label className={styles.pair}>
+      <span>{label}</span>
+      <select aria-label={label} value={value} onChange={(event) => onChoose(event.target.value)}>
+        {options.map(([id, words]) => (
+          <option key={id} value={id}>
+            {words}
+          </option>
+        ))}
+      </select>
+    </label>
+  );
+}
+
+function Figure({
+  label,
+  text,
+  unit = '',
+  onEnter,
+}: {
+  label: string;
+  text: string;
+  unit?: string;
+  onEnter: (typed: string) => string | null;
+}) {
+  return (
+    <div className={styles.pair}>
+      <span>{label}</span>
+      <EntryField label={label} text={text} unit={unit} onEnter={onEnter} />
     </div>
   );
 }

@@ -3,7 +3,8 @@ import { useSession } from '@/components/hooks/use-session';
 import { EntryField } from '@/components/ui/entry-field';
 import type { Quantity, Spread } from '@/lib/casefile/schema';
 import type { Dimension, UnitSystem } from '@/lib/units/dimension';
-import { formatValue, unitOf } from '@/lib/units/format';
+import { figureText } from '@/lib/units/entry';
+import { unitOf } from '@/lib/units/format';
 import { parseEntry } from '@/lib/units/parse';
 import styles from './ledger.module.css';
 
@@ -52,7 +53,7 @@ export function LedgerSpread({
       <span>{label}</span>
       <EntryField
         label={`${label} of ${name}`}
-        text={formatValue(value, dimension, units)}
+        text={figureText(value, dimension, units)}
         unit={symbol}
         onEnter={(typed) => {
           const entry = parseEntry(typed, dimension, units);

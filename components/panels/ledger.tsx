@@ -2,9 +2,10 @@
 import { useEffect, useMemo, useRef, useState } from 'react';
 import { useAnswer } from '@/components/hooks/use-answer';
 import { useSession } from '@/components/hooks/use-session';
-import { type GroupId, GROUPS, fieldsOf } from '@/lib/casefile/fields';
+import { type Field, type GroupId, GROUPS, fieldsOf } from '@/lib/casefile/fields';
 import { HEADLINES, type ResultName, resultLabel } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
+import type { UnitSystem } from '@/lib/units/dimension';
 import { LedgerRow } from './ledger-row';
 import { LedgerSeats } from './ledger-seats';
 import { LedgerSettings } from './ledger-settings';
@@ -27,7 +28,7 @@ export function Ledger() {
       <div className={styles.head}>
         <h2>Ledger</h2>
         <label>
-          <span>spread of</span>
+          <span>share in the spread of</span>
           <select
             aria-label="Result whose spread is traced"
             value={traced}
@@ -41,14 +42,16 @@ export function Ledger() {
           </select>
         </label>
       </div>
-      {GROUPS.map(({ id, title }) => (
-        <details key={id} open className={styles.group}>
-          <summary>
-            <h3>{title}</h3>
-          </summary>
-          {fields
-            .filter((field) => field.group === id)
-            .map((field) => (
+      {GROUPS.map(({ id, title }) => {
+        const rows = fields.filter((field) => field.group === id);
+        const marked = marksIn(marks, rows, id);
+        return (
+          <details key={id} open className={styles.group}>
+            <summary>
+              <h3>{title}</h3>
+              {marked > 0 && <span className={styles.count}>{marked} to look at</span>}
+            </summary>
+            {rows.map((field) => (
               <LedgerRow
                 key={field.path}
                 field={field}
@@ -57,9 +60,10 @@ export function Ledger() {
                 mark={marks.get(field.path) ?? null}
               />
             ))}
-          <GroupTools id={id} units={units} />
-        </details>
-      ))}
+            <GroupTools id={id} units={units} marks={marks} />
+          </details>
+        );
+      })}
       <details open className={styles.group}>
         <summary>
           <h3>How it is solved and shown</h3>
@@ -70,12 +74,16 @@ export function Ledger() {
   );
 }
 
-function GroupTools({ id, units }: { id: GroupId; units: 'metric' | 'us' }) {
+function GroupTools({ id, units, marks }: { id: GroupId; units: UnitSystem; marks: ReadonlyMap<string, string> }) {
   if (id === 'A' || id === 'B') return <LedgerSeats id={id} units={units} />;
-  if (id === 'after.A') return <LedgerTravel id="A" />;
-  if (id === 'after.B') return <LedgerTravel id="B" />;
+  if (id === 'after.A') return <LedgerTravel id="A" mark={marks.get('departure.A') ?? null} />;
+  if (id === 'after.B') return <LedgerTravel id="B" mark={marks.get('departure.B') ?? null} />;
   return null;
 }
+
+/** How many marks a group carries, so that a folded group says so too. */
+const marksIn = (marks: ReadonlyMap<string, string>, rows: readonly Field[], id: GroupId): number =>
+  rows.filter(({ path }) => marks.has(path)).length + (marks.has(id.replace('after', 'departure')) ? 1 : 0);
 
 /** Why each path is pointed at: by the method, or by a check that speaks up. */
 function marksOf(result: Result | null, issues: readonly { path: string; says: string }[]): Map<string, string> {
@@ -94,9 +102,11 @@ function useFollowedSelection() {
   useEffect(() => {
     const element = frame.current;
     if (!selection || !element || element.contains(document.activeElement)) return;
-    const row = element.querySelector(`[data-thing="${selection}"]`);
-    row?.closest('details')?.setAttribute('open', '');
-    row?.scrollIntoView({ block: 'nearest' });
+    const rows = [...element.querySelectorAll(`[data-thing="${selection}"]`)];
+    rows[0]?.closest('details')?.setAttribute('open', '');
+    // First the end, then the beginning: as many of the rows as there is room for.
+    rows.at(-1)?.scrollIntoView({ block: 'nearest' });
+    rows[0]?.scrollIntoView({ block: 'nearest' });
   }, [selection]);
   return frame;
 }

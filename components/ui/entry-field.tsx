@@ -13,7 +13,6 @@ export interface EntryFieldProps {
   onEnter: (text: string) => string | null;
   /** Steps the value by so many steps; absent where there is nothing to step. */
   onStep?: (steps: number) => void;
-  onFocus?: () => void;
   wide?: boolean;
   /** Words about a mark that the field carries. */
   describedBy?: string;
@@ -37,17 +36,7 @@ const stepsOf = (event: KeyboardEvent): number => {
  * A field that takes effect on Enter or when it is left. What is refused says why and stays to be mended; the last good
  * value stays in force. Escape puts that back.
  */
-export function EntryField({
-  id,
-  label,
-  text,
-  unit,
-  onEnter,
-  onStep,
-  onFocus,
-  wide = false,
-  describedBy,
-}: EntryFieldProps) {
+export function EntryField({ id, label, text, unit, onEnter, onStep, wide = false, describedBy }: EntryFieldProps) {
   const [attempt, setAttempt] = useState<Attempt | null>(null);
   const alertId = useId();
   // What was typed against another text is out of date: the value has changed elsewhere.
@@ -72,7 +61,6 @@ export function EntryField({
           aria-invalid={refused !== null}
           aria-describedby={[refused === null ? null : alertId, describedBy].filter(Boolean).join(' ') || undefined}
           value={now?.typed ?? text}
-          onFocus={onFocus}
           onChange={(event) => setAttempt({ typed: event.target.value, against: text, refused: null })}
           onBlur={enter}
           onKeyDown={(event) => {

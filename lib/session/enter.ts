@@ -16,9 +16,11 @@ export function enterQuantity(path: string, quantity: Quantity, typed: { value: 
   return { do: 'set', path, to: { value: typed.value, spread: typed.spread, source } };
 }
 
-/** The digits of a step that a person would take: one unit of the second digit that a value shows. */
-export function stepOf(value: number): number {
-  if (value === 0) return 0.1;
-  const exponent = Math.floor(Math.log10(Math.abs(value)));
-  return 10 ** (exponent - 1);
+/**
+ * The step that a person would take, in the unit shown: the power of ten just below what is uncertain (`width`, 0 where
+ * nothing is), else one unit of the third digit.
+ */
+export function stepOf(value: number, width: number): number {
+  const size = width > 0 ? width : Math.abs(value) / 100;
+  return size === 0 ? 0.1 : 10 ** Math.floor(Math.log10(size));
 }

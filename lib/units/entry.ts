@@ -12,6 +12,8 @@ export type EntrySpreadShape =
 const SAME = 1e-9;
 /** Figures of so many digits are shown as entered; longer ones come from a conversion or a computation. */
 const ENTERED_DIGITS = 6;
+/** Digits of a longer one that has no spread: a length to a millimetre or finer. */
+const PLAIN_DIGITS = 5;
 /** Digits that a long figure keeps of the spread beside it: what is left out is below a hundredth of the spread. */
 const SPREAD_DIGITS = 3;
 
@@ -34,19 +36,19 @@ export function entryText(
 
 /**
  * One figure (SI, angles: degrees) in the display unit: as it was entered, or, where that would be a long tail of
- * conversion, rounded well below `width` (SI), the size of what is uncertain about it; without one to six digits.
+ * conversion, rounded well below `width` (SI), the size of what is uncertain about it; without one to five digits.
  */
 export function figureText(si: number, dimension: Dimension, system: UnitSystem, width = 0): string {
   const exact = formatValue(si, dimension, system);
   const shown = new Decimal(toDisplay(si, dimension, system));
   if (shown.toSignificantDigits(12).precision() <= ENTERED_DIGITS) return exact;
   const places =
-    width > 0 ? SPREAD_DIGITS - 1 - new Decimal(toDisplay(width, dimension, system)).e : ENTERED_DIGITS - 1 - shown.e;
+    width > 0 ? SPREAD_DIGITS - 1 - new Decimal(toDisplay(width, dimension, system)).e : PLAIN_DIGITS - 1 - shown.e;
   return formatValue(si, dimension, system, { decimals: Math.max(0, places) });
 }
 
 /** The size of a spread, SI; 0 where there is none. */
-function widthOf(spread: EntrySpreadShape | undefined): number {
+export function widthOf(spread: EntrySpreadShape | undefined): number {
   if (!spread || spread.shape === 'fixed') return 0;
   return spread.shape === 'normal' ? spread.sd : (spread.high - spread.low) / 2;
 }

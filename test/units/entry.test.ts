@@ -19,7 +19,7 @@ describe('a value and its spread in one line', () => {
   test('a long tail of a conversion is rounded well below the spread', () => {
     expect(entryText(1510, { shape: 'normal', sd: 20 }, 'mass', 'us')).toBe('3329.0 ± 44.1');
     expect(entryText(3.81, undefined, 'length', 'us')).toBe('12.5');
-    expect(entryText(4.62, undefined, 'length', 'us')).toBe('15.1575');
+    expect(entryText(4.62, undefined, 'length', 'us')).toBe('15.157');
     expect(entryText(1 / 3, { shape: 'normal', sd: 1e-9 }, 'ratio', 'metric')).toBe('0.33333333333 ± 0.000000001');
   });
 

@@ -1,5 +1,5 @@
 'use client';
-import { type KeyboardEvent, useId, useState } from 'react';
+import { type KeyboardEvent, useEffect, useId, useRef, useState } from 'react';
 import styles from './entry-field.module.css';
 
 export interface EntryFieldProps {
@@ -42,6 +42,7 @@ export function EntryField({ id, label, text, unit, onEnter, onStep, wide = fals
   // What was typed against another text is out of date: the value has changed elsewhere.
   const now = attempt?.against === text ? attempt : null;
   const refused = now?.refused ?? null;
+  const input = useLeftAtPress(now !== null);
 
   const enter = (): void => {
     if (!now || now.typed === text) return setAttempt(null);
@@ -53,6 +54,7 @@ export function EntryField({ id, label, text, unit, onEnter, onStep, wide = fals
     <span className={styles.field} data-wide={wide}>
       <span className={styles.box} data-refused={refused !== null}>
         <input
+          ref={input}
           id={id}
           type="text"
           autoComplete="off"
@@ -83,4 +85,21 @@ export function EntryField({ id, label, text, unit, onEnter, onStep, wide = fals
       )}
     </span>
   );
+}
+
+/**
+ * What is typed takes effect before a press elsewhere is heard: left to itself the browser says so only afterwards, when
+ * a drag may have begun from the old value.
+ */
+function useLeftAtPress(isTyping: boolean) {
+  const input = useRef<HTMLInputElement>(null);
+  useEffect(() => {
+    if (!isTyping) return;
+    const leave = (event: PointerEvent): void => {
+      if (event.target !== input.current) input.current?.blur();
+    };
+    document.addEventListener('pointerdown', leave, { capture: true });
+    return () => document.removeEventListener('pointerdown', leave, { capture: true });
+  }, [isTyping]);
+  return input;
 }

@@ -2,22 +2,26 @@ import { distanceToSegment } from './segment';
 
 export type Point = readonly [number, number];
 
-/** Corners of a vehicle's outline in the world, m, counter-clockwise from the rear right. */
+/**
+ * Corners of a vehicle's outline in the world, m, counter-clockwise from the rear right. `forward` is the unit vector of its
+ * heading: whoever asks makes it, the engine from functions that give the same bits everywhere.
+ */
 export function outlineOf(
   vehicle: { length: number; width: number; frontOverhang: number; frontAxleToMassCentre: number },
-  pose: { x: number; y: number; heading: number },
+  centre: Point,
+  forward: Point,
 ): Point[] {
   const front = vehicle.frontAxleToMassCentre + vehicle.frontOverhang;
   const rear = front - vehicle.length;
   const half = vehicle.width / 2;
-  const [c, s] = [Math.cos(pose.heading), Math.sin(pose.heading)];
+  const [c, s] = forward;
   const corners: Point[] = [
     [rear, -half],
     [front, -half],
     [front, half],
     [rear, half],
   ];
-  return corners.map(([x, y]) => [pose.x + c * x - s * y, pose.y + s * x + c * y]);
+  return corners.map(([x, y]) => [centre[0] + c * x - s * y, centre[1] + s * x + c * y]);
 }
 
 /** Outward unit normals of the edges of a convex counter-clockwise polygon. */

@@ -60,7 +60,7 @@ export function withComputed(scene: Scene, directions: Partial<Record<Which, Sce
 }
 
 export const outlineAt = (vehicle: SceneVehicle, pose: ScenePose = vehicle.pose): Vec[] =>
-  outlineOf(vehicle.body, pose).map(([x, y]): Vec => [x, y]);
+  outlineOf(vehicle.body, [pose.x, pose.y], unit(pose.heading)).map(([x, y]): Vec => [x, y]);
 
 /** Distance from the mass centre to the nose, m. */
 export const noseOf = ({ body }: SceneVehicle): number => body.frontAxleToMassCentre + body.frontOverhang;

@@ -1,5 +1,6 @@
 import type { Quantity, VehicleId } from '@/lib/casefile/schema';
 import { outlineOf } from '@/lib/geometry/polygon';
+import { cos, sin } from '@/lib/numerics/elementary';
 import { standardUncertainty } from '@/lib/numerics/spread';
 import type { CheckContext } from './check';
 
@@ -9,9 +10,11 @@ const RADIANS_PER_DEGREE = Math.PI / 180;
 export function outlineAtContact({ casefile }: CheckContext, id: VehicleId) {
   const { length, width, frontOverhang, frontAxleToMassCentre } = casefile.vehicles[id];
   const { x, y, heading } = casefile.impact[id];
+  const turn = heading.value * RADIANS_PER_DEGREE;
   return outlineOf(
     { length, width, frontOverhang, frontAxleToMassCentre: frontAxleToMassCentre.value },
-    { x: x.value, y: y.value, heading: heading.value * RADIANS_PER_DEGREE },
+    [x.value, y.value],
+    [cos(turn), sin(turn)],
   );
 }
 

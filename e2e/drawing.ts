@@ -29,6 +29,13 @@ export class DrawingBoard {
     );
   }
 
+  async press(at: Place): Promise<void> {
+    await this.page.mouse.move(...(await this.pixel(at)));
+    await this.page.mouse.down();
+  }
+  moveTo = async (to: Place): Promise<void> => this.page.mouse.move(...(await this.pixel(to)), { steps: 8 });
+  letGo = (): Promise<void> => this.page.mouse.up();
+
   /** Presses at one place, moves to another and lets go. */
   async drag(from: Place, to: Place): Promise<void> {
     const [x0, y0] = await this.pixel(from);

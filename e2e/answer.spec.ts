@@ -1,0 +1,86 @@
+import { type Page, expect, test } from '@playwright/test';
+import { AnswerStrip, DrawingBoard } from './drawing';
+import { CaseDesk, OpenCase } from './keeping';
+
+/** A copy of an example, open, so that tests do not disturb each other. */
+async function copyOf(
+  page: Page,
+  title: string,
+): Promise<{ board: DrawingBoard; answer: AnswerStrip; open: OpenCase }> {
+  const desk = new CaseDesk(page);
+  await desk.open();
+  await desk.duplicate(title);
+  await page.waitForURL(/\/cases\/.+/);
+  const [board, answer, open] = [new DrawingBoard(page), new AnswerStrip(page), new OpenCase(page)];
+  await open.ready();
+  await board.ready();
+  await answer.settled();
+  return { board, answer, open };
+}
+
+const JUNCTION = 'Angled contact at a junction';
+const field = (page: Page, path: string) => page.locator(`[id="field-${path}"]`);
+
+test('the answer follows a drag while it is under way, and settles after it', async ({ page }) => {
+  const { board, answer } = await copyOf(page, JUNCTION);
+  const before = await answer.root().textContent();
+  await board.press([2.35, 1.63]); // the handle ahead of the nose of B
+  await board.moveTo([1.4, 2.1]);
+  await expect(answer.root()).toHaveAttribute('data-status', 'live');
+  await board.letGo();
+  await answer.settled();
+  expect(await answer.root().textContent()).not.toBe(before);
+});
+
+test('what is drawn stands in the ledger, what is typed stands on the board, and undo takes both back', async ({
+  page,
+}) => {
+  const { board, open } = await copyOf(page, JUNCTION);
+  const x = field(page, 'impact.A.x');
+  await expect(x).toHaveValue('\u22122.05 ± 0.08');
+  await board.drag([-3.2, 0.9], [-3.7, 0.9]);
+  await expect(x).toHaveValue('\u22122.55 ± 0.08');
+  await x.fill('-8 ft 6 in');
+  await x.press('Enter');
+  await expect(x).toHaveValue('\u22122.5908 ± 0.08');
+  await expect(board.thing(/^Vehicle A/)).toHaveAccessibleName(/mass centre at \u22122\.59/);
+  await open.undo().click();
+  await open.undo().click();
+  await expect(x).toHaveValue('\u22122.05 ± 0.08');
+});
+
+test('an entry that cannot be read says why, and the last good value stays in force', async ({ page }) => {
+  const { answer } = await copyOf(page, JUNCTION);
+  const mass = field(page, 'vehicles.A.mass');
+  const before = await mass.inputValue();
+  await mass.fill('12 furlong');
+  await mass.press('Enter');
+  await expect(page.getByRole('alert').filter({ hasText: 'furlong' })).toContainText('is no unit known here');
+  await expect(mass).toHaveAttribute('aria-invalid', 'true');
+  await expect(answer.root()).toHaveAttribute('data-status', 'settled');
+  await mass.press('Escape');
+  await expect(mass).toHaveValue(before);
+});
+
+test('work beyond half a second shows its progress and can be cancelled', async ({ page }) => {
+  const { answer } = await copyOf(page, JUNCTION);
+  const draws = page.getByRole('textbox', { name: 'Draws' });
+  await draws.fill('5000000');
+  await draws.press('Enter');
+  await expect(answer.root().getByRole('progressbar')).toBeVisible();
+  await answer.root().getByRole('button', { name: 'Cancel' }).click();
+  await expect(answer.root()).toHaveAttribute('data-status', 'cancelled');
+  await draws.fill('20000');
+  await draws.press('Enter');
+  await answer.settled();
+});
+
+test('a failing check withholds the figures and says why', async ({ page }) => {
+  const { answer } = await copyOf(page, JUNCTION);
+  const direction = field(page, 'approach.B.direction');
+  await direction.fill('4');
+  await direction.press('Enter');
+  await answer.settled();
+  await expect(answer.root()).toContainText('withheld');
+  await expect(answer.root()).toContainText('nearly in line');
+});

@@ -23,13 +23,13 @@ const field = (page: Page, path: string) => page.locator(`[id="field-${path}"]`)
 
 test('the answer follows a drag while it is under way, and settles after it', async ({ page }) => {
   const { board, answer } = await copyOf(page, JUNCTION);
-  const before = await answer.root().textContent();
+  const before = await answer.strip().textContent();
   await board.press([2.35, 1.63]); // the handle ahead of the nose of B
   await board.moveTo([1.4, 2.1]);
-  await expect(answer.root()).toHaveAttribute('data-status', 'live');
+  await expect(answer.state()).toHaveAttribute('data-status', 'live');
   await board.letGo();
   await answer.settled();
-  expect(await answer.root().textContent()).not.toBe(before);
+  expect(await answer.strip().textContent()).not.toBe(before);
 });
 
 test('what is drawn stands in the ledger, what is typed stands on the board, and undo takes both back', async ({
@@ -57,7 +57,7 @@ test('an entry that cannot be read says why, and the last good value stays in fo
   await mass.press('Enter');
   await expect(page.getByRole('alert').filter({ hasText: 'furlong' })).toContainText('is no unit known here');
   await expect(mass).toHaveAttribute('aria-invalid', 'true');
-  await expect(answer.root()).toHaveAttribute('data-status', 'settled');
+  await expect(answer.state()).toHaveAttribute('data-status', 'settled');
   await mass.press('Escape');
   await expect(mass).toHaveValue(before);
 });
@@ -67,9 +67,9 @@ test('work beyond half a second shows its progress and can be cancelled', async 
   const draws = page.getByRole('textbox', { name: 'Draws' });
   await draws.fill('5000000');
   await draws.press('Enter');
-  await expect(answer.root().getByRole('progressbar')).toBeVisible();
-  await answer.root().getByRole('button', { name: 'Cancel' }).click();
-  await expect(answer.root()).toHaveAttribute('data-status', 'cancelled');
+  await expect(answer.strip().getByRole('progressbar')).toBeVisible();
+  await answer.strip().getByRole('button', { name: 'Cancel' }).click();
+  await expect(answer.state()).toHaveAttribute('data-status', 'cancelled');
   await draws.fill('20000');
   await draws.press('Enter');
   await answer.settled();
@@ -81,6 +81,6 @@ test('a failing check withholds the figures and says why', async ({ page }) => {
   await direction.fill('4');
   await direction.press('Enter');
   await answer.settled();
-  await expect(answer.root()).toContainText('withheld');
-  await expect(answer.root()).toContainText('nearly in line');
+  await expect(answer.strip()).toContainText('withheld');
+  await expect(answer.strip()).toContainText('nearly in line');
 });

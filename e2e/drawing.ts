@@ -58,10 +58,13 @@ export class DrawingBoard {
 export class AnswerStrip {
   constructor(readonly page: Page) {}
 
-  root = (): Locator => this.page.locator('[data-status]').first();
+  /** All of it. */
+  strip = (): Locator => this.page.getByRole('region', { name: 'Answer', exact: true });
+  /** The line that says how the answer stands. */
+  state = (): Locator => this.page.locator('[data-status]').first();
 
   async settled(): Promise<void> {
-    await expect(this.root()).toHaveAttribute('data-status', 'settled', { timeout: 20_000 });
+    await expect(this.state()).toHaveAttribute('data-status', 'settled', { timeout: 20_000 });
   }
 
   /** The result file, as the page saves it. */

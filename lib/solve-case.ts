@@ -49,9 +49,9 @@ export async function solveCase(casefile: CaseFile, options: SolveOptions = {}):
   const missing = notYetSolved(casefile, method);
   if (missing) return { kind: 'unsolved', reason: missing };
 
-  const problem = readEvidence(casefile, method as SolvedMethod, options.seed ?? analysis.seed ?? DEFAULT_SEED);
-  const central = solveCentral(problem);
-  const refusal = refusalOf(problem, central);
+  const asked = readEvidence(casefile, method as SolvedMethod, options.seed ?? analysis.seed ?? DEFAULT_SEED);
+  const central = solveCentral(asked);
+  const refusal = refusalOf(central);
   if (refusal) return { kind: 'unsolved', reason: refusal };
 
   const settings = {
@@ -59,6 +59,6 @@ export async function solveCase(casefile: CaseFile, options: SolveOptions = {}):
     coverage: analysis.coverage ?? DEFAULT_COVERAGE,
     traced: options.sensitivity === false ? [] : [...HEADLINES],
   };
-  const solution = await solve(problem, central, settings, options.run ?? runOn([here]), options.onProgress);
+  const solution = await solve(central, settings, options.run ?? runOn([here]), options.onProgress);
   return { kind: 'solved', ...summarise(casefile, solution, settings.coverage) };
 }

@@ -14,7 +14,7 @@ import styles from './board.module.css';
 
 /** The numbers that place the selected thing: what the board draws of it. */
 const PLACES =
-  /^(impact\.[AB]\.(x|y|heading)|impact\.point\.[xy]|impact\.plane|approach\.[AB]\.direction|departure\.[AB]\.direction|departure\.[AB]\.legs\.\d+\.distance)$/;
+  /^(impact\.[AB]\.(x|y|heading)|impact\.point\.[xy]|impact\.plane|approach\.[AB]\.direction|departure\.[AB]\.direction|departure\.[AB]\.rest\.(x|y|heading)|departure\.[AB]\.legs\.\d+\.distance)$/;
 
 function fieldsOfThing(casefile: CaseFile, thing: ThingId): Field[] {
   const all = fieldsOf(casefile).filter(({ path }) => PLACES.test(path) && isQuantity(nodeAt(casefile, path)));

@@ -6,6 +6,9 @@ import type { Answer } from './answer';
 
 /** Draws while a gesture is under way: coarse, and said to be. */
 const LIVE_DRAWS = 2048;
+/** The same where the travel of a vehicle is simulated: every draw is a search. */
+const LIVE_SIMULATED = 64;
+const isSimulated = ({ departure: { A, B } }: CaseFile): boolean => A?.kind === 'spin' || B?.kind === 'spin';
 /** Rest after the last edit before all draws are made, ms. */
 const REST = 80;
 /** A solve that takes longer shows its progress, ms. */
@@ -68,7 +71,11 @@ export function startAnswering(session: Session, pool: WorkerPool, show: (answer
       while (liveWanted) {
         const of: CaseFile = liveWanted;
         liveWanted = null;
-        settle(await pool.solve(of, { draws: LIVE_DRAWS, sensitivity: false }).outcome, of, 'live');
+        settle(
+          await pool.solve(of, { draws: isSimulated(of) ? LIVE_SIMULATED : LIVE_DRAWS, sensitivity: false }).outcome,
+          of,
+          'live',
+        );
       }
     } catch (error) {
       fail(error);

@@ -2,8 +2,15 @@
 import { Plus, Trash2 } from 'lucide-react';
 import { useSession } from '@/components/hooks/use-session';
 import buttons from '@/components/ui/button.module.css';
-import { defaultDeparture, defaultLeg } from '@/lib/casefile/defaults';
-import type { VehicleId } from '@/lib/casefile/schema';
+import {
+  LEVEL_SLOPE,
+  defaultDeparture,
+  defaultLeg,
+  defaultSpin,
+  wheelsApart,
+  wheelsTogether,
+} from '@/lib/casefile/defaults';
+import type { CaseFile, Departure, SpinDeparture, VehicleId } from '@/lib/casefile/schema';
 import { focusNext } from './focus-next';
 import { LedgerMark } from './ledger-mark';
 import styles from './ledger.module.css';
@@ -12,10 +19,18 @@ import styles from './ledger.module.css';
 const FIRST = 5;
 const NEXT = 2;
 
-/** Adds and takes away the travel of a vehicle and its legs. */
+/** A rest pose straight ahead of the pose at contact, to begin with. */
+function restAhead({ x, y, heading }: CaseFile['impact']['A']): Departure {
+  const turn = (heading.value * Math.PI) / 180;
+  const place = (from: number, along: number): number => Number((from + FIRST * along).toFixed(2));
+  return defaultSpin(place(x.value, Math.cos(turn)), place(y.value, Math.sin(turn)), heading.value);
+}
+
+/** Adds and takes away the travel of a vehicle: its legs, or its rest pose. */
 export function LedgerTravel({ id, mark }: { id: VehicleId; mark: string | null }) {
   const departure = useSession((s) => s.casefile.departure[id] ?? null);
-  const heading = useSession((s) => s.casefile.impact[id].heading.value);
+  const pose = useSession((s) => s.casefile.impact[id]);
+  const heading = pose.heading.value;
   const edit = useSession((s) => s.edit);
   if (!departure)
     return (
@@ -36,12 +51,19 @@ export function LedgerTravel({ id, mark }: { id: VehicleId; mark: string | null 
         >
           <Plus aria-hidden size={14} /> Add the travel of {id}
         </button>
+        <button
+          type="button"
+          className={buttons.quiet}
+          onClick={() => {
+            edit(`add the rest pose of ${id}`, { do: 'set', path: `departure.${id}`, to: restAhead(pose) });
+            focusNext(`field-departure.${id}.rest.x`);
+          }}
+        >
+          <Plus aria-hidden size={14} /> Add the rest pose of {id}
+        </button>
       </div>
     );
-  if (departure.kind === 'spin')
-    return (
-      <p className={styles.note}>Travel simulated to rest is kept in the file; this version does not solve it yet.</p>
-    );
+  if (departure.kind === 'spin') return <RestTools id={id} spin={departure} />;
   const { legs } = departure;
   return (
     <div className={styles.tools}>
@@ -90,6 +112,32 @@ export function LedgerTravel({ id, mark }: { id: VehicleId; mark: string | null 
       >
         <Trash2 aria-hidden size={14} /> Take away the travel
       </button>
+    </div>
+  );
+}
+
+/** What can be said of travel that is simulated to a measured rest pose. */
+function RestTools({ id, spin }: { id: VehicleId; spin: SpinDeparture }) {
+  const edit = useSession((s) => s.edit);
+  const at = `departure.${id}`;
+  const together = 'all' in spin.wheels;
+  const tool = (words: string, path: string, to: unknown) => (
+    <button
+      type="button"
+      className={buttons.quiet}
+      aria-label={`${words}, ${id}`}
+      onClick={() => edit(`${words.toLowerCase()} (${id})`, { do: 'set', path, to })}
+    >
+      {words}
+    </button>
+  );
+  return (
+    <div className={styles.tools}>
+      {together
+        ? tool('State each wheel', `${at}.wheels`, wheelsApart(spin.wheels))
+        : tool('One braking for all wheels', `${at}.wheels`, wheelsTogether(spin.wheels))}
+      {spin.slope ? tool('Level ground', `${at}.slope`, null) : tool('State a slope', `${at}.slope`, LEVEL_SLOPE)}
+      {tool('Take away the travel', at, null)}
     </div>
   );
 }

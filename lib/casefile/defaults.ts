@@ -1,4 +1,4 @@
-import type { CaseFile, Departure, Leg, Quantity, Vehicle } from './schema';
+import type { CaseFile, Departure, Leg, Quantity, SpinDeparture, Vehicle } from './schema';
 
 /** The source of a value that nobody has touched; shown and printed as such. */
 export const DEFAULT_SOURCE = 'default, not measured';
@@ -68,6 +68,32 @@ export const defaultDeparture = (direction: number, distance: number): Departure
   legs: [defaultLeg(distance)],
 });
 
+/** Travel simulated to a rest pose (m, deg): half braked all round on dry asphalt, until somebody looks. */
+export const defaultSpin = (x: number, y: number, heading: number): Departure => ({
+  kind: 'spin',
+  rest: { x: drawnQuantity(x, 0.1), y: drawnQuantity(y, 0.1), heading: drawnQuantity(heading, 2) },
+  friction: normal(0.74, 0.06),
+  slope: null,
+  onset: null,
+  wheels: { all: { braking: rectangular(0.5, 0.2, 0.8) } },
+});
+
+/** A slope to begin with: level, rising along +x. */
+export const LEVEL_SLOPE = { grade: normal(0, 0.003), uphill: normal(0, 5) };
+
+type Wheels = SpinDeparture['wheels'];
+
+/** The one braking of all wheels, stated for each, straight ahead. */
+export function wheelsApart(wheels: Wheels): Wheels {
+  if (!('all' in wheels)) return wheels;
+  const wheel = { braking: wheels.all.braking, steer: fixed(0) };
+  return { frontLeft: wheel, frontRight: wheel, rearLeft: wheel, rearRight: wheel };
+}
+
+/** The braking of the front left wheel, for all. */
+export const wheelsTogether = (wheels: Wheels): Wheels =>
+  'all' in wheels ? wheels : { all: { braking: wheels.frontLeft.braking } };
+
 /** The value that a quantity starts from when it is added to a case (SI, deg). */
 export function startingQuantity(path: string): Quantity {
   const key = path.slice(path.lastIndexOf('.') + 1);
@@ -80,6 +106,7 @@ export function startingQuantity(path: string): Quantity {
     direction: normal(0, 4),
     speed: normal(5, 1),
     yawRate: normal(0, 10),
+    onset: rectangular(0.5, 0, 1),
     slip: normal(0, 1),
     yawInertia: normal(2200, 160),
     forward: normal(0, 0.5),

@@ -1,6 +1,6 @@
 import type { Dimension } from '@/lib/units/dimension';
 import { nodeAt } from './quantities';
-import type { CaseFile, VehicleId } from './schema';
+import type { CaseFile, SpinDeparture, VehicleId } from './schema';
 import { VEHICLE_IDS } from './schema';
 
 /**
@@ -118,7 +118,8 @@ function poseFields(id: VehicleId): Field[] {
 
 function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
   const departure = casefile.departure[id];
-  if (departure?.kind !== 'legs') return [];
+  if (departure?.kind === 'spin') return spinFields(departure, id);
+  if (!departure) return [];
   const group: GroupId = `after.${id}`;
   const at = `departure.${id}`;
   const whole: Line[] = [
@@ -136,6 +137,35 @@ function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
 
 /** Parts of a case that stand for a group of rows, not for one. */
 const WHOLE_GROUPS: Record<string, string> = { 'departure.A': 'After contact, A', 'departure.B': 'After contact, B' };
+
+const WHEELS = [
+  ['frontLeft', 'front left'],
+  ['frontRight', 'front right'],
+  ['rearLeft', 'rear left'],
+  ['rearRight', 'rear right'],
+] as const;
+
+function spinFields({ wheels, slope }: SpinDeparture, id: VehicleId): Field[] {
+  const group: GroupId = `after.${id}`;
+  const at = `departure.${id}`;
+  const row = (key: string, label: string, dimension: Dimension, optional?: 'optional'): Field =>
+    field(`${at}.${key}`, [key, label, dimension, optional], group, `rest.${id}`);
+  const each = WHEELS.flatMap(([wheel, words]) => [
+    row(`wheels.${wheel}.braking`, `Braking share, ${words}`, 'ratio'),
+    row(`wheels.${wheel}.steer`, `Steer, ${words}`, 'angle'),
+  ]);
+  return [
+    row('rest.x', 'Mass centre at rest, x', 'length'),
+    row('rest.y', 'Mass centre at rest, y', 'length'),
+    row('rest.heading', 'Heading at rest', 'angle'),
+    row('friction', 'Friction', 'ratio'),
+    ...('all' in wheels ? [row('wheels.all.braking', 'Braking share, all wheels', 'ratio')] : each),
+    row('onset', 'Onset of braking after contact', 'time', 'optional'),
+    ...(slope
+      ? [row('slope.grade', 'Grade of the slope', 'ratio'), row('slope.uphill', 'Direction uphill', 'angle')]
+      : []),
+  ];
+}
 
 /** The words for the value at a path, for checks and refusals; the path itself where no row has it. */
 export function labelOf(casefile: CaseFile, path: string): string {

@@ -83,10 +83,13 @@ const legSchema = z
 
 const wheelSchema = z.strictObject({ braking: shareQuantity, steer: anyQuantity }).meta({ id: 'Wheel' });
 
-const wheelsSchema = z.union([
-  z.strictObject({ all: z.strictObject({ braking: shareQuantity }) }),
-  z.strictObject({ frontLeft: wheelSchema, frontRight: wheelSchema, rearLeft: wheelSchema, rearRight: wheelSchema }),
-]);
+const fourWheelsSchema = z.strictObject({
+  frontLeft: wheelSchema,
+  frontRight: wheelSchema,
+  rearLeft: wheelSchema,
+  rearRight: wheelSchema,
+});
+const wheelsSchema = z.union([z.strictObject({ all: z.strictObject({ braking: shareQuantity }) }), fourWheelsSchema]);
 
 const legsDeparture = z.strictObject({
   kind: z.literal('legs'),
@@ -195,6 +198,8 @@ export type Spread = z.infer<typeof spreadSchema>;
 export type Vehicle = z.infer<typeof vehicleSchema>;
 export type Departure = z.infer<typeof departureSchema>;
 export type LegsDeparture = z.infer<typeof legsDeparture>;
+export type SpinDeparture = z.infer<typeof spinDeparture>;
+export type FourWheels = z.infer<typeof fourWheelsSchema>;
 export type Leg = z.infer<typeof legSchema>;
 export type Damage = z.infer<typeof damageSchema>;
 export type Method = (typeof METHODS)[number];

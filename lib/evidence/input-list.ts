@@ -23,6 +23,12 @@ export class InputList {
     return this.add(inputOf(path, quantity, RADIANS_PER_DEGREE));
   }
 
+  /** As si, for a quantity that several parts of the problem use: one input, one slot. */
+  shared(path: string, quantity: Quantity): Slot {
+    const known = this.inputs.findIndex((input) => input.path === path);
+    return known >= 0 ? known : this.si(path, quantity);
+  }
+
   /** As si, where the case states the quantity. */
   siIf(path: string, quantity: Quantity | null | undefined): Slot | null {
     return quantity ? this.si(path, quantity) : null;

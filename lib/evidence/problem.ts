@@ -24,10 +24,46 @@ export interface LegSlots {
 }
 
 export interface LegsSlots {
+  kind: 'legs';
   direction: Slot;
   yawRate: Slot | null;
   endSpeed: Slot;
   legs: LegSlots[];
+}
+
+/** A velocity and a yaw rate at separation in the axes of the heading at contact, m/s and rad/s. */
+export interface LocalSeparation {
+  forward: number;
+  left: number;
+  w: number;
+}
+
+/** Where a search for a separation begins: the central one, and how it answers to the rest pose. */
+export interface SpinStart extends LocalSeparation {
+  /** Rest less contact of the central values: m in the axes of the heading at contact, and the turn, rad. */
+  reach: [number, number, number];
+  /** Change of (forward, left, w) with the reach: the inverse of the Jacobian of the simulation, by rows. */
+  inverse: number[][];
+}
+
+/** Travel simulated to rest. */
+export interface SpinSlots {
+  kind: 'spin';
+  restX: Slot;
+  restY: Slot;
+  restHeading: Slot;
+  friction: Slot;
+  onset: Slot | null;
+  grade: Slot | null;
+  uphill: Slot | null;
+  /** Front left, front right, rear left, rear right; one slot may serve all. */
+  braking: Slot[];
+  steer: (Slot | null)[];
+  /** m, fixed. */
+  track: number;
+  surfaces: { outline: [number, number][]; friction: Slot }[];
+  /** Filled in once the central values are solved. */
+  start: SpinStart | null;
 }
 
 /** Residual crush of one vehicle. */
@@ -55,7 +91,7 @@ export interface VehicleSlots {
   /** Inputs of the method directions; results of the method restitution. */
   approachDirection: Slot | null;
   approachYawRate: Slot | null;
-  departure: LegsSlots;
+  departure: LegsSlots | SpinSlots;
   /** null without any residual depth: that bounds the energy from above and gives no estimate. */
   damage: DamageSlots | null;
 }

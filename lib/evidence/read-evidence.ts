@@ -1,5 +1,5 @@
 import type { Issue } from '@/lib/casefile/issue';
-import { type CaseFile, type Method, VEHICLE_IDS } from '@/lib/casefile/schema';
+import { type CaseFile, type Method } from '@/lib/casefile/schema';
 import { InputList } from './input-list';
 import type { Problem, SolvedMethod } from './problem';
 import { readVehicle } from './read-vehicle';
@@ -12,12 +12,6 @@ export function notYetSolved(casefile: CaseFile, method: Method): Issue | null {
       path: 'analysis.contact',
       says: 'this version does not solve the contact lasting yet: choose instant',
     };
-  for (const id of VEHICLE_IDS)
-    if (casefile.departure[id]?.kind === 'spin')
-      return {
-        path: `departure.${id}.kind`,
-        says: 'this version does not simulate travel to rest (spin) yet: enter the travel as legs',
-      };
   return null;
 }
 

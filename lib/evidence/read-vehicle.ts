@@ -1,8 +1,16 @@
 import { supportOf } from '@/lib/casefile/quantities';
-import type { CaseFile, Damage, LegsDeparture, VehicleId } from '@/lib/casefile/schema';
+import type {
+  CaseFile,
+  Damage,
+  FourWheels,
+  LegsDeparture,
+  Quantity,
+  SpinDeparture,
+  VehicleId,
+} from '@/lib/casefile/schema';
 import { YAW_INERTIA_RELATIVE_SD } from '@/lib/mechanics/inertia';
 import { type InputList, inputOf } from './input-list';
-import type { DamageSlots, Input, LegsSlots, SolvedMethod, VehicleSlots } from './problem';
+import type { DamageSlots, Input, LegsSlots, SolvedMethod, SpinSlots, VehicleSlots } from './problem';
 
 /** What the method uses of one vehicle: itself, its pose, its approach, its travel and its damage. */
 export function readVehicle(list: InputList, casefile: CaseFile, method: SolvedMethod, id: VehicleId): VehicleSlots {
@@ -23,7 +31,7 @@ export function readVehicle(list: InputList, casefile: CaseFile, method: SolvedM
     heading: list.angle(`impact.${id}.heading`, pose.heading),
     approachDirection: crossing ? list.angleIf(`approach.${id}.direction`, approach.direction) : null,
     approachYawRate: crossing ? list.angle(`approach.${id}.yawRate`, approach.yawRate) : null,
-    departure: readLegs(list, casefile.departure[id] as LegsDeparture, `departure.${id}`),
+    departure: readDeparture(list, casefile, id),
     damage: readDamage(list, casefile.damage?.[id], `damage.${id}`),
   };
 }
@@ -42,7 +50,41 @@ function massCentre(path: string, spec: CaseFile['vehicles']['A']): Input {
   return { ...input, support: { ...input.support, high: spec.wheelbase } };
 }
 
+function readDeparture(list: InputList, casefile: CaseFile, id: VehicleId): LegsSlots | SpinSlots {
+  const departure = casefile.departure[id];
+  if (departure?.kind === 'spin') return readSpin(list, casefile, departure, id);
+  return readLegs(list, departure as LegsDeparture, `departure.${id}`);
+}
+
+const WHEELS = ['frontLeft', 'frontRight', 'rearLeft', 'rearRight'] as const;
+
+function readSpin(list: InputList, casefile: CaseFile, spin: SpinDeparture, id: VehicleId): SpinSlots {
+  const at = `departure.${id}`;
+  const { rest, wheels } = spin;
+  const all = 'all' in wheels ? list.si(`${at}.wheels.all.braking`, wheels.all.braking) : null;
+  const each = 'all' in wheels ? null : wheels;
+  return {
+    kind: 'spin',
+    restX: list.si(`${at}.rest.x`, rest.x as Quantity),
+    restY: list.si(`${at}.rest.y`, rest.y as Quantity),
+    restHeading: list.angle(`${at}.rest.heading`, rest.heading as Quantity),
+    friction: list.si(`${at}.friction`, spin.friction),
+    onset: list.siIf(`${at}.onset`, spin.onset),
+    grade: list.siIf(`${at}.slope.grade`, spin.slope?.grade),
+    uphill: list.angleIf(`${at}.slope.uphill`, spin.slope?.uphill),
+    braking: WHEELS.map((w) => all ?? list.si(`${at}.wheels.${w}.braking`, (each as FourWheels)[w].braking)),
+    steer: WHEELS.map((w) => (each ? list.angle(`${at}.wheels.${w}.steer`, each[w].steer) : null)),
+    track: casefile.vehicles[id].track,
+    surfaces: (casefile.scene?.surfaces ?? []).map(({ outline, friction }, k) => ({
+      outline,
+      friction: list.shared(`scene.surfaces.${k}.friction`, friction),
+    })),
+    start: null,
+  };
+}
+
 const readLegs = (list: InputList, { direction, yawRate, endSpeed, legs }: LegsDeparture, at: string): LegsSlots => ({
+  kind: 'legs',
   direction: list.angle(`${at}.direction`, direction),
   yawRate: list.angleIf(`${at}.yawRate`, yawRate),
   endSpeed: list.si(`${at}.endSpeed`, endSpeed),

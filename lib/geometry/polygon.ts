@@ -56,3 +56,13 @@ export function overlapDepth(a: readonly Point[], b: readonly Point[]): number {
 /** For each edge of `a`, how far all of `b` lies beyond it. */
 const gapsBeyond = (a: readonly Point[], b: readonly Point[]): number[] =>
   edges(a).map(({ normal, from }) => Math.min(...b.map((p) => along(normal, p, from))));
+
+/** Whether a polygon of any shape holds a point: an odd number of its edges lie to the right of it. */
+export function holds(polygon: readonly Point[], [x, y]: Point): boolean {
+  let inside = false;
+  for (let i = 0, j = polygon.length - 1; i < polygon.length; j = i++) {
+    const [[xi, yi], [xj, yj]] = [polygon[i], polygon[j]];
+    if (yi > y !== yj > y && x < ((xj - xi) * (y - yi)) / (yj - yi) + xi) inside = !inside;
+  }
+  return inside;
+}

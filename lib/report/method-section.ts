@@ -11,13 +11,13 @@ export const METHOD_WORDS: Record<Method, string> = {
 
 const HOW: Record<Method, string[]> = {
   directions: [
-    'Each vehicle is taken from the end of its travel back to separation, leg by leg, by the work of friction and grade.',
+    'Each vehicle is taken from the end of its travel back to separation: over legs by the work of friction and grade; where a rest pose is stated, by the separation whose simulated travel on four wheels leads to it.',
     'The momentum of the pair after contact equals that before it. With both directions of approach known, its two components give the two approach speeds.',
     'The change of momentum of one vehicle is the impulse. Split along the contact plane and its normal it gives the impulse ratio; the motion of the contact point before and after gives closing speed and restitution; both together give the energy lost.',
     'Yaw rates after contact are used as measured where they were measured; the rates that the impulse predicts are held against them by a check.',
   ],
   restitution: [
-    'Each vehicle is taken from the end of its travel back to separation, leg by leg, by the work of friction and grade.',
+    'Each vehicle is taken from the end of its travel back to separation: over legs by the work of friction and grade; where a rest pose is stated, by the separation whose simulated travel on four wheels leads to it.',
     'The speed at which the contact points part, divided by the restitution, is the speed at which they closed. With the stated impulse ratio that fixes the impulse.',
     'The impulse takes each vehicle from its motion after contact back to its motion before. Directions of approach and yaw rates before contact are results here, to be held against the road.',
   ],

@@ -1,4 +1,6 @@
 import { tyreShareOf } from '@/lib/evidence/tyre-share';
+import { VEHICLE_IDS } from '@/lib/casefile/schema';
+import { atan2, hypot } from '@/lib/numerics/elementary';
 import { peakAcceleration } from '@/lib/mechanics/pulse';
 import type { Solution } from '@/lib/solve/solve';
 import type { Result } from './result';
@@ -30,11 +32,28 @@ export function moreOf(solution: Solution): Result['more'] {
     angularMomentumAfter: angularMomentum(solution, 'after'),
     tyreShare: tyreShareOf(problem, figures.impulse) ?? undefined,
   };
-  return Object.fromEntries(
-    Object.entries(more).filter(([, value]) =>
-      [value].flat().every((x) => typeof x === 'number' && Number.isFinite(x)),
-    ),
+  const finite = Object.entries(more).filter(([, value]) =>
+    [value].flat().every((x) => typeof x === 'number' && Number.isFinite(x)),
   );
+  return { ...Object.fromEntries(finite), ...separationsOf(solution) };
+}
+
+/** Every separation that leads to a measured rest pose, that answered first. */
+function separationsOf({ central: { spins } }: Solution): Result['more'] {
+  const all = VEHICLE_IDS.flatMap((id) => {
+    const found = spins[id];
+    if (!found) return [];
+    const listed = [found.separations, found.otherTurns].flatMap((inversions, k) =>
+      inversions.map(({ separation: { vx, vy, w } }) => ({
+        speed: hypot(vx, vy),
+        direction: atan2(vy, vx) * DEGREES_PER_RADIAN,
+        yawRate: w * DEGREES_PER_RADIAN,
+        otherTurn: k === 1,
+      })),
+    );
+    return [[`${id}.separations`, listed] as const];
+  });
+  return Object.fromEntries(all);
 }
 
 /** About the contact point, kg m^2/s; after contact with the yaw rates that the impulse predicts. */

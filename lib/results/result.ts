@@ -36,6 +36,9 @@ export const checkSchema = z
   })
   .meta({ id: 'Check' });
 
+/** A separation velocity, m/s and deg, and yaw rate, deg/s. */
+const separationSchema = z.strictObject({ speed: number, direction: number, yawRate: number, otherTurn: z.boolean() });
+
 const named = z.record(z.string(), number);
 const bands = z.record(z.string(), bandSchema);
 const seatResult = z.strictObject({ name: z.string(), central: named, bands });
@@ -77,6 +80,9 @@ export const resultSchema = z
       /** Yaw rate after contact that the impulse predicts from that before, deg/s. */
       'A.predictedYawRate': number.optional(),
       'B.predictedYawRate': number.optional(),
+      /** Every separation found that leads to the measured rest pose, that answered first; `otherTurn`: with a full turn more or less. */
+      'A.separations': z.array(separationSchema).optional(),
+      'B.separations': z.array(separationSchema).optional(),
       /** Momentum (kg m/s) and angular momentum about the contact point (kg m^2/s), before and after. */
       momentumBefore: z.tuple([number, number]).optional(),
       momentumAfter: z.tuple([number, number]).optional(),

@@ -25,6 +25,9 @@ export type Grip =
   | { part: 'end'; which: Which }
   /** The line of a leg itself. */
   | { part: 'leg'; which: Which; leg: number }
+  /** A known rest pose. */
+  | { part: 'rest'; which: Which }
+  | { part: 'restTurn'; which: Which }
   | { part: 'mark'; index: number };
 
 const BOTH = ['A', 'B'] as const;
@@ -57,6 +60,8 @@ export function handlesOf(scene: Scene, speeds: Speeds): Handle[] {
 function handlesOfVehicle(scene: Scene, which: Which, speed: number | undefined): Handle[] {
   const tail = approachTail(scene, which, speed);
   const ends = pathOf(scene, which).slice(1);
+  const rest = scene.travel[which] ? null : scene.rest[which];
+  const ahead: Vec = [noseOf(scene.vehicles[which]) + TURN_REACH, 0];
   return [
     { grip: { part: 'turn', which }, at: turnHandle(scene, which) },
     ...(tail ? [{ grip: { part: 'approach', which } as const, at: tail }] : []),
@@ -64,6 +69,12 @@ function handlesOfVehicle(scene: Scene, which: Which, speed: number | undefined)
       grip: leg === ends.length - 1 ? { part: 'end', which } : { part: 'joint', which, leg },
       at,
     })),
+    ...(rest
+      ? [
+          { grip: { part: 'rest', which } as const, at: [rest.x, rest.y] as Vec },
+          { grip: { part: 'restTurn', which } as const, at: fromBody(ahead, rest) },
+        ]
+      : []),
   ];
 }
 

@@ -1,6 +1,13 @@
 import { defaultDeparture, drawnQuantity } from '@/lib/casefile/defaults';
 import type { ThingId } from '@/lib/casefile/fields';
-import { type CaseFile, type LegsDeparture, type Quantity, VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
+import {
+  type CaseFile,
+  type LegsDeparture,
+  type Quantity,
+  type SpinDeparture,
+  VEHICLE_IDS,
+  type VehicleId,
+} from '@/lib/casefile/schema';
 import type { NamedEdit } from './thing-edits';
 
 /** A thing of the board as an entry of a list that can be walked. */
@@ -60,7 +67,8 @@ function approachItem({ approach, impact }: CaseFile, id: VehicleId, say: Spoken
 
 function travelItems({ departure, impact }: CaseFile, id: VehicleId, say: Spoken): BoardItem[] {
   const travel = departure[id];
-  if (travel) return travel.kind === 'legs' ? statedTravel(travel, id, say) : [];
+  if (travel?.kind === 'spin') return [restItem(travel, id, say)];
+  if (travel) return statedTravel(travel, id, say);
   const to = defaultDeparture(impact[id].heading.value, STRAIGHT_ON);
   return [
     {
@@ -70,6 +78,13 @@ function travelItems({ departure, impact }: CaseFile, id: VehicleId, say: Spoken
       add: { label: `add the travel of ${id}`, edit: { do: 'set', path: `departure.${id}`, to } },
     },
   ];
+}
+
+function restItem({ rest }: SpinDeparture, id: VehicleId, say: Spoken): BoardItem {
+  const { x, y, heading } = rest;
+  const place = x && y ? `mass centre at ${say.length(x.value)}, ${say.length(y.value)}` : 'place not stated';
+  const turn = heading ? `heading ${say.angle(heading.value)}` : 'heading not stated';
+  return { thing: `rest.${id}`, name: `${id} at rest`, says: `Rest pose of ${id}, ${place}, ${turn}` };
 }
 
 function statedTravel({ direction, legs }: LegsDeparture, id: VehicleId, say: Spoken): BoardItem[] {

@@ -63,6 +63,9 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
       return value(`departure.${grip.which}.direction`, turn(centre(casefile, grip.which)));
     case 'mark':
       return markEdit(casefile, grip.index, by);
+    case 'rest':
+    case 'restTurn':
+      return restEdit(casefile, grip, by, to, coarse);
   }
 }
 
@@ -70,6 +73,24 @@ const moveEdit = (path: string, { x, y }: { x: Quantity; y: Quantity }, by: Vec)
   do: 'all',
   edits: [value(`${path}.x`, centimetres(x.value + by[0])), value(`${path}.y`, centimetres(y.value + by[1]))],
 });
+
+/** Moves or turns a known rest pose. Turning goes on from the heading as written: past 360° it is a full turn and more. */
+function restEdit(
+  casefile: CaseFile,
+  grip: Extract<Grip, { part: 'rest' | 'restTurn' }>,
+  by: Vec,
+  to: Vec,
+  coarse: boolean,
+): Edit {
+  const departure = casefile.departure[grip.which];
+  const at = `departure.${grip.which}.rest`;
+  if (departure?.kind !== 'spin') return { do: 'all', edits: [] };
+  const { x, y, heading } = departure.rest;
+  if (!x || !y || !heading) return { do: 'all', edits: [] };
+  if (grip.part === 'rest') return moveEdit(at, { x, y }, by);
+  const pointed = degreesOf(subtract(to, [x.value, y.value]), coarse);
+  return value(`${at}.heading`, tenths(heading.value + wrapped(pointed - heading.value)));
+}
 
 const centre = (casefile: CaseFile, which: Which): Vec => centreOf(sceneOf(casefile).vehicles[which]);
 
@@ -88,6 +109,7 @@ export function travelEdit(casefile: CaseFile, which: Which, to: Vec, coarse: bo
   const direction = degreesOf(way, coarse);
   const departure = casefile.departure[which];
   const reach = distance(way, [0, 0]);
+  if (departure?.kind === 'spin') return restPlaceEdit(which, to);
   if (departure?.kind !== 'legs')
     return {
       do: 'set',
@@ -104,6 +126,12 @@ export function travelEdit(casefile: CaseFile, which: Which, to: Vec, coarse: bo
     ],
   };
 }
+
+/** Where the travel is simulated, drawing it moves the rest pose. */
+const restPlaceEdit = (which: Which, [x, y]: Vec): Edit => ({
+  do: 'all',
+  edits: [value(`departure.${which}.rest.x`, centimetres(x)), value(`departure.${which}.rest.y`, centimetres(y))],
+});
 
 /** A leg like the last one, from its end to where the pointer lies along the path; null where there is no travel yet. */
 export function addLegEdit(casefile: CaseFile, which: Which, to: Vec): Edit | null {
@@ -165,6 +193,9 @@ export function thingOf(grip: Grip, scene: Scene): ThingId {
     case 'joint':
     case 'leg':
       return scene.travel[grip.which]?.legs.length === 1 ? `departure.${grip.which}` : `leg.${grip.which}.${grip.leg}`;
+    case 'rest':
+    case 'restTurn':
+      return `rest.${grip.which}`;
     case 'mark':
       return `mark.${grip.index}`;
     case 'end':
@@ -189,6 +220,10 @@ export function labelOfGrip(grip: Grip): string {
       return `legs of ${grip.which}`;
     case 'leg':
       return `direction of travel of ${grip.which}`;
+    case 'rest':
+      return `move ${grip.which} at rest`;
+    case 'restTurn':
+      return `turn ${grip.which} at rest`;
     case 'mark':
       return 'move a mark';
     case 'end':

@@ -41,6 +41,8 @@ function nudges(casefile: CaseFile, thing: ThingId, by: Nudge): Edit[] {
       const { direction } = casefile.approach[which];
       return direction ? turned(`approach.${which}.direction`, direction, by.turn) : [];
     }
+    case 'rest':
+      return restNudge(casefile, which, by);
     case 'mark':
       return by.step[0] === 0 && by.step[1] === 0 ? [] : [markEdit(casefile, Number(which), by.step)];
     default:
@@ -57,6 +59,16 @@ function contactNudge({ impact }: CaseFile, { step, turn }: Nudge): Edit[] {
   const { point, plane } = impact;
   const line: Edit = { do: 'value', path: 'impact.plane', value: asLine(tidy(plane.value + turn, 3)) };
   return [...placed('impact.point', point, step), ...(turn === 0 ? [] : [line])];
+}
+
+function restNudge({ departure }: CaseFile, which: VehicleId, { step, turn }: Nudge): Edit[] {
+  const travel = departure[which];
+  if (travel?.kind !== 'spin') return [];
+  const { x, y, heading } = travel.rest;
+  const at = `departure.${which}.rest`;
+  const turns: Edit[] =
+    heading && turn !== 0 ? [{ do: 'value', path: `${at}.heading`, value: tidy(heading.value + turn, 3) }] : [];
+  return [...(x && y ? placed(at, { x, y }, step) : []), ...turns];
 }
 
 /** Right and up lengthen a leg (the last one where the whole travel is meant), left and down shorten it; turns turn the whole travel. */

@@ -12,6 +12,8 @@ export function nameOf(thing: ThingId): string {
       return `the approach of ${which}`;
     case 'leg':
       return `leg ${Number(k) + 1} of ${which}`;
+    case 'rest':
+      return `the rest pose of ${which}`;
     case 'mark':
       return `mark ${Number(which) + 1}`;
     default:

@@ -4,9 +4,14 @@ import type { ImpactAnswer, ImpactState, Reason } from '@/lib/mechanics/impact-b
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
 import { type FigureName, columnOf, figuresOf } from './columns';
 import { Kernel } from './kernel';
+import { type SpinsFound, findSpins } from './spin-central';
 
 /** The answer with every input at its value. */
 export interface Central {
+  /** The problem, which knows where the draws of simulated travel begin. */
+  problem: Problem;
+  /** What was found for each vehicle whose travel is simulated. */
+  spins: SpinsFound;
   /** Why it is impossible, or null. */
   reason: Reason | null;
   /** Where the reason is `leg`: the vehicle and the leg, counted from 0. */
@@ -17,13 +22,17 @@ export interface Central {
   answer: ImpactAnswer;
 }
 
-export function solveCentral(problem: Problem): Central {
+/** Solves every input at its value, and first looks for the separations of simulated travel. */
+export function solveCentral(asked: Problem): Central {
+  const { problem, spins } = findSpins(asked);
   const kernel = new Kernel(problem);
   const reason = kernel.solveCentral();
   const figures = Object.fromEntries(
     figuresOf(problem).map((name) => [name, columnOf(kernel.columns, name)[0]]),
   ) as Central['figures'];
   return {
+    problem,
+    spins,
     reason,
     failingLeg: reason === 'leg' ? failingLeg(problem) : null,
     figures,
@@ -35,7 +44,9 @@ export function solveCentral(problem: Problem): Central {
 /** The first leg, going back from rest, whose start has no real speed: A before B. */
 function failingLeg({ inputs, vehicles }: Problem): Central['failingLeg'] {
   for (const vehicle of ['A', 'B'] as const) {
-    const { legs, endSpeed } = vehicles[vehicle].departure;
+    const { departure } = vehicles[vehicle];
+    if (departure.kind !== 'legs') continue;
+    const { legs, endSpeed } = departure;
     let squared = inputs[endSpeed].value ** 2;
     for (let leg = legs.length - 1; leg >= 0; leg--) {
       const { distance, friction, share, grade } = legs[leg];

@@ -1,4 +1,5 @@
-import type { DamageSlots, Problem, VehicleSlots } from '@/lib/evidence/problem';
+import type { VehicleId } from '@/lib/casefile/schema';
+import type { DamageSlots, LegsSlots, Problem, VehicleSlots } from '@/lib/evidence/problem';
 import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
 import { fillBlock } from '@/lib/numerics/spread';
 import {
@@ -17,6 +18,7 @@ import { closingSpeedFromWork, obliqueFactor, stripWork } from '@/lib/mechanics/
 import { estimatedYawInertia } from '@/lib/mechanics/inertia';
 import { meanAcceleration } from '@/lib/mechanics/pulse';
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
+import { DRAW_ERROR, separateDraw, targetOf } from './spin-travel';
 import { type VehicleColumns, type Columns, makeColumns } from './columns';
 
 /** Draws are made and solved in blocks of this many; draw k of an input depends on (seed, path, k) alone. */
@@ -24,6 +26,23 @@ export const BLOCK = 1024;
 
 /** A speed below this has no direction, m/s. */
 const STANDING = 1e-9;
+
+const LEG = 1 + REASONS.indexOf('leg');
+const NO_REST = 1 + REASONS.indexOf('noRest');
+
+/** Separation velocities and yaw rates of a block, SI; `lost` as in Kernel.reasons. */
+interface Travelled {
+  vx: Float64Array;
+  vy: Float64Array;
+  w: Float64Array;
+  lost: Uint8Array;
+}
+const freshTravel = (): Travelled => ({
+  vx: new Float64Array(BLOCK),
+  vy: new Float64Array(BLOCK),
+  w: new Float64Array(BLOCK),
+  lost: new Uint8Array(BLOCK),
+});
 
 /**
  * The one kernel: solves a block of draws, structure of arrays, nothing allocated per draw. The central answer is a
@@ -37,6 +56,9 @@ export class Kernel {
   readonly state: ImpactState = emptyState();
   readonly answer: ImpactAnswer = emptyAnswer();
   readonly inputs: Float64Array[];
+  private readonly own: Record<VehicleId, Travelled> = { A: freshTravel(), B: freshTravel() };
+  private travelled = { ...this.own };
+  private kept: Record<VehicleId, boolean> = { A: false, B: false };
 
   constructor(readonly problem: Problem) {
     this.inputs = problem.inputs.map((input) => new Float64Array(BLOCK).fill(input.value));
@@ -62,6 +84,18 @@ export class Kernel {
     return this.reasonOf(0);
   }
 
+  /** Takes the separation velocities of a vehicle from another kernel's last block, instead of finding them anew. */
+  keepTravel(id: VehicleId, from: Kernel): void {
+    this.travelled[id] = from.travelled[id];
+    this.kept[id] = true;
+  }
+
+  /** Finds the separation velocities of both vehicles anew again. */
+  forgetTravel(): void {
+    this.travelled = { ...this.own };
+    this.kept = { A: false, B: false };
+  }
+
   solve(count: number): void {
     for (let k = 0; k < count; k++) this.solveDraw(k);
   }
@@ -73,9 +107,9 @@ export class Kernel {
   private solveDraw(k: number): void {
     const { problem, state, answer } = this;
     const { A, B } = problem.vehicles;
-    const travelled = this.loadVehicle(k, A, state.A) && this.loadVehicle(k, B, state.B);
-    if (!travelled) {
-      this.reasons[k] = 1 + REASONS.indexOf('leg');
+    const lost = this.loadVehicle(k, 'A', A, state.A) || this.loadVehicle(k, 'B', B, state.B);
+    if (lost !== 0) {
+      this.reasons[k] = lost;
       return;
     }
     state.px = this.inputs[problem.pointX][k];
@@ -91,8 +125,39 @@ export class Kernel {
     this.write(k);
   }
 
-  /** Masses, pose and separation velocity of one vehicle. False where a leg has no real speed at its start. */
-  private loadVehicle(k: number, slots: VehicleSlots, vehicle: VehicleState): boolean {
+  /** All that is known of one vehicle. Answers why its travel cannot have been, as in `reasons`, or 0. */
+  private loadVehicle(k: number, id: VehicleId, slots: VehicleSlots, vehicle: VehicleState): number {
+    const { inputs } = this;
+    this.loadBody(k, slots, vehicle);
+    if (slots.approachDirection !== null) {
+      const direction = inputs[slots.approachDirection][k];
+      vehicle.hx = cos(direction);
+      vehicle.hy = sin(direction);
+    }
+    vehicle.wBefore = slots.approachYawRate === null ? 0 : inputs[slots.approachYawRate][k];
+    const travelled = this.travelled[id];
+    if (!this.kept[id]) this.findTravel(k, slots, vehicle, travelled);
+    vehicle.vx = travelled.vx[k];
+    vehicle.vy = travelled.vy[k];
+    vehicle.wMeasured = travelled.w[k];
+    return travelled.lost[k];
+  }
+
+  private findTravel(k: number, slots: VehicleSlots, vehicle: VehicleState, to: Travelled): void {
+    const { departure } = slots;
+    to.lost[k] =
+      departure.kind === 'legs'
+        ? this.loadLegs(k, departure, vehicle)
+        : separateDraw(targetOf(this.inputs, k, slots, departure, vehicle, DRAW_ERROR), departure, vehicle)
+          ? 0
+          : NO_REST;
+    to.vx[k] = vehicle.vx;
+    to.vy[k] = vehicle.vy;
+    to.w[k] = vehicle.wMeasured;
+  }
+
+  /** Mass, yaw inertia and place of one vehicle. */
+  loadBody(k: number, slots: VehicleSlots, vehicle: VehicleState): VehicleState {
     const { inputs } = this;
     const front = inputs[slots.frontAxleToMassCentre][k];
     const inertia = inputs[slots.yawInertia][k];
@@ -102,19 +167,13 @@ export class Kernel {
       : inertia;
     vehicle.x = inputs[slots.x][k];
     vehicle.y = inputs[slots.y][k];
-    if (slots.approachDirection !== null) {
-      const direction = inputs[slots.approachDirection][k];
-      vehicle.hx = cos(direction);
-      vehicle.hy = sin(direction);
-    }
-    vehicle.wBefore = slots.approachYawRate === null ? 0 : inputs[slots.approachYawRate][k];
-    vehicle.wMeasured = slots.departure.yawRate === null ? NaN : inputs[slots.departure.yawRate][k];
-    return this.loadTravel(k, slots, vehicle);
+    return vehicle;
   }
 
-  private loadTravel(k: number, slots: VehicleSlots, vehicle: VehicleState): boolean {
+  /** Separation velocity from legs. Not 0 where one has no real speed at its start. */
+  private loadLegs(k: number, { legs, endSpeed, direction, yawRate }: LegsSlots, vehicle: VehicleState): number {
     const { inputs } = this;
-    const { legs, endSpeed, direction } = slots.departure;
+    vehicle.wMeasured = yawRate === null ? NaN : inputs[yawRate][k];
     let squared = inputs[endSpeed][k] * inputs[endSpeed][k];
     for (let i = legs.length - 1; i >= 0; i--) {
       const leg = legs[i];
@@ -125,12 +184,12 @@ export class Kernel {
         inputs[leg.share][k],
         inputs[leg.grade][k],
       );
-      if (!(squared >= 0)) return false;
+      if (!(squared >= 0)) return LEG;
     }
     const speed = Math.sqrt(squared);
     vehicle.vx = speed * cos(inputs[direction][k]);
     vehicle.vy = speed * sin(inputs[direction][k]);
-    return true;
+    return 0;
   }
 
   private write(k: number): void {
@@ -204,7 +263,10 @@ export class Kernel {
         : inputs[slots.approachDirection][k];
     to.approachYawRate[k] = found.wBefore;
     to.departureSpeed[k] = after;
-    to.departureDirection[k] = after > STANDING ? inputs[slots.departure.direction][k] : NaN;
+    to.departureDirection[k] =
+      slots.departure.kind === 'legs' && after > STANDING
+        ? inputs[slots.departure.direction][k]
+        : directionOf(vehicle.vx, vehicle.vy, after);
     to.departureYawRate[k] = found.wAfter;
     to.deltaV[k] = deltaV;
     to.deltaVForward[k] = forward;

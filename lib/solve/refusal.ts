@@ -1,6 +1,6 @@
 import type { Issue } from '@/lib/casefile/issue';
 import { LEAST_RESTITUTION } from '@/lib/mechanics/impact-backwards';
-import type { Problem } from '@/lib/evidence/problem';
+import { VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
 import type { Central } from './central';
 
 /** sin of the angle between the approach paths below which they are exactly parallel to the last digits. */
@@ -10,8 +10,10 @@ const PARALLEL = 1e-9;
  * Why nothing can be computed from the central values (what the methods refuse, or the travel cannot have been), with
  * the path that it hangs on; null where there is an answer, if perhaps an impossible one that the checks speak of.
  */
-export function refusalOf(problem: Problem, central: Central): Issue | null {
-  const { reason, failingLeg, state, answer } = central;
+export function refusalOf(central: Central): Issue | null {
+  const { problem, reason, failingLeg, state, answer } = central;
+  const lost = VEHICLE_IDS.find((id) => central.spins[id]?.separations.length === 0);
+  if (lost) return restRefusal(lost, central);
   if (failingLeg) {
     const { vehicle, leg } = failingLeg;
     return {
@@ -37,4 +39,18 @@ export function refusalOf(problem: Problem, central: Central): Issue | null {
   if (reason === 'notFinite')
     return { path: 'vehicles', says: 'the figures are too large or too small to compute with' };
   return null;
+}
+
+/** No separation leads to the rest pose: it rolls on, or the wheels as stated cannot bring it there. */
+function restRefusal(id: VehicleId, { spins }: Central): Issue {
+  const nearest = spins[id]?.nearest;
+  if (!nearest)
+    return {
+      path: `departure.${id}`,
+      says: `vehicle ${id} does not come to rest: friction and braking as stated cannot hold it on this slope`,
+    };
+  return {
+    path: `departure.${id}.rest`,
+    says: `no separation velocity and yaw rate lead vehicle ${id} to its rest pose under the wheels as stated; the nearest that was found misses it by ${nearest.miss.toFixed(2)} (metres, a turn counted at one metre per radian): look at the braking, the steer, the friction and the rest heading (a full turn more is written as 360° more)`,
+  };
 }

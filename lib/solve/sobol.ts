@@ -1,4 +1,6 @@
+import { VEHICLE_IDS } from '@/lib/casefile/schema';
 import type { Problem } from '@/lib/evidence/problem';
+import { travelSlots } from '@/lib/evidence/travel-slots';
 import { type FigureName, columnOf } from './columns';
 import { BLOCK, Kernel } from './kernel';
 
@@ -17,27 +19,31 @@ const SET_B = ' (set B)';
  * First-order and total Sobol' indices of the given inputs by the estimators of Jansen (1999): with f(A), f(B) of two
  * independent sets of draws and f(AB) of set A with the one input taken from B,
  *   first = 1 - mean (f(B) - f(AB))^2 / 2V,   total = mean (f(A) - f(AB))^2 / 2V.
- * Rows where any of the three is an impossible draw are left out. `blocks` blocks of draws.
+ * Rows where any of the three is an impossible draw are left out. `rows` draws of each set.
  */
 export function sobolIndices(
   problem: Problem,
   slots: readonly number[],
-  blocks: number,
+  rows: number,
   figures: FigureName[],
 ): SobolIndices[] {
   const [a, b, ab] = [new Kernel(problem), new Kernel(problem), new Kernel(problem)];
   a.inputs.forEach((column, slot) => (ab.inputs[slot] = column));
   const sums = slots.map(() => figures.map(() => new Sums()));
-  for (let block = 0; block < blocks; block++) {
-    a.draw(block, BLOCK, SET_A);
-    b.draw(block, BLOCK, SET_B);
-    a.solve(BLOCK);
-    b.solve(BLOCK);
+  const travel = { A: travelSlots(problem.vehicles.A), B: travelSlots(problem.vehicles.B) };
+  for (let block = 0; block * BLOCK < rows; block++) {
+    const count = Math.min(BLOCK, rows - block * BLOCK);
+    a.draw(block, count, SET_A);
+    b.draw(block, count, SET_B);
+    a.solve(count);
+    b.solve(count);
     slots.forEach((slot, s) => {
       ab.inputs[slot] = b.inputs[slot];
-      ab.solve(BLOCK);
+      for (const id of VEHICLE_IDS) if (!travel[id].has(slot)) ab.keepTravel(id, a);
+      ab.solve(count);
+      ab.forgetTravel();
       ab.inputs[slot] = a.inputs[slot];
-      figures.forEach((name, f) => addRows(sums[s][f], rowsOf(a, name), rowsOf(b, name), rowsOf(ab, name)));
+      figures.forEach((name, f) => addRows(sums[s][f], count, rowsOf(a, name), rowsOf(b, name), rowsOf(ab, name)));
     });
   }
   return slots.map((slot, s) => ({
@@ -54,8 +60,8 @@ const rowsOf = (kernel: Kernel, name: FigureName) => ({
 
 type FigureRows = ReturnType<typeof rowsOf>;
 
-function addRows(sums: Sums, a: FigureRows, b: FigureRows, ab: FigureRows): void {
-  for (let k = 0; k < BLOCK; k++)
+function addRows(sums: Sums, count: number, a: FigureRows, b: FigureRows, ab: FigureRows): void {
+  for (let k = 0; k < count; k++)
     if (a.reasons[k] === 0 && b.reasons[k] === 0 && ab.reasons[k] === 0)
       sums.add(a.values[k], b.values[k], ab.values[k]);
 }

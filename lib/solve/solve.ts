@@ -8,9 +8,10 @@ import type { DrawsDone, RunTasks, Task, TaskDone } from './task';
 
 /** Draws per task: what one worker does between two looks at the clock. */
 const DRAWS_PER_TASK = 16 * BLOCK;
-/** Draws of each of the two sets that the sensitivity rests on. */
-const SOBOL_BLOCKS = 8;
-const SOBOL_SLOTS_PER_TASK = 4;
+/** Draws of each of the two sets that the sensitivity rests on, and how many inputs one task takes. */
+const SOBOL = { rows: 8 * BLOCK, slots: 4 };
+/** The same where every draw is a search through simulations; the indices are then good to about 0.06. */
+const SOBOL_SIMULATED = { rows: 256, slots: 12 };
 
 export interface Settings {
   /** A number, or as many as settle the digits that are printed (adaptive.ts). */
@@ -34,17 +35,20 @@ export interface Solution {
 
 /** Solves a problem over its draws and, where asked, traces the spread of its figures back to the inputs. */
 export async function solve(
-  problem: Problem,
   central: Central,
   settings: Settings,
   run: RunTasks,
   onProgress?: (done: number) => void,
 ): Promise<Solution> {
+  const { problem } = central;
+  const perTask = isSimulated(problem) ? BLOCK : DRAWS_PER_TASK;
   const sobolShare = settings.traced.length > 0 ? 0.5 : 0;
   const parts =
     settings.draws === 'auto'
       ? await drawUntilSettled(problem, settings.coverage, run)
-      : await runCounted(problem, drawTasks(0, settings.draws), run, (done) => onProgress?.((1 - sobolShare) * done));
+      : await runCounted(problem, drawTasks(0, settings.draws, perTask), run, (done) =>
+          onProgress?.((1 - sobolShare) * done),
+        );
   const traced = await runCounted(problem, sobolTasks(problem, settings.traced), run, (done) =>
     onProgress?.(1 - sobolShare + sobolShare * done),
   );
@@ -91,12 +95,17 @@ function drawTasks(from: number, draws: number, perTask = DRAWS_PER_TASK): Task[
   return tasks;
 }
 
+/** Whether the travel of a vehicle is simulated. */
+const isSimulated = ({ vehicles: { A, B } }: Problem): boolean =>
+  A.departure.kind === 'spin' || B.departure.kind === 'spin';
+
 function sobolTasks(problem: Problem, figures: FigureName[]): Task[] {
   if (figures.length === 0) return [];
   const uncertain = problem.inputs.flatMap((input, slot) => (input.spread.shape === 'fixed' ? [] : [slot]));
+  const { rows, slots } = isSimulated(problem) ? SOBOL_SIMULATED : SOBOL;
   const tasks: Task[] = [];
-  for (let i = 0; i < uncertain.length; i += SOBOL_SLOTS_PER_TASK)
-    tasks.push({ kind: 'sobol', slots: uncertain.slice(i, i + SOBOL_SLOTS_PER_TASK), blocks: SOBOL_BLOCKS, figures });
+  for (let i = 0; i < uncertain.length; i += slots)
+    tasks.push({ kind: 'sobol', slots: uncertain.slice(i, i + slots), rows, figures });
   return tasks;
 }
 

@@ -11,8 +11,8 @@ import { type SobolIndices, sobolIndices } from './sobol';
 export type Task =
   /** Draws of the blocks first .. first + blocks - 1, cut off after `draws` draws in all. */
   | { kind: 'draws'; firstBlock: number; draws: number }
-  /** The Sobol' indices of the figures for some inputs, over `blocks` blocks. */
-  | { kind: 'sobol'; slots: number[]; blocks: number; figures: FigureName[] };
+  /** The Sobol' indices of the figures for some inputs, over `rows` draws of each set. */
+  | { kind: 'sobol'; slots: number[]; rows: number; figures: FigureName[] };
 
 export interface DrawsDone {
   kind: 'draws';
@@ -36,7 +36,7 @@ export type RunTasks = (problem: Problem, tasks: readonly Task[], onDone?: () =>
 
 export function runTask(problem: Problem, task: Task): TaskDone {
   if (task.kind === 'draws') return runDraws(new Kernel(problem), task);
-  return { kind: 'sobol', indices: sobolIndices(problem, task.slots, task.blocks, task.figures) };
+  return { kind: 'sobol', indices: sobolIndices(problem, task.slots, task.rows, task.figures) };
 }
 
 function runDraws(kernel: Kernel, { firstBlock, draws }: Extract<Task, { kind: 'draws' }>): DrawsDone {

@@ -141,7 +141,7 @@ async function sensitivity(): Promise<Line> {
   const slots = problem.inputs.flatMap((input, slot) => (input.spread.shape === 'fixed' ? [] : [slot]));
   const blocks = 16;
   const { ours, peer } = await compare(
-    () => sobolIndices(problem, slots, blocks, ['A.approachSpeed', 'B.approachSpeed']),
+    () => sobolIndices(problem, slots, blocks * BLOCK, ['A.approachSpeed', 'B.approachSpeed']),
     () => {
       for (let block = 0; block < blocks * (slots.length + 2); block++) {
         kernel.draw(block, BLOCK);

@@ -13,6 +13,8 @@ const FOLDERS = ['public/examples', 'test/cases'];
 const files = FOLDERS.flatMap((folder) => readdirSync(folder).map((name) => `${folder}/${name}`)).filter((f) =>
   f.endsWith('.case.json'),
 );
+/** Simulated travel has no closed form to write out: the report says so instead. */
+const isWritten = (file: string): boolean => !readFileSync(file, 'utf8').includes('"spin"');
 
 function read(file: string): CaseFile {
   const parsed = parseCase(readFileSync(file));
@@ -29,7 +31,7 @@ async function solved(casefile: CaseFile): Promise<Result> {
 const stepsOf = (casefile: CaseFile): Step[] =>
   workedCalculation(casefile, casefile.analysis.method)?.chapters.flatMap((chapter) => chapter.steps) ?? [];
 
-describe.each(files)('%s', (file) => {
+describe.each(files.filter(isWritten))('%s', (file) => {
   const casefile = read(file);
 
   test('the worked lines end in the engine’s central values, to 1e-9, and in all of them', async () => {

@@ -110,11 +110,41 @@ const ON: Case[] = [
   ],
 ];
 
+/** Checks of travel that is simulated to a rest pose. */
+const SIMULATED = ['restPose', 'otherTurns'];
+
+describe('simulated travel', () => {
+  const simulated = async (...edits: Edit[]) => {
+    const parsed = parseCase(readFileSync('test/cases/spin-straight.case.json'));
+    if (!parsed.ok) throw new Error('the case is not valid');
+    const edited = applyEdit(parsed.casefile, { do: 'all', edits });
+    if (!edited.ok) throw new Error(JSON.stringify(edited.issues));
+    return solveCase(edited.casefile, { draws: 20, sensitivity: false });
+  };
+  test('restPose says how well the pose is met, otherTurns names what else leads there', async () => {
+    const outcome = await simulated();
+    if (outcome.kind !== 'solved') throw new Error('not solved');
+    const level = (id: string) => outcome.result.checks.find((check) => check.id === id)?.level;
+    expect([level('restPose'), level('otherTurns')]).toEqual(['pass', 'note']);
+    expect(outcome.result.more['A.separations']?.[0]?.speed).toBeCloseTo(7.4466, 3);
+    expect(outcome.result.more['A.separations']?.length).toBeGreaterThan(1);
+  });
+  test('neither is there with legs', async () => {
+    const checks = await checksAfter('junction');
+    expect(SIMULATED.some((id) => checks.has(id))).toBe(false);
+  });
+  test('a vehicle that rolls away downhill is refused in words', async () => {
+    const slope = { grade: q(0.3), uphill: q(180) };
+    const outcome = await simulated(set('departure.A.slope', slope), set('departure.A.friction', q(0.1)));
+    expect(outcome.kind === 'unsolved' && outcome.reason.says).toMatch(/does not come to rest/);
+  });
+});
+
 describe('on', () => {
   test.each(ON)('%s: %s', async (id, level, name, edits) => expect(await levelOf(id, name, ...edits)).toBe(level));
 
-  test('every check is turned on here', () =>
-    expect(new Set(ON.map(([id]) => id))).toEqual(new Set(CHECKS.map(({ id }) => id))));
+  test('every check is turned on here or with simulated travel below', () =>
+    expect(new Set([...ON.map(([id]) => id), ...SIMULATED])).toEqual(new Set(CHECKS.map(({ id }) => id))));
 });
 
 test('every check says what it found, what to do where it speaks up, and where its limit comes from', async () => {

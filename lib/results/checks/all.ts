@@ -9,6 +9,8 @@ import { impossibleShare } from './impossible-share';
 import { misfit } from './misfit';
 import { nearlyInLine } from './nearly-in-line';
 import { overlap } from './overlap';
+import { otherTurns } from './other-turns';
+import { restPose } from './rest-pose';
 import { restitutionRange } from './restitution-range';
 import { sideSlip } from './side-slip';
 import { slidingReversal } from './sliding-reversal';
@@ -31,6 +33,8 @@ export const CHECKS: readonly CheckRule[] = [
   sideSlip,
   yawMismatch,
   tyreImpulse,
+  restPose,
+  otherTurns,
   speedRange,
   misfit,
   impossibleShare,

@@ -11,7 +11,8 @@ const LEAST = 5;
 function mismatchOf({ casefile, solution }: CheckContext, id: VehicleId) {
   const { problem, central, values } = solution;
   const directions = problem.method === 'directions';
-  if (directions && problem.vehicles[id].departure.yawRate === null) return null;
+  const { departure } = problem.vehicles[id];
+  if (directions && departure.kind === 'legs' && departure.yawRate === null) return null;
   const stated = directions ? `${id}.departureYawRate` : `${id}.approachYawRate`;
   const size = stated as `A.departureYawRate`;
   const toRate = DEGREES_PER_RADIAN;

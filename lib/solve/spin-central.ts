@@ -1,0 +1,134 @@
+import type { VehicleId } from '@/lib/casefile/schema';
+import type { Problem, SpinSlots, SpinStart } from '@/lib/evidence/problem';
+import { G } from '@/lib/mechanics/legs';
+import type { VehicleState } from '@/lib/mechanics/impact-backwards';
+import {
+  type Inversion,
+  type Separation,
+  type Target,
+  invertFrom,
+  jacobian,
+  solve3,
+} from '@/lib/mechanics/spin-backwards';
+import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
+import { Kernel } from './kernel';
+import { reachOf, targetOf } from './spin-travel';
+
+/** Position error, m, that a simulation of the central answer aims at, and how near it must come, m and rad. */
+const ERROR = 1e-7;
+const MET = 2e-6;
+/** Two separations this near, m/s and rad/s, are one. */
+const SAME = 0.02;
+const FULL_TURN = 2 * Math.PI;
+
+/** What was found for one vehicle whose travel is simulated. */
+export interface SpinFound {
+  /** Separations that meet the rest pose with the turn as written, the least kinetic energy first. */
+  separations: Inversion[];
+  /** Those that meet it with one full turn more or less. */
+  otherTurns: Inversion[];
+  /** What came nearest, where none meets it. */
+  nearest: Inversion | null;
+}
+
+export type SpinsFound = Record<VehicleId, SpinFound | null>;
+
+/** Looks for the separations of the vehicles whose travel is simulated, and fills in where their draws begin. */
+export function findSpins(problem: Problem): { problem: Problem; spins: SpinsFound } {
+  const kernel = new Kernel(problem);
+  const spins: SpinsFound = { A: null, B: null };
+  const vehicles = { ...problem.vehicles };
+  for (const id of ['A', 'B'] as const) {
+    const spin = problem.vehicles[id].departure;
+    if (spin.kind !== 'spin') continue;
+    const body = kernel.loadBody(0, problem.vehicles[id], kernel.state[id]);
+    const target = targetOf(kernel.inputs, 0, problem.vehicles[id], spin, body, ERROR);
+    const found = findSeparations(target, body);
+    spins[id] = found;
+    const best = found.separations[0];
+    if (best)
+      vehicles[id] = {
+        ...vehicles[id],
+        departure: { ...spin, start: startOf(target, best.separation) } satisfies SpinSlots,
+      };
+  }
+  return { problem: { ...problem, vehicles }, spins };
+}
+
+const energyOf = ({ m, I }: VehicleState, { vx, vy, w }: Separation): number =>
+  (m * (vx * vx + vy * vy) + I * w * w) / 2;
+
+function findSeparations(target: Target, body: VehicleState): SpinFound {
+  const all = guesses(target).map((guess) => invertFrom(target, guess, MET));
+  const turns = [FULL_TURN, -FULL_TURN].flatMap((turn) => {
+    const other = { ...target, to: { ...target.to, heading: target.to.heading + turn } };
+    return guesses(other).map((guess) => invertFrom(other, guess, MET));
+  });
+  const byEnergy = (a: Inversion, b: Inversion): number => energyOf(body, a.separation) - energyOf(body, b.separation);
+  const met = (found: Inversion[]): Inversion[] => distinct(found.filter((inversion) => inversion.met).sort(byEnergy));
+  const nearest = all.filter(({ miss }) => Number.isFinite(miss)).sort((a, b) => a.miss - b.miss)[0] ?? null;
+  return { separations: met(all), otherTurns: met(turns), nearest };
+}
+
+function distinct(found: Inversion[]): Inversion[] {
+  const kept: Inversion[] = [];
+  for (const one of found) {
+    const near = ({ separation: p }: Inversion): boolean =>
+      hypot(p.vx - one.separation.vx, p.vy - one.separation.vy) < SAME && Math.abs(p.w - one.separation.w) < SAME;
+    if (!kept.some(near)) kept.push(one);
+  }
+  return kept;
+}
+
+/** Retardations, as shares of friction, and turns of the course, rad, that a search begins from. */
+const SHARES = [1, 0.5, 0.15];
+const TURNS = [0, 0.25, -0.25];
+
+/** Where searches begin: straight lines to the rest under several retardations, turning as far as they must in that time. */
+function guesses(target: Target): Separation[] {
+  const { from, to, motion } = target;
+  const [dx, dy, turn] = [to.x - from.x, to.y - from.y, to.heading - from.heading];
+  const distance = Math.max(hypot(dx, dy), 0.02);
+  const course = atan2(dy, dx);
+  return SHARES.flatMap((share) => {
+    const slowing = share * motion.ground.friction * G;
+    const speed = Math.sqrt(2 * slowing * distance);
+    const time = Math.max((2 * distance) / speed, Math.sqrt(Math.abs(turn) / (motion.ground.friction * G)));
+    return TURNS.filter((by) => by === 0 || share === 0.5).map((by) => ({
+      vx: speed * cos(course + by),
+      vy: speed * sin(course + by),
+      w: (2 * turn) / time,
+    }));
+  });
+}
+
+function startOf(target: Target, separation: Separation): SpinStart {
+  const [c, s] = [cos(target.from.heading), sin(target.from.heading)];
+  const { vx, vy, w } = separation;
+  const J = jacobian(target, [vx, vy, w]);
+  const columns = [0, 1, 2].map(
+    (j) =>
+      solve3(
+        J,
+        [0, 1, 2].map((i) => (i === j ? 1 : 0)),
+      ) ?? [0, 0, 0],
+  );
+  const world = [0, 1, 2].map((i) => columns.map((column) => column[i]));
+  return {
+    forward: vx * c + vy * s,
+    left: vy * c - vx * s,
+    w,
+    reach: reachOf(target),
+    inverse: intoLocal(world, c, s),
+  };
+}
+
+/** R' M R with R the turn by the heading. */
+function intoLocal(m: readonly (readonly number[])[], c: number, s: number): number[][] {
+  const right = m.map(([a, b, z]) => [a * c + b * s, b * c - a * s, z]);
+  return [
+    right[0].map((a, j) => a * c + right[1][j] * s),
+    right[0].map((a, j) => right[1][j] * c - a * s),
+    [...right[2]],
+  ];
+}

@@ -1,0 +1,148 @@
+import type { LocalSeparation, SpinSlots, VehicleSlots } from '@/lib/evidence/problem';
+import { holds } from '@/lib/geometry/polygon';
+import type { VehicleState } from '@/lib/mechanics/impact-backwards';
+import { type Ground, TyreMotion, fourWheels } from '@/lib/mechanics/spin';
+import { type Target, invertFrom, missOf } from '@/lib/mechanics/spin-backwards';
+import { cos, sin } from '@/lib/numerics/elementary';
+
+/** Position error, m, that a simulation of a draw aims at. */
+export const DRAW_ERROR = 5e-5;
+/** A draw meets its rest pose when it comes this near, m and rad: a fraction of what any survey can tell. */
+const DRAW_MET = 5e-4;
+const MOST_STEPS = 12;
+/** Where the coarse simulation is too uneven to search on, m. */
+const FINER_ERROR = 1e-6;
+
+/** The target of one draw: the vehicle under its tyres as drawn, its pose at contact and its pose at rest. */
+export function targetOf(
+  inputs: readonly Float64Array[],
+  k: number,
+  slots: VehicleSlots,
+  spin: SpinSlots,
+  body: VehicleState,
+  error: number,
+): Target {
+  const at = (slot: number | null): number => (slot === null ? 0 : inputs[slot][k]);
+  const settings = spin.braking.map((slot, i) => ({ braking: at(slot), steer: at(spin.steer[i]) }));
+  const wheels = fourWheels(
+    {
+      m: body.m,
+      wheelbase: slots.wheelbase,
+      track: spin.track,
+      frontAxleToMassCentre: at(slots.frontAxleToMassCentre),
+    },
+    settings,
+  );
+  const ground: Ground = {
+    friction: at(spin.friction),
+    frictionAt: frictionAt(inputs, k, spin),
+    grade: at(spin.grade),
+    uphill: at(spin.uphill),
+  };
+  return {
+    motion: new TyreMotion({ m: body.m, I: body.I, wheels }, ground, at(spin.onset)),
+    from: { x: body.x, y: body.y, heading: at(slots.heading) },
+    to: { x: at(spin.restX), y: at(spin.restY), heading: at(spin.restHeading) },
+    error,
+  };
+}
+
+/** Of overlapping surfaces the last listed counts. */
+function frictionAt(inputs: readonly Float64Array[], k: number, spin: SpinSlots): Ground['frictionAt'] {
+  if (spin.surfaces.length === 0) return null;
+  const elsewhere = inputs[spin.friction][k];
+  return (x, y) => {
+    const under = spin.surfaces.findLast(({ outline }) => holds(outline, [x, y]));
+    return under ? inputs[under.friction][k] : elsewhere;
+  };
+}
+
+/** Rest less contact in the axes of the heading at contact: m, m, rad. */
+export function reachOf({ from, to }: Target): [number, number, number] {
+  const [c, s] = [cos(from.heading), sin(from.heading)];
+  const [dx, dy] = [to.x - from.x, to.y - from.y];
+  return [dx * c + dy * s, dy * c - dx * s, to.heading - from.heading];
+}
+
+const times = (m: readonly (readonly number[])[], v: readonly number[]): number[] =>
+  m.map((row) => row[0] * v[0] + row[1] * v[1] + row[2] * v[2]);
+
+/**
+ * The separation of one draw: from the central one and its linear answer to the rest pose, improved by Broyden's method
+ * (1965) with the central Jacobian to begin with; where that does not meet the pose, by the damped least squares of the
+ * central answer. The velocity is left in `body`; false where the rest pose is not met.
+ */
+export function separateDraw(target: Target, spin: SpinSlots, body: VehicleState): boolean {
+  const { start } = spin;
+  if (!start) return false;
+  const reach = reachOf(target);
+  const ahead = times(
+    start.inverse,
+    reach.map((d, i) => d - start.reach[i]),
+  );
+  const local: LocalSeparation = {
+    forward: start.forward + ahead[0],
+    left: start.left + ahead[1],
+    w: start.w + ahead[2],
+  };
+  const found = broyden(target, turned(local, target.from.heading), turnedRows(start.inverse, target.from.heading));
+  const separation = found ?? fallback(target, local);
+  if (!separation) return false;
+  [body.vx, body.vy, body.wMeasured] = separation;
+  return true;
+}
+
+function fallback(target: Target, local: LocalSeparation): number[] | null {
+  const [vx, vy, w] = turned(local, target.from.heading);
+  const finer = { ...target, error: FINER_ERROR };
+  const { met, separation } = invertFrom(finer, { vx, vy, w }, DRAW_MET);
+  return met ? [separation.vx, separation.vy, separation.w] : null;
+}
+
+/** Into world axes. */
+function turned({ forward, left, w }: LocalSeparation, heading: number): number[] {
+  const [c, s] = [cos(heading), sin(heading)];
+  return [forward * c - left * s, forward * s + left * c, w];
+}
+
+/** R M R', with R the turn by the heading: the inverse Jacobian in world axes. */
+function turnedRows(m: readonly (readonly number[])[], heading: number): number[][] {
+  const [c, s] = [cos(heading), sin(heading)];
+  const right = m.map(([a, b, z]) => [a * c - b * s, a * s + b * c, z]);
+  return [
+    right[0].map((a, j) => a * c - right[1][j] * s),
+    right[0].map((a, j) => a * s + right[1][j] * c),
+    [...right[2]],
+  ];
+}
+
+/** Broyden's good method on the inverse; null where it does not meet the pose. */
+function broyden(target: Target, from: number[], inverse: number[][]): number[] | null {
+  const H = inverse.map((row) => [...row]);
+  let s = from;
+  let now = missOf(target, s);
+  for (let round = 0; round < MOST_STEPS; round++) {
+    if (now.size <= DRAW_MET) return s;
+    if (!Number.isFinite(now.size)) return null;
+    const step = times(H, now.r).map((d) => -d);
+    const next = s.map((v, i) => v + step[i]);
+    const then = missOf(target, next);
+    if (then.size > 4 * now.size) return null;
+    improve(
+      H,
+      step,
+      then.r.map((r, i) => r - now.r[i]),
+    );
+    [s, now] = [next, then];
+  }
+  return null;
+}
+
+/** Sherman and Morrison: H += (step - H change) step' H / (step' H change). */
+function improve(H: number[][], step: readonly number[], change: readonly number[]): void {
+  const Hc = times(H, change);
+  const row = [0, 1, 2].map((j) => step[0] * H[0][j] + step[1] * H[1][j] + step[2] * H[2][j]);
+  const scale = row[0] * change[0] + row[1] * change[1] + row[2] * change[2];
+  if (Math.abs(scale) < 1e-12) return;
+  for (let i = 0; i < 3; i++) for (let j = 0; j < 3; j++) H[i][j] += ((step[i] - Hc[i]) * row[j]) / scale;
+}

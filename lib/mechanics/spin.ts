@@ -36,7 +36,7 @@ export interface Ground {
 }
 
 /** x, y, heading, vx, vy, yaw rate. */
-export type Motion = Float64Array;
+type Motion = Float64Array;
 
 export interface Rest {
   /** `rest`: it came to rest; `noRest`: it did not within the time allowed. */

@@ -44,6 +44,11 @@ export interface SpinStart extends LocalSeparation {
   reach: [number, number, number];
   /** Change of (forward, left, w) with the reach: the inverse of the Jacobian of the simulation, by rows. */
   inverse: number[][];
+  /** Friction and mean braking share of the central values, and the change of (forward, left, w) with a relative change of each. */
+  friction: number;
+  braking: number;
+  byFriction: number[];
+  byBraking: number[];
 }
 
 /** Travel simulated to rest. */

@@ -96,8 +96,9 @@ export class Kernel {
     this.kept = { A: false, B: false };
   }
 
-  solve(count: number): void {
-    for (let k = 0; k < count; k++) this.solveDraw(k);
+  /** Solves the draws from .. to - 1 of the block. */
+  solve(to: number, from = 0): void {
+    for (let k = from; k < to; k++) this.solveDraw(k);
   }
 
   reasonOf(k: number): Reason | null {

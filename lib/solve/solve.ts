@@ -8,10 +8,12 @@ import type { DrawsDone, RunTasks, Task, TaskDone } from './task';
 
 /** Draws per task: what one worker does between two looks at the clock. */
 const DRAWS_PER_TASK = 16 * BLOCK;
+/** The same where every draw is a search through simulations. */
+const SIMULATED_PER_TASK = 128;
 /** Draws of each of the two sets that the sensitivity rests on, and how many inputs one task takes. */
 const SOBOL = { rows: 8 * BLOCK, slots: 4 };
 /** The same where every draw is a search through simulations; the indices are then good to about 0.06. */
-const SOBOL_SIMULATED = { rows: 256, slots: 12 };
+const SOBOL_SIMULATED = { rows: 256, slots: 6 };
 
 export interface Settings {
   /** A number, or as many as settle the digits that are printed (adaptive.ts). */
@@ -41,7 +43,7 @@ export async function solve(
   onProgress?: (done: number) => void,
 ): Promise<Solution> {
   const { problem } = central;
-  const perTask = isSimulated(problem) ? BLOCK : DRAWS_PER_TASK;
+  const perTask = isSimulated(problem) ? SIMULATED_PER_TASK : DRAWS_PER_TASK;
   const sobolShare = settings.traced.length > 0 ? 0.5 : 0;
   const parts =
     settings.draws === 'auto'
@@ -87,11 +89,11 @@ async function drawUntilSettled(problem: Problem, coverage: number, run: RunTask
   return batches;
 }
 
-/** Tasks for `draws` draws from the draw `from` on, a multiple of BLOCK. */
+/** Tasks for `draws` draws from the draw `from` on. */
 function drawTasks(from: number, draws: number, perTask = DRAWS_PER_TASK): Task[] {
   const tasks: Task[] = [];
   for (let first = 0; first < draws; first += perTask)
-    tasks.push({ kind: 'draws', firstBlock: (from + first) / BLOCK, draws: Math.min(perTask, draws - first) });
+    tasks.push({ kind: 'draws', first: from + first, draws: Math.min(perTask, draws - first) });
   return tasks;
 }
 

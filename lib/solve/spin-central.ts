@@ -8,11 +8,13 @@ import {
   type Target,
   invertFrom,
   jacobian,
+  missOf,
   solve3,
 } from '@/lib/mechanics/spin-backwards';
+import { TyreMotion } from '@/lib/mechanics/spin';
 import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
 import { Kernel } from './kernel';
-import { reachOf, targetOf } from './spin-travel';
+import { meanBraking, reachOf, targetOf } from './spin-travel';
 
 /** Position error, m, that a simulation of the central answer aims at, and how near it must come, m and rad. */
 const ERROR = 1e-7;
@@ -114,13 +116,34 @@ function startOf(target: Target, separation: Separation): SpinStart {
       ) ?? [0, 0, 0],
   );
   const world = [0, 1, 2].map((i) => columns.map((column) => column[i]));
+  /** Change of the separation, in local axes, that a unit of relative change asks for. */
+  const answerTo = (changed: Target): number[] => {
+    const { r } = missOf(changed, [vx, vy, w]);
+    const asked = world.map((row) => -(row[0] * r[0] + row[1] * r[1] + row[2] * r[2]) / (LESS - 1));
+    return [asked[0] * c + asked[1] * s, asked[1] * c - asked[0] * s, asked[2]];
+  };
   return {
     forward: vx * c + vy * s,
     left: vy * c - vx * s,
     w,
     reach: reachOf(target),
     inverse: intoLocal(world, c, s),
+    friction: target.motion.ground.friction,
+    braking: meanBraking(target),
+    byFriction: answerTo(withLess(target, LESS, 1)),
+    byBraking: answerTo(withLess(target, 1, LESS)),
   };
+}
+
+/** A relative change that the answers to friction and braking are taken over; downwards, since a wheel brakes at most fully. */
+const LESS = 0.96;
+
+/** The same travel with friction and braking times a factor each. */
+function withLess(target: Target, friction: number, braking: number): Target {
+  const { vehicle, ground, onset } = target.motion;
+  const wheels = vehicle.wheels.map((wheel) => ({ ...wheel, braking: wheel.braking * braking }));
+  const less = new TyreMotion({ ...vehicle, wheels }, { ...ground, friction: ground.friction * friction }, onset);
+  return { ...target, motion: less };
 }
 
 /** R' M R with R the turn by the heading. */

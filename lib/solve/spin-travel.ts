@@ -1,7 +1,8 @@
-import type { LocalSeparation, SpinSlots, VehicleSlots } from '@/lib/evidence/problem';
+import type { LocalSeparation, SpinSlots, SpinStart, VehicleSlots } from '@/lib/evidence/problem';
 import { holds } from '@/lib/geometry/polygon';
 import type { VehicleState } from '@/lib/mechanics/impact-backwards';
 import { type Ground, TyreMotion, fourWheels } from '@/lib/mechanics/spin';
+import { brakingWithRolling } from '@/lib/mechanics/wheel';
 import { type Target, invertFrom, missOf } from '@/lib/mechanics/spin-backwards';
 import { cos, sin } from '@/lib/numerics/elementary';
 
@@ -69,33 +70,40 @@ const times = (m: readonly (readonly number[])[], v: readonly number[]): number[
 
 /**
  * The separation of one draw: from the central one and its linear answer to the rest pose, improved by Broyden's method
- * (1965) with the central Jacobian to begin with; where that does not meet the pose, by the damped least squares of the
- * central answer. The velocity is left in `body`; false where the rest pose is not met.
+ * (1965) with the central Jacobian to begin with; where that does not meet the pose, on a finer simulation, and at last by the
+ * damped least squares of the central answer. The velocity is left in `body`; false where the rest pose is not met.
  */
 export function separateDraw(target: Target, spin: SpinSlots, body: VehicleState): boolean {
   const { start } = spin;
   if (!start) return false;
-  const reach = reachOf(target);
-  const ahead = times(
-    start.inverse,
-    reach.map((d, i) => d - start.reach[i]),
-  );
-  const local: LocalSeparation = {
-    forward: start.forward + ahead[0],
-    left: start.left + ahead[1],
-    w: start.w + ahead[2],
-  };
-  const found = broyden(target, turned(local, target.from.heading), turnedRows(start.inverse, target.from.heading));
-  const separation = found ?? fallback(target, local);
+  const from = turned(predicted(target, start), target.from.heading);
+  const inverse = turnedRows(start.inverse, target.from.heading);
+  const finer = { ...target, error: FINER_ERROR };
+  const separation = broyden(target, from, inverse) ?? broyden(finer, from, inverse) ?? leastSquares(finer, from);
   if (!separation) return false;
   [body.vx, body.vy, body.wMeasured] = separation;
   return true;
 }
 
-function fallback(target: Target, local: LocalSeparation): number[] | null {
-  const [vx, vy, w] = turned(local, target.from.heading);
-  const finer = { ...target, error: FINER_ERROR };
-  const { met, separation } = invertFrom(finer, { vx, vy, w }, DRAW_MET);
+/** The central separation, moved with the rest pose, the friction and the braking of the draw. */
+function predicted(target: Target, start: SpinStart): LocalSeparation {
+  const ahead = times(
+    start.inverse,
+    reachOf(target).map((d, i) => d - start.reach[i]),
+  );
+  const friction = target.motion.ground.friction / start.friction - 1;
+  const braking = meanBraking(target) / start.braking - 1;
+  const [forward, left, w] = ahead.map((d, i) => d + friction * start.byFriction[i] + braking * start.byBraking[i]);
+  return { forward: start.forward + forward, left: start.left + left, w: start.w + w };
+}
+
+/** Mean braking share of the wheels, rolling resistance included. */
+export const meanBraking = ({ motion: { vehicle, ground } }: Target): number =>
+  vehicle.wheels.reduce((sum, { braking }) => sum + brakingWithRolling(braking, ground.friction), 0) /
+  vehicle.wheels.length;
+
+function leastSquares(target: Target, [vx, vy, w]: readonly number[]): number[] | null {
+  const { met, separation } = invertFrom(target, { vx, vy, w }, DRAW_MET);
   return met ? [separation.vx, separation.vy, separation.w] : null;
 }
 
@@ -124,18 +132,29 @@ function broyden(target: Target, from: number[], inverse: number[][]): number[] 
   for (let round = 0; round < MOST_STEPS; round++) {
     if (now.size <= DRAW_MET) return s;
     if (!Number.isFinite(now.size)) return null;
-    const step = times(H, now.r).map((d) => -d);
-    const next = s.map((v, i) => v + step[i]);
-    const then = missOf(target, next);
-    if (then.size > 4 * now.size) return null;
+    const full = times(H, now.r).map((d) => -d);
+    const trial = shortened(target, s, now.size, full);
     improve(
       H,
-      step,
-      then.r.map((r, i) => r - now.r[i]),
+      trial.step,
+      trial.then.r.map((r, i) => r - now.r[i]),
     );
-    [s, now] = [next, then];
+    s = s.map((v, i) => v + trial.step[i]);
+    now = trial.then;
   }
   return null;
+}
+
+/** The step, halved a few times as long as it leads away from the pose. */
+function shortened(target: Target, s: readonly number[], size: number, full: readonly number[]) {
+  for (let share = 1; ; share /= 2) {
+    const step = full.map((d) => share * d);
+    const then = missOf(
+      target,
+      s.map((v, i) => v + step[i]),
+    );
+    if (then.size < size || share < 0.2) return { step, then };
+  }
 }
 
 /** Sherman and Morrison: H += (step - H change) step' H / (step' H change). */

@@ -9,8 +9,8 @@ import { type SobolIndices, sobolIndices } from './sobol';
  * problem and the task alone, so any number of workers gives the same digits.
  */
 export type Task =
-  /** Draws of the blocks first .. first + blocks - 1, cut off after `draws` draws in all. */
-  | { kind: 'draws'; firstBlock: number; draws: number }
+  /** The draws first .. first + draws - 1. */
+  | { kind: 'draws'; first: number; draws: number }
   /** The Sobol' indices of the figures for some inputs, over `rows` draws of each set. */
   | { kind: 'sobol'; slots: number[]; rows: number; figures: FigureName[] };
 
@@ -39,17 +39,20 @@ export function runTask(problem: Problem, task: Task): TaskDone {
   return { kind: 'sobol', indices: sobolIndices(problem, task.slots, task.rows, task.figures) };
 }
 
-function runDraws(kernel: Kernel, { firstBlock, draws }: Extract<Task, { kind: 'draws' }>): DrawsDone {
+function runDraws(kernel: Kernel, { first, draws }: Extract<Task, { kind: 'draws' }>): DrawsDone {
   const names = figuresOf(kernel.problem);
   const sources = names.map((name) => columnOf(kernel.columns, name));
   const kept = names.map(() => new Float64Array(draws));
   const impossible: Record<string, number> = {};
   let n = 0;
-  for (let done = 0, block = firstBlock; done < draws; done += BLOCK, block++) {
-    const count = Math.min(BLOCK, draws - done);
-    kernel.draw(block, count);
-    kernel.solve(count);
-    for (let k = 0; k < count; k++) {
+  for (let at = first; at < first + draws;) {
+    const block = Math.floor(at / BLOCK);
+    const from = at - block * BLOCK;
+    const to = Math.min(BLOCK, first + draws - block * BLOCK);
+    kernel.draw(block, to);
+    kernel.solve(to, from);
+    at = block * BLOCK + to;
+    for (let k = from; k < to; k++) {
       const reason = kernel.reasons[k];
       if (reason !== 0) impossible[REASONS[reason - 1]] = (impossible[REASONS[reason - 1]] ?? 0) + 1;
       else {

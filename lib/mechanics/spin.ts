@@ -35,9 +35,6 @@ export interface Ground {
   uphill: number;
 }
 
-/** x, y, heading, vx, vy, yaw rate. */
-type Motion = Float64Array;
-
 export interface Rest {
   /** `rest`: it came to rest; `noRest`: it did not within the time allowed. */
   outcome: 'rest' | 'noRest';
@@ -77,7 +74,7 @@ export function fourWheels(
   return at.map(([x, y, load], i) => ({ x, y, load, ...settings[i] }));
 }
 
-/** The equations of motion of one vehicle under its tyres and the grade. */
+/** The equations of motion of one vehicle under its tyres and the grade. A motion is x, y, heading, vx, vy, yaw rate. */
 export class TyreMotion {
   private readonly force = { along: 0, across: 0 };
   private readonly cosGrade: number;

@@ -137,10 +137,10 @@ function broyden(target: Target, from: number[], inverse: number[][]): number[] 
     improve(
       H,
       trial.step,
-      trial.then.r.map((r, i) => r - now.r[i]),
+      trial.met.r.map((r, i) => r - now.r[i]),
     );
     s = s.map((v, i) => v + trial.step[i]);
-    now = trial.then;
+    now = trial.met;
   }
   return null;
 }
@@ -149,11 +149,11 @@ function broyden(target: Target, from: number[], inverse: number[][]): number[] 
 function shortened(target: Target, s: readonly number[], size: number, full: readonly number[]) {
   for (let share = 1; ; share /= 2) {
     const step = full.map((d) => share * d);
-    const then = missOf(
+    const met = missOf(
       target,
       s.map((v, i) => v + step[i]),
     );
-    if (then.size < size || share < 0.2) return { step, then };
+    if (met.size < size || share < 0.2) return { step, met };
   }
 }
 

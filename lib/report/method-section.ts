@@ -56,6 +56,11 @@ function assumptions(casefile: CaseFile): string[] {
     'Both vehicles are rigid bodies that move in one plane, apart from the damage at one common contact point.',
     'The contact is instantaneous: the vehicles do not move while it lasts, and the tyres give no impulse during it. How far that holds is bounded by the check on tyre impulse.',
     'Over each leg of the travel friction, retardation share and grade are constant.',
+    ...(Object.values(casefile.departure).some((travel) => travel?.kind === 'spin')
+      ? [
+          'Simulated travel: four wheels under their static loads, with the braking and steer stated, on one plane; no one drove, and nothing was struck on the way.',
+        ]
+      : []),
     ...(casefile.pulse ? ['The contact duration serves the accelerations only; it does not enter the speeds.'] : []),
     'Inputs whose spread is not stated are taken as exact, and inputs are drawn independently of each other.',
   ];

@@ -3,6 +3,7 @@ import type { Result } from '@/lib/results/result';
 import type { Block, Section } from './report';
 import { failuresOf } from './failures';
 import { largestDifference, workedCalculation } from './worked/calculation';
+import { withSimulatedGiven } from './worked/simulated';
 import { WORKED_DIGITS } from './worked/figure';
 
 /** Differences below this are the last bits of the arithmetic. */
@@ -10,7 +11,7 @@ const SAME = 1e-9;
 
 /** The calculation at the central values, line by line, with how well its ends agree with the engine. */
 export function workedSection(casefile: CaseFile, result: Result): Section | null {
-  const sheet = workedCalculation(casefile, result.method);
+  const sheet = workedCalculation(withSimulatedGiven(casefile, result.central), result.method);
   if (!sheet) return null;
   const failed: Block[] =
     failuresOf(result).length === 0
@@ -31,13 +32,19 @@ export function workedSection(casefile: CaseFile, result: Result): Section | nul
         text:
           'Every line can be checked by hand: the formula, the numbers put in, the answer. SI units throughout. ' +
           `Figures are carried unrounded and printed to ${WORKED_DIGITS} significant digits, so a hand check with the printed figures may differ in the last of them. ` +
-          agreement(largestDifference(sheet, result.central)),
+          agreement(largestDifference(sheet, result.central)) +
+          (isSimulated(casefile) ? SIMULATED : ''),
       },
       { kind: 'symbols', rows: SYMBOLS },
       { kind: 'steps', chapters: sheet.chapters },
     ],
   };
 }
+
+const isSimulated = ({ departure: { A, B } }: CaseFile): boolean => A?.kind === 'spin' || B?.kind === 'spin';
+
+const SIMULATED =
+  ' Where the travel of a vehicle is simulated, its separation is taken from the simulation as given: those steps cannot be written out by hand.';
 
 const agreement = (difference: number): string =>
   difference < SAME

@@ -9,6 +9,7 @@ const GRAVITY = 9.80665;
 /** Writes the lines from rest back to separation and answers the separation velocity, m/s. */
 export function separationVelocity(departure: LegsDeparture, id: VehicleId, sheet: Sheet): Vector {
   const { legs, endSpeed, direction } = departure;
+  if (legs.length === 0) return givenSeparation(departure, id, sheet);
   sheet.begin(`Travel of ${id}, from its end back to separation`);
   const last = legs.length;
   const squared = legs.reduceRight(
@@ -23,14 +24,26 @@ export function separationVelocity(departure: LegsDeparture, id: VehicleId, shee
     `s_{${id}}′ = ${figure(s)} "m/s"`,
   );
   const v = scaled(unit(direction.value), s);
+  writeVelocity(v, s, direction.value, id, sheet);
+  return v;
+}
+
+function writeVelocity(v: Vector, s: number, direction: number, id: VehicleId, sheet: Sheet): void {
   sheet.line(
     `Separation velocity of ${id}`,
     `!v_{${id}}′ = s_{${id}}′ (cos δ_{${id}}′, sin δ_{${id}}′)`,
-    `${figure(s)} (cos ${degrees(direction.value)}, sin ${degrees(direction.value)})`,
+    `${figure(s)} (cos ${degrees(direction)}, sin ${degrees(direction)})`,
     `!v_{${id}}′ = ${pair(v)} "m/s"`,
   );
   sheet.end(`${id}.departureSpeed`, s);
-  if (s > 1e-9) sheet.end(`${id}.departureDirection`, direction.value);
+  if (s > 1e-9) sheet.end(`${id}.departureDirection`, direction);
+}
+
+/** A separation that is given: that of simulated travel. */
+function givenSeparation({ endSpeed, direction }: LegsDeparture, id: VehicleId, sheet: Sheet): Vector {
+  sheet.begin(`Separation of ${id}, as the simulated travel gives it`);
+  const v = scaled(unit(direction.value), endSpeed.value);
+  writeVelocity(v, endSpeed.value, direction.value, id, sheet);
   return v;
 }
 

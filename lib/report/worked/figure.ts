@@ -27,7 +27,7 @@ export const minus = (x: number): string => (figure(x).startsWith('-') ? `+ ${fi
 export const pair = (v: Vector): string => `(${figure(v.x)}, ${figure(v.y)})`;
 
 /** An angle below this, deg, is what a search left over. */
-const NOTHING = 1e-6;
+const LEFT_OVER = 1e-6;
 
 /** An angle in degrees. */
-export const degrees = (x: number): string => `${figure(Math.abs(x) < NOTHING ? 0 : x)}°`;
+export const degrees = (x: number): string => `${figure(Math.abs(x) < LEFT_OVER ? 0 : x)}°`;

@@ -29,6 +29,7 @@ export function planItems(casefile: CaseFile, result: Result): Item[] {
     ...marks,
     ...VEHICLE_IDS.flatMap((id) => vehicleItems(scene.vehicles[id])),
     ...VEHICLE_IDS.map((id) => letterItem(scene, id)),
+    ...VEHICLE_IDS.flatMap((id) => restItems(scene, id)),
     ...VEHICLE_IDS.flatMap((id) => travelItems(scene, id, unitsOf(casefile))),
     ...VEHICLE_IDS.flatMap((id) => approachItems(scene, result, id)),
     ...contactItems(scene),
@@ -78,6 +79,21 @@ function letterItem({ vehicles, point }: Scene, id: VehicleId): Item {
   const forward = dx * Math.cos(vehicle.pose.heading) + dy * Math.sin(vehicle.pose.heading);
   const at = forward > (nose + tail) / 2 ? tail + 0.9 : nose - 1.1;
   return { kind: 'label', at: onVehicle(vehicle, at, 0), text: id, strong: true };
+}
+
+/** A measured rest pose: its outline in the manner of the travel, named. */
+function restItems(scene: Scene, id: VehicleId): Item[] {
+  const rest = scene.rest[id];
+  if (!rest) return [];
+  const outline = outlineAt(scene.vehicles[id], rest);
+  return [
+    { kind: 'line', role: `travel.${id}`, points: [...outline, outline[0]].map(([x, y]): Point => [x, y]) },
+    {
+      kind: 'label',
+      at: towards([rest.x, rest.y], rest.heading, noseOf(scene.vehicles[id]) + BESIDE),
+      text: `${id} at rest`,
+    },
+  ];
 }
 
 function travelItems(scene: Scene, id: VehicleId, units: UnitSystem): Item[] {

@@ -85,7 +85,7 @@ const LEGEND: [Role, string][] = [
   ...VEHICLE_IDS.flatMap((id): [Role, string][] => [
     [`vehicle.${id}`, `${id} at contact`],
     [`approach.${id}`, `Approach of ${id}`],
-    [`travel.${id}`, `Travel of ${id}`],
+    [`travel.${id}`, `Travel, rest of ${id}`],
   ]),
   ['centre', 'Mass centre'],
   ['point', 'Contact point'],

@@ -1,4 +1,5 @@
 import { ChevronDown, ChevronUp } from 'lucide-react';
+import { Fragment } from 'react';
 import type { Answer } from '@/components/hooks/answer';
 import { CommandPalette } from '@/components/panels/command-palette';
 import buttons from '@/components/ui/button.module.css';
@@ -92,13 +93,19 @@ function OneLine({ answer: { result, of } }: { answer: Answer }) {
     return found ? [{ label, ...found }] : [];
   });
   return (
-    <p className={styles.line}>
-      {figures.map(({ label, bound, figure, interval }, k) => (
-        <span key={k}>
-          {label} {bound} <strong>{figure}</strong> ({interval}){' · '}
-        </span>
-      ))}
-      {unitText('speed', units)} · {againstWords(result)}
-    </p>
+    <>
+      <p className={styles.line}>
+        In {unitText('speed', units)}:{' '}
+        {figures.map(({ label, bound, figure, interval }, k) => (
+          <Fragment key={k}>
+            {k > 0 && ' · '}
+            <span>
+              {label} {bound} <strong>{figure}</strong> ({interval})
+            </span>
+          </Fragment>
+        ))}
+      </p>
+      <p className={styles.against}>{againstWords(result)}</p>
+    </>
   );
 }

@@ -32,6 +32,8 @@ export function AnswerPanel() {
   return (
     <div
       className={styles.panel}
+      data-status={answer.status}
+      data-stale={answer.stale}
       data-collapsed={strip.collapsed}
       style={strip.height === null ? undefined : { ['--strip' as string]: `${strip.height}px` }}
     >
@@ -44,7 +46,7 @@ export function AnswerPanel() {
       )}
       <p className={styles.foot}>
         Decision aid for a qualified person; it does not replace a licensed engineer or qualified reconstructionist. No
-        conclusion about injury.
+        conclusion about injury may be drawn.
       </p>
       <Spoken answer={answer} />
     </div>

@@ -43,6 +43,7 @@ export function ShowProvider({ children }: { children: ReactNode }) {
 function focusRow(...paths: (string | undefined)[]): void {
   const row = paths.map((path) => path && document.getElementById(`field-${path}`)).find((found) => !!found);
   const target = row || document.getElementById('ledger');
+  target?.closest('details')?.setAttribute('open', '');
   target?.scrollIntoView({ block: 'nearest' });
   target?.focus({ preventScroll: true });
 }

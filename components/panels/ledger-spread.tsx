@@ -1,6 +1,7 @@
 'use client';
 import { useSession } from '@/components/hooks/use-session';
 import { EntryField } from '@/components/ui/entry-field';
+import { supportOf } from '@/lib/casefile/quantities';
 import type { Quantity, Spread } from '@/lib/casefile/schema';
 import type { Dimension, UnitSystem } from '@/lib/units/dimension';
 import { figureText } from '@/lib/units/entry';
@@ -16,7 +17,7 @@ const SHAPES: [Spread['shape'], string][] = [
 ];
 
 /** A spread of another shape with about the same size; the first guess is a twentieth of the value. */
-function reshaped(shape: Spread['shape'], { value, spread }: Quantity): Spread {
+function reshaped(path: string, shape: Spread['shape'], { value, spread }: Quantity): Spread {
   const half =
     spread?.shape === 'normal'
       ? 2 * spread.sd
@@ -25,8 +26,10 @@ function reshaped(shape: Spread['shape'], { value, spread }: Quantity): Spread {
         : Math.max(Math.abs(value) / 20, 0.01);
   if (shape === 'fixed') return { shape };
   if (shape === 'normal') return { shape, sd: half / 2 };
-  const [low, high] = [value - half, value + half].map((x) => Number(x.toPrecision(6)));
-  return { shape, low, high };
+  const { low: least, high: most, lowOpen } = supportOf(path);
+  const low = lowOpen && value - half <= least ? value / 2 : Math.max(least, value - half);
+  const [from, to] = [low, Math.min(most, value + half)].map((x) => Number(x.toPrecision(6)));
+  return { shape, low: from, high: to };
 }
 
 /** Shape and size of a spread, and where the value comes from. */
@@ -71,7 +74,9 @@ export function LedgerSpread({
         <select
           aria-label={`Shape of the spread of ${name}`}
           value={spread.shape}
-          onChange={(event) => set({ ...quantity, spread: reshaped(event.target.value as Spread['shape'], quantity) })}
+          onChange={(event) =>
+            set({ ...quantity, spread: reshaped(path, event.target.value as Spread['shape'], quantity) })
+          }
         >
           {SHAPES.map(([shape, words]) => (
             <option key={shape} value={shape}>

@@ -126,7 +126,10 @@ function RestTools({ id, spin }: { id: VehicleId; spin: SpinDeparture }) {
       type="button"
       className={buttons.quiet}
       aria-label={`${words}, ${id}`}
-      onClick={() => edit(`${words.toLowerCase()} (${id})`, { do: 'set', path, to })}
+      onClick={() => {
+        edit(`${words.toLowerCase()} (${id})`, { do: 'set', path, to });
+        if (path === at) focusNext(`field-departure.${id}`);
+      }}
     >
       {words}
     </button>

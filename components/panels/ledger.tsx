@@ -19,7 +19,7 @@ export function Ledger() {
   const [traced, setTraced] = useState<ResultName>('A.approachSpeed');
   const units = casefile.display?.units ?? 'metric';
   const fields = useMemo(() => fieldsOf(casefile), [casefile]);
-  const marks = useMemo(() => marksOf(result, issues), [result, issues]);
+  const marks = useMemo(() => marksOf(fields, result, issues), [fields, result, issues]);
   const shares = result?.sensitivity[traced];
   const frame = useFollowedSelection();
 
@@ -86,12 +86,21 @@ const marksIn = (marks: ReadonlyMap<string, string>, rows: readonly Field[], id:
   rows.filter(({ path }) => marks.has(path)).length + (marks.has(id.replace('after', 'departure')) ? 1 : 0);
 
 /** Why each path is pointed at: by the method, or by a check that speaks up. */
-function marksOf(result: Result | null, issues: readonly { path: string; says: string }[]): Map<string, string> {
+function marksOf(
+  fields: readonly Field[],
+  result: Result | null,
+  issues: readonly { path: string; says: string }[],
+): Map<string, string> {
   const marks = new Map<string, string>();
   for (const check of result?.checks ?? [])
     if (check.level === 'caution' || check.level === 'fail')
       for (const path of check.paths) if (!marks.has(path)) marks.set(path, check.says);
-  for (const { path, says } of issues) marks.set(path.replace(/\.(value|spread.*)$/, ''), says);
+  for (const { path, says } of issues) {
+    const own = path.replace(/\.(value|spread.*)$/, '');
+    // What names several rows, as a whole leg does, marks the first of them.
+    const row = fields.find((field) => field.path === own || field.path.startsWith(`${own}.`));
+    marks.set(row?.path ?? own, says);
+  }
   return marks;
 }
 

@@ -136,7 +136,26 @@ function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
 }
 
 /** Parts of a case that stand for a group of rows, not for one. */
-const WHOLE_GROUPS: Record<string, string> = { 'departure.A': 'After contact, A', 'departure.B': 'After contact, B' };
+/** What is no row of its own and may still be pointed at by a refusal or a check. */
+const WHOLE_GROUPS: Record<string, string> = {
+  approach: 'Before contact',
+  departure: 'After contact',
+  'departure.A': 'After contact, A',
+  'departure.B': 'After contact, B',
+  'departure.A.rest': 'A: Rest pose',
+  'departure.B.rest': 'B: Rest pose',
+  impact: 'Contact',
+  'analysis.method': 'Method',
+  'analysis.contact': 'Kind of contact',
+  vehicles: 'Vehicles',
+  'vehicles.A.seats': 'A: Seats',
+  'vehicles.B.seats': 'B: Seats',
+};
+
+function groupLabel(path: string): string {
+  const leg = /^departure\.([AB])\.legs\.(\d+)$/.exec(path);
+  return leg ? `${leg[1]}: Leg ${Number(leg[2]) + 1}` : (WHOLE_GROUPS[path] ?? path);
+}
 
 const WHEELS = [
   ['frontLeft', 'front left'],
@@ -167,10 +186,19 @@ function spinFields({ wheels, slope }: SpinDeparture, id: VehicleId): Field[] {
   ];
 }
 
+/** The rows of the cases that are asked about; listed once for each. */
+const listed = new WeakMap<CaseFile, Field[]>();
+
+function fieldsFor(casefile: CaseFile): Field[] {
+  const known = listed.get(casefile) ?? fieldsOf(casefile);
+  listed.set(casefile, known);
+  return known;
+}
+
 /** The words for the value at a path, for checks and refusals; the path itself where no row has it. */
 export function labelOf(casefile: CaseFile, path: string): string {
-  const found = fieldsOf(casefile).find((f) => path === f.path || path.startsWith(`${f.path}.`));
-  if (!found) return WHOLE_GROUPS[path] ?? path;
+  const found = fieldsFor(casefile).find((f) => path === f.path || path.startsWith(`${f.path}.`));
+  if (!found) return groupLabel(path);
   const vehicle = /^(?:after\.)?([AB])$/.exec(found.group)?.[1];
   return vehicle ? `${vehicle}: ${found.label}` : found.label;
 }

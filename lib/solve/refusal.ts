@@ -29,7 +29,7 @@ export function refusalOf(central: Central): Issue | null {
   if (problem.method === 'restitution' && state.e < LEAST_RESTITUTION - 1e-12)
     return {
       path: 'impact.restitution',
-      says: `the restitution ${state.e} is below 0.05: the speed of parting would be multiplied more than 20 times, so no answer is given`,
+      says: `the restitution ${Number(state.e.toPrecision(3))} is below 0.05: the speed of parting would be multiplied more than 20 times, so no answer is given`,
     };
   if (reason === 'notParting')
     return {

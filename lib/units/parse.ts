@@ -28,6 +28,8 @@ export function parseEntry(text: string, dimension: Dimension, system: UnitSyste
     const [main, spread, ...more] = clean.split(PLUS_MINUS);
     if (more.length > 0) throw new Unreadable('± stands twice');
     if (spread !== undefined) return withSpread(main, spread, dimension, system);
+    const dashed = DASHED.exec(clean);
+    if (dashed) throw new Unreadable(`«${clean}» may be a range: write it as ${dashed[1]}..${dashed[2]}`);
     const ends = clean.split(RANGE);
     if (ends.length === 2) return fromRange(ends[0], ends[1], dimension, system);
     return { ok: true, value: read(clean, dimension, system).toNumber() };
@@ -36,6 +38,9 @@ export function parseEntry(text: string, dimension: Dimension, system: UnitSyste
     throw error;
   }
 }
+
+/** Two figures with a dash between them. */
+const DASHED = /^([\d.,]+)\s*-\s*([\d.,]+)$/;
 
 class Unreadable extends Error {}
 

@@ -59,6 +59,7 @@ describe('what cannot be read says why and what would be right', () => {
     ['5 ± 1 ± 2', 'mass', /± stands twice/],
     ['6 in 12 ft', 'length', /wrong order/],
     ['1/0 in', 'length', /divides by zero/],
+    ['0.65-0.75', 'ratio', /may be a range: write it as 0\.65\.\.0\.75/],
     ['3 kg', 'ratio', /«kg» is no unit known here: write %/],
     ['1.2.3', 'mass', /more than one decimal mark/],
     ['--3', 'angle', /is not a number/],

@@ -1,28 +1,20 @@
 import { type Page, expect, test } from '@playwright/test';
 import { AnswerStrip, DrawingBoard } from './drawing';
-import { CaseDesk, OpenCase } from './keeping';
+import { type OpenCase, openExample } from './keeping';
 
-/** A copy of an example, open, so that tests do not disturb each other. */
-async function copyOf(
-  page: Page,
-  title: string,
-): Promise<{ board: DrawingBoard; answer: AnswerStrip; open: OpenCase }> {
-  const desk = new CaseDesk(page);
-  await desk.open();
-  await desk.duplicate(title);
-  await page.waitForURL(/\/cases\/.+/);
-  const [board, answer, open] = [new DrawingBoard(page), new AnswerStrip(page), new OpenCase(page)];
-  await open.ready();
+/** The example at a junction, open and answered. */
+async function junction(page: Page): Promise<{ board: DrawingBoard; answer: AnswerStrip; open: OpenCase }> {
+  const open = await openExample(page, 'junction');
+  const [board, answer] = [new DrawingBoard(page), new AnswerStrip(page)];
   await board.ready();
   await answer.settled();
   return { board, answer, open };
 }
 
-const JUNCTION = 'Angled contact at a junction';
 const field = (page: Page, path: string) => page.locator(`[id="field-${path}"]`);
 
 test('the answer follows a drag while it is under way, and settles after it', async ({ page }) => {
-  const { board, answer } = await copyOf(page, JUNCTION);
+  const { board, answer } = await junction(page);
   const before = await answer.strip().textContent();
   await board.press([2.35, 1.63]); // the handle ahead of the nose of B
   await board.moveTo([1.4, 2.1]);
@@ -35,7 +27,7 @@ test('the answer follows a drag while it is under way, and settles after it', as
 test('what is drawn stands in the ledger, what is typed stands on the board, and undo takes both back', async ({
   page,
 }) => {
-  const { board, open } = await copyOf(page, JUNCTION);
+  const { board, open } = await junction(page);
   const x = field(page, 'impact.A.x');
   await expect(x).toHaveValue('\u22122.05 ± 0.08');
   await board.drag([-3.2, 0.9], [-3.7, 0.9]);
@@ -50,7 +42,7 @@ test('what is drawn stands in the ledger, what is typed stands on the board, and
 });
 
 test('an entry that cannot be read says why, and the last good value stays in force', async ({ page }) => {
-  const { answer } = await copyOf(page, JUNCTION);
+  const { answer } = await junction(page);
   const mass = field(page, 'vehicles.A.mass');
   const before = await mass.inputValue();
   await mass.fill('12 furlong');
@@ -63,7 +55,7 @@ test('an entry that cannot be read says why, and the last good value stays in fo
 });
 
 test('work beyond half a second shows its progress and can be cancelled', async ({ page }) => {
-  const { answer } = await copyOf(page, JUNCTION);
+  const { answer } = await junction(page);
   const draws = page.getByRole('textbox', { name: 'Draws' });
   await draws.fill('5000000');
   await draws.press('Enter');
@@ -76,7 +68,7 @@ test('work beyond half a second shows its progress and can be cancelled', async 
 });
 
 test('a failing check withholds the figures and says why', async ({ page }) => {
-  const { answer } = await copyOf(page, JUNCTION);
+  const { answer } = await junction(page);
   const direction = field(page, 'approach.B.direction');
   await direction.fill('4');
   await direction.press('Enter');

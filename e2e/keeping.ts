@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { readFile } from 'node:fs/promises';
 import { type Locator, type Page, expect } from '@playwright/test';
 
@@ -86,6 +87,19 @@ export class OpenCase {
   id(): string {
     return new URL(this.page.url()).pathname.split('/')[2];
   }
+}
+
+/**
+ * An example as a case of its own, open, so that tests do not disturb each other: its title is like no other's.
+ * @param name the file's name in public/examples, without its ending
+ */
+export async function openExample(page: Page, name: string): Promise<OpenCase> {
+  const example = JSON.parse(await readFile(`public/examples/${name}.case.json`, 'utf8'));
+  const made = await page.request.post('/api/cases', { data: { ...example, title: `${name} ${randomUUID()}` } });
+  expect(made.status()).toBe(201);
+  const open = new OpenCase(page);
+  await open.visit((await made.json()).id);
+  return open;
 }
 
 /** Waits until the page answers to its user: React has taken over what the server drew. */

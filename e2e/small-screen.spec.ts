@@ -1,18 +1,12 @@
 import { expect, test } from '@playwright/test';
 import { AnswerStrip } from './drawing';
-import { CaseDesk, OpenCase } from './keeping';
-
-const JUNCTION = 'Angled contact at a junction';
+import { OpenCase, openExample } from './keeping';
 
 test.describe('a narrow screen', () => {
   test.use({ viewport: { width: 390, height: 844 } });
 
   test('shows the ledger below the board, and a value can be changed there', async ({ page }) => {
-    const desk = new CaseDesk(page);
-    await desk.open();
-    await desk.duplicate(JUNCTION);
-    await page.waitForURL(/\/cases\/.+/);
-    await new OpenCase(page).ready();
+    await openExample(page, 'junction');
     const answer = new AnswerStrip(page);
     await answer.settled();
     const mass = page.locator('[id="field-vehicles.A.mass"]');

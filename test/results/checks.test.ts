@@ -111,7 +111,7 @@ const ON: Case[] = [
 ];
 
 /** Checks of travel that is simulated to a rest pose. */
-const SIMULATED = ['restPose', 'otherTurns'];
+const SIMULATED = ['restPose', 'otherTurns', 'secondContact'];
 
 describe('simulated travel', () => {
   const simulated = async (...edits: Edit[]) => {

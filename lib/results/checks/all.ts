@@ -12,6 +12,7 @@ import { overlap } from './overlap';
 import { otherTurns } from './other-turns';
 import { restPose } from './rest-pose';
 import { restitutionRange } from './restitution-range';
+import { secondContact } from './second-contact';
 import { sideSlip } from './side-slip';
 import { slidingReversal } from './sliding-reversal';
 import { speedRange } from './speed-range';
@@ -35,6 +36,7 @@ export const CHECKS: readonly CheckRule[] = [
   tyreImpulse,
   restPose,
   otherTurns,
+  secondContact,
   speedRange,
   misfit,
   impossibleShare,

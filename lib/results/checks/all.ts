@@ -16,22 +16,42 @@ import { sideSlip } from './side-slip';
 import { slidingReversal } from './sliding-reversal';
 import { speedRange } from './speed-range';
 import { tyreImpulse } from './tyre-impulse';
+import { correlated } from './correlated';
+import { heavyHeading } from './heavy-heading';
+import { planeShare } from './plane-share';
+import { leverArm } from './lever-arm';
+import { rotation } from './rotation';
+import { engagement } from './engagement';
+import { sideswipe } from './sideswipe';
+import { energyShare } from './energy-share';
+import { restitutionTests } from './restitution-tests';
+import { seatDeltaVDiffers } from './seat-delta-v';
 import { wide } from './wide';
 import { yawMismatch } from './yaw-mismatch';
 
 /** Every check, in the order in which they are listed. */
 export const CHECKS: readonly CheckRule[] = [
   energyGain,
+  energyShare,
   restitutionRange,
+  restitutionTests,
   friction,
   slidingReversal,
+  sideswipe,
   closing,
   contactPoint,
   overlap,
+  engagement,
+  leverArm,
+  planeShare,
   nearlyInLine,
+  heavyHeading,
+  correlated,
   amplification,
   sideSlip,
   yawMismatch,
+  rotation,
+  seatDeltaVDiffers,
   tyreImpulse,
   restPose,
   otherTurns,

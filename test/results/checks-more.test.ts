@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { q } from '../support/build-case';
-import { contextOf, findingOf, levelIn, set, withAnswer, withCentral } from '../support/check-context';
+import { contextOf, editedCase, findingOf, levelIn, set, withAnswer, withCentral } from '../support/check-context';
 import { MORE_ON } from './more-checks-on';
 
 /** The further checks, each on and off in whole cases, and each of their limits from both sides. */
@@ -179,4 +179,48 @@ test('seatDeltaV: 10 % or 1 km/h, whichever is less', async () => {
   };
   expect([await at(2, 0.199), await at(2, 0.201)]).toEqual(['pass', 'note']);
   expect([await at(5, 0.277), await at(5, 0.278)]).toEqual(['pass', 'note']);
+});
+
+describe('travel', () => {
+  const leg = (distance: number, drag: number, grade = 0) => ({
+    distance: q(distance),
+    friction: q(0.5),
+    share: q(drag / 0.5),
+    grade: q(grade),
+  });
+  const legsOfB = (...legs: unknown[]) => contextOf('queue', [set('departure.B.legs', legs)], { draws: 1 });
+  test('coasting: 3 m at a drag below 0.05, over all such legs', async () => {
+    const at = async (...legs: unknown[]) => levelIn('coasting', await legsOfB(...legs));
+    expect([await at(leg(2.99, 0.02)), await at(leg(3.01, 0.02))]).toEqual(['pass', 'caution']);
+    expect([await at(leg(1.6, 0.02), leg(1.6, 0.03)), await at(leg(9, 0.051))]).toEqual(['caution', undefined]);
+  });
+  test('gradeAgainstDrag: a fifth of the drag, up or down', async () => {
+    const at = async (grade: number) => levelIn('gradeAgainstDrag', await legsOfB(leg(3, 0.1, grade)));
+    expect([await at(0.0199), await at(0.0201), await at(-0.0201)]).toEqual(['pass', 'caution', 'caution']);
+  });
+  test('both look at simulated travel too, where rolling resistance is the least drag', async () => {
+    const rolling = [
+      set('departure.A.wheels', { all: { braking: q(0) } }),
+      set('departure.A.slope', { grade: q(0.0021), uphill: q(0) }),
+    ];
+    const context = await contextOf('spin-straight', [], { draws: 1 });
+    const casefile = editedCase('spin-straight', rolling);
+    expect(findingOf('gradeAgainstDrag', { ...context, casefile })?.value).toBeCloseTo(0.21, 9);
+    expect(levelIn('coasting', { ...context, casefile })).toBe('caution');
+  });
+  test('driverControlled: not where nothing is simulated', async () =>
+    expect(levelIn('driverControlled', await contextOf('queue'))).toBeUndefined());
+  test('driverControlled: within 3 degrees of the way, only after 10 m', async () => {
+    const at = async (x: number, heading: number) =>
+      levelIn(
+        'driverControlled',
+        await contextOf(
+          'spin-straight',
+          [set('departure.A.rest.x', q(x)), set('departure.A.rest.heading', q(heading))],
+          { draws: 1 },
+        ),
+      );
+    expect([await at(7.5, 0), await at(8.1, 0)]).toEqual(['pass', 'caution']);
+    expect([await at(9, 2.9), await at(9, 3.1)]).toEqual(['caution', 'pass']);
+  });
 });

@@ -26,6 +26,17 @@ const loose = [
   set('impact.restitution', q(0.3, 0.04)),
 ];
 
+/** Even depths over 1.2 m; force and stiffness of a front, invented. */
+export const damage = (depth: number, forceAngle = 0) => ({
+  depths: [q(depth), q(depth)],
+  width: q(1.2, 0.05),
+  forceAngle: q(forceAngle),
+  a: q(40_000, 4000),
+  b: q(600_000, 60_000),
+});
+const both = (a: unknown, b: unknown) => [set('damage', { A: a, B: b })];
+const agreeing = both(damage(0.03), damage(0.03));
+
 export const MORE_ON: Switch[] = [
   { id: 'energyShare', level: 'caution', name: 'junction', on: [set('departure.A.yawRate', q(-40))], else: 'pass' },
   { id: 'restitutionTests', level: 'note', name: 'queue', on: [set('impact.restitution', q(0.7))], else: 'pass' },
@@ -51,4 +62,49 @@ export const MORE_ON: Switch[] = [
   { id: 'correlated', level: 'caution', name: 'queue', on: loose, else: 'pass' },
   { id: 'rotation', level: 'caution', name: 'junction', on: nothingMeasured, else: undefined },
   { id: 'seatDeltaV', level: 'note', name: 'junction', on: [], else: undefined, off: [set('vehicles.A.seats', [])] },
+  {
+    id: 'damageEnergy',
+    level: 'caution',
+    name: 'queue',
+    on: both(damage(0.1), damage(0.1)),
+    else: 'pass',
+    off: agreeing,
+  },
+  {
+    id: 'damageSpeed',
+    level: 'caution',
+    name: 'queue',
+    on: both(damage(0.2), damage(0.2)),
+    else: 'pass',
+    off: agreeing,
+  },
+  { id: 'forceAngle', level: 'caution', name: 'queue', on: both(damage(0.03, 20), null), else: 'pass', off: agreeing },
+  { id: 'crushIntercept', level: 'caution', name: 'queue', on: agreeing, else: 'pass', off: both(damage(0.2), null) },
+  { id: 'noDamage', level: 'caution', name: 'queue', on: both(damage(0), null), else: 'pass', off: agreeing },
+  { id: 'oneVehicle', level: 'caution', name: 'queue', on: both(null, damage(0.03)), else: 'pass', off: agreeing },
+  {
+    id: 'coasting',
+    level: 'caution',
+    name: 'queue',
+    on: [
+      set('departure.B.legs.0.share', q(0.02)),
+      set('departure.B.legs.0.distance', q(9)),
+      set('departure.A.legs.0.distance', q(0.01)),
+    ],
+    else: undefined,
+  },
+  {
+    id: 'gradeAgainstDrag',
+    level: 'caution',
+    name: 'queue',
+    on: [set('departure.B.legs.0.grade', q(0.15))],
+    else: 'pass',
+  },
+  {
+    id: 'driverControlled',
+    level: 'caution',
+    name: 'spin-straight',
+    on: [set('departure.A.rest.x', q(14)), set('departure.A.rest.heading', q(0))],
+    else: 'pass',
+  },
 ];

@@ -26,6 +26,15 @@ import { sideswipe } from './sideswipe';
 import { energyShare } from './energy-share';
 import { restitutionTests } from './restitution-tests';
 import { seatDeltaVDiffers } from './seat-delta-v';
+import { damageEnergy } from './damage-energy';
+import { damageSpeed } from './damage-speed';
+import { forceAngle } from './force-angle';
+import { crushIntercept } from './crush-intercept';
+import { noDamage } from './no-damage';
+import { oneVehicle } from './one-vehicle';
+import { coasting } from './coasting';
+import { gradeAgainstDrag } from './grade-against-drag';
+import { driverControlled } from './driver-controlled';
 import { wide } from './wide';
 import { yawMismatch } from './yaw-mismatch';
 
@@ -55,6 +64,15 @@ export const CHECKS: readonly CheckRule[] = [
   tyreImpulse,
   restPose,
   otherTurns,
+  driverControlled,
+  coasting,
+  gradeAgainstDrag,
+  damageEnergy,
+  damageSpeed,
+  forceAngle,
+  crushIntercept,
+  noDamage,
+  oneVehicle,
   speedRange,
   misfit,
   impossibleShare,

@@ -35,6 +35,12 @@ import { oneVehicle } from './one-vehicle';
 import { coasting } from './coasting';
 import { gradeAgainstDrag } from './grade-against-drag';
 import { driverControlled } from './driver-controlled';
+import { recorded } from './recorded';
+import { knownSpeed } from './known-speed';
+import { recorderPulse } from './recorder-pulse';
+import { recorderResolution } from './recorder-resolution';
+import { recorderLateral } from './recorder-lateral';
+import { restitutionRegression } from './restitution-regression';
 import { wide } from './wide';
 import { yawMismatch } from './yaw-mismatch';
 
@@ -44,6 +50,7 @@ export const CHECKS: readonly CheckRule[] = [
   energyShare,
   restitutionRange,
   restitutionTests,
+  restitutionRegression,
   friction,
   slidingReversal,
   sideswipe,
@@ -75,6 +82,11 @@ export const CHECKS: readonly CheckRule[] = [
   oneVehicle,
   speedRange,
   misfit,
+  knownSpeed,
+  recorded,
+  recorderPulse,
+  recorderResolution,
+  recorderLateral,
   impossibleShare,
   wide,
 ];

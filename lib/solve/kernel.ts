@@ -130,7 +130,7 @@ export class Kernel {
   }
 
   private solveDraw(k: number): void {
-    const { problem, state, answer } = this;
+    const { problem, state } = this;
     const { A, B } = problem.vehicles;
     const lost = this.loadVehicle(k, 'A', A, state.A) || this.loadVehicle(k, 'B', B, state.B);
     if (lost !== 0) {

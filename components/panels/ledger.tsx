@@ -6,6 +6,7 @@ import { type Field, type GroupId, GROUPS, fieldsOf } from '@/lib/casefile/field
 import { HEADLINES, type ResultName, resultLabel } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
 import type { UnitSystem } from '@/lib/units/dimension';
+import { LedgerDamage } from './ledger-damage';
 import { LedgerRow } from './ledger-row';
 import { LedgerSeats } from './ledger-seats';
 import { LedgerSettings } from './ledger-settings';
@@ -78,6 +79,8 @@ function GroupTools({ id, units, marks }: { id: GroupId; units: UnitSystem; mark
   if (id === 'A' || id === 'B') return <LedgerSeats id={id} units={units} />;
   if (id === 'after.A') return <LedgerTravel id="A" mark={marks.get('departure.A') ?? null} />;
   if (id === 'after.B') return <LedgerTravel id="B" mark={marks.get('departure.B') ?? null} />;
+  if (id === 'damage.A') return <LedgerDamage id="A" mark={marks.get(id) ?? null} />;
+  if (id === 'damage.B') return <LedgerDamage id="B" mark={marks.get(id) ?? null} />;
   return null;
 }
 
@@ -92,15 +95,13 @@ function marksOf(
   issues: readonly { path: string; says: string }[],
 ): Map<string, string> {
   const marks = new Map<string, string>();
+  // What names several rows, as a whole leg does, marks the first of them.
+  const rowOf = (path: string): string =>
+    fields.find((field) => field.path === path || field.path.startsWith(`${path}.`))?.path ?? path;
   for (const check of result?.checks ?? [])
     if (check.level === 'caution' || check.level === 'fail')
-      for (const path of check.paths) if (!marks.has(path)) marks.set(path, check.says);
-  for (const { path, says } of issues) {
-    const own = path.replace(/\.(value|spread.*)$/, '');
-    // What names several rows, as a whole leg does, marks the first of them.
-    const row = fields.find((field) => field.path === own || field.path.startsWith(`${own}.`));
-    marks.set(row?.path ?? own, says);
-  }
+      for (const path of check.paths.map(rowOf)) if (!marks.has(path)) marks.set(path, check.says);
+  for (const { path, says } of issues) marks.set(rowOf(path.replace(/\.(value|spread.*)$/, '')), says);
   return marks;
 }
 

@@ -1,4 +1,4 @@
-import type { CaseFile, Departure, Leg, Quantity, SpinDeparture, Vehicle } from './schema';
+import type { CaseFile, Damage, Departure, Leg, Quantity, SpinDeparture, Vehicle } from './schema';
 
 /** The source of a value that nobody has touched; shown and printed as such. */
 export const DEFAULT_SOURCE = 'default, not measured';
@@ -76,6 +76,18 @@ export const defaultSpin = (x: number, y: number, heading: number): Departure =>
   slope: null,
   onset: null,
   wheels: { all: { braking: rectangular(0.5, 0.2, 0.8) } },
+});
+
+/** A depth of damage to begin with, m. */
+export const defaultDepth = (): Quantity => normal(0.02, 0.01);
+
+/** Damage to begin with: shallow over a bumper's width, with the stiffness of no vehicle in particular. */
+export const defaultDamage = (): Damage => ({
+  depths: Array.from({ length: 4 }, defaultDepth),
+  width: normal(1.2, 0.1),
+  forceAngle: normal(0, 10),
+  a: normal(40_000, 15_000),
+  b: normal(600_000, 250_000),
 });
 
 /** A slope to begin with: level, rising along +x. */

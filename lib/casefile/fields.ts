@@ -27,6 +27,9 @@ export const GROUPS = [
   { id: 'before', title: 'Before contact' },
   { id: 'after.A', title: 'After contact, A' },
   { id: 'after.B', title: 'After contact, B' },
+  { id: 'damage.A', title: 'Damage, A' },
+  { id: 'damage.B', title: 'Damage, B' },
+  { id: 'recorded', title: 'Recorded' },
 ] as const;
 export type GroupId = (typeof GROUPS)[number]['id'];
 
@@ -104,6 +107,10 @@ export function fieldsOf(casefile: CaseFile): Field[] {
       APPROACH.map((line) => field(`approach.${id}.${line[0]}`, line, 'before', `approach.${id}`, `${id}:`)),
     ),
     ...VEHICLE_IDS.flatMap((id) => departureFields(casefile, id)),
+    ...VEHICLE_IDS.flatMap((id) => damageFields(casefile, id)),
+    ...VEHICLE_IDS.flatMap((id) =>
+      RECORDED.map((line) => field(`recorded.${id}.${line[0]}`, line, 'recorded', `vehicle.${id}`, `${id}:`)),
+    ),
   ];
 }
 
@@ -135,7 +142,26 @@ function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
   ];
 }
 
-/** Parts of a case that stand for a group of rows, not for one. */
+const RECORDED: Line[] = [
+  ['forward', 'delta-V recorded, forward', 'speed', 'optional'],
+  ['left', 'delta-V recorded, left', 'speed', 'optional'],
+];
+
+/** Force per damaged width is a + b times the depth. */
+const DAMAGE: Line[] = [
+  ['width', 'Damaged width', 'length'],
+  ['forceAngle', 'Direction of force off the normal', 'angle'],
+  ['a', 'Stiffness: force per width at no depth', 'forcePerWidth'],
+  ['b', 'Stiffness: gain of force with depth', 'stiffnessPerWidth'],
+];
+
+function damageFields(casefile: CaseFile, id: VehicleId): Field[] {
+  const depths = casefile.damage?.[id]?.depths;
+  if (!depths) return [];
+  const each = depths.map((_, k): Line => [`depths.${k}`, `Depth ${k + 1}`, 'length']);
+  return [...DAMAGE, ...each].map((line) => field(`damage.${id}.${line[0]}`, line, `damage.${id}`, `vehicle.${id}`));
+}
+
 /** What is no row of its own and may still be pointed at by a refusal or a check. */
 const WHOLE_GROUPS: Record<string, string> = {
   approach: 'Before contact',
@@ -150,6 +176,15 @@ const WHOLE_GROUPS: Record<string, string> = {
   vehicles: 'Vehicles',
   'vehicles.A.seats': 'A: Seats',
   'vehicles.B.seats': 'B: Seats',
+  'impact.slide': 'Length slid along the contact',
+  'departure.A.yawRate': 'A: Yaw rate after contact',
+  'departure.B.yawRate': 'B: Yaw rate after contact',
+  damage: 'Damage',
+  'damage.A': 'Damage, A',
+  'damage.B': 'Damage, B',
+  'damage.A.depths': 'A: Depths of damage',
+  'damage.B.depths': 'B: Depths of damage',
+  recorded: 'Recorded',
 };
 
 function groupLabel(path: string): string {
@@ -199,7 +234,7 @@ function fieldsFor(casefile: CaseFile): Field[] {
 export function labelOf(casefile: CaseFile, path: string): string {
   const found = fieldsFor(casefile).find((f) => path === f.path || path.startsWith(`${f.path}.`));
   if (!found) return groupLabel(path);
-  const vehicle = /^(?:after\.)?([AB])$/.exec(found.group)?.[1];
+  const vehicle = /^(?:after\.|damage\.)?([AB])$/.exec(found.group)?.[1];
   return vehicle ? `${vehicle}: ${found.label}` : found.label;
 }
 

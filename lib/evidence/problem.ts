@@ -40,6 +40,8 @@ export interface LocalSeparation {
 
 /** Where a search for a separation begins: the central one, and how it answers to the rest pose. */
 export interface SpinStart extends LocalSeparation {
+  /** Way and turn from first touch to separation in the axes of the heading at first touch, m and rad: 0 in an instant. */
+  carried: [number, number, number];
   /** Rest less contact of the central values: m in the axes of the heading at contact, and the turn, rad. */
   reach: [number, number, number];
   /** Change of (forward, left, w) with the reach: the inverse of the Jacobian of the simulation, by rows. */
@@ -64,8 +66,6 @@ export interface SpinSlots {
   /** Front left, front right, rear left, rear right; one slot may serve all. */
   braking: Slot[];
   steer: (Slot | null)[];
-  /** m, fixed. */
-  track: number;
   surfaces: { outline: [number, number][]; friction: Slot }[];
   /** Filled in once the central values are solved. */
   start: SpinStart | null;
@@ -90,6 +90,7 @@ export interface VehicleSlots {
   frontAxleToMassCentre: Slot;
   /** m, fixed. */
   wheelbase: number;
+  track: number;
   x: Slot;
   y: Slot;
   heading: Slot;
@@ -104,8 +105,17 @@ export interface VehicleSlots {
 /** The methods that this version solves. */
 export type SolvedMethod = Exclude<Method, 'fit'>;
 
+/** A contact of finite duration: who carries the contact line. */
+export interface LastingSlots {
+  lineOn: VehicleId;
+  /** s */
+  pulse: Slot;
+}
+
 export interface Problem {
   method: SolvedMethod;
+  /** null: the impact is an instant. */
+  lasting: LastingSlots | null;
   inputs: Input[];
   vehicles: Record<VehicleId, VehicleSlots>;
   pointX: Slot;

@@ -7,11 +7,6 @@ import { readVehicle } from './read-vehicle';
 /** What a case asks for that this version does not compute, as the reason of an unsolved case; null when it does. */
 export function notYetSolved(casefile: CaseFile, method: Method): Issue | null {
   if (method === 'fit') return { path: 'analysis.method', says: 'this version does not solve the method fit yet' };
-  if (casefile.analysis.contact === 'lasting')
-    return {
-      path: 'analysis.contact',
-      says: 'this version does not solve the contact lasting yet: choose instant',
-    };
   return null;
 }
 
@@ -23,15 +18,18 @@ export function readEvidence(casefile: CaseFile, method: SolvedMethod, seed: num
   const list = new InputList();
   const { impact, vehicles, pulse } = casefile;
   const known = method === 'restitution';
+  const duration = list.siIf('pulse', pulse);
+  const lasts = casefile.analysis.contact === 'lasting' && duration !== null;
   return {
     method,
+    lasting: lasts ? { lineOn: impact.lineOn ?? 'B', pulse: duration } : null,
     vehicles: { A: readVehicle(list, casefile, method, 'A'), B: readVehicle(list, casefile, method, 'B') },
     pointX: list.si('impact.point.x', impact.point.x),
     pointY: list.si('impact.point.y', impact.point.y),
     plane: list.angle('impact.plane', impact.plane),
     restitution: known ? list.siIf('impact.restitution', impact.restitution) : null,
     impulseRatio: known ? list.siIf('impact.impulseRatio', impact.impulseRatio) : null,
-    pulse: list.siIf('pulse', pulse),
+    pulse: duration,
     seats: { A: vehicles.A.seats ?? [], B: vehicles.B.seats ?? [] },
     seed,
     inputs: list.inputs,

@@ -26,6 +26,7 @@ export function readVehicle(list: InputList, casefile: CaseFile, method: SolvedM
     inertiaEstimated: !spec.yawInertia,
     frontAxleToMassCentre: list.add(massCentre(`vehicles.${id}.frontAxleToMassCentre`, spec)),
     wheelbase: spec.wheelbase,
+    track: spec.track,
     x: list.si(`impact.${id}.x`, pose.x),
     y: list.si(`impact.${id}.y`, pose.y),
     heading: list.angle(`impact.${id}.heading`, pose.heading),
@@ -74,7 +75,6 @@ function readSpin(list: InputList, casefile: CaseFile, spin: SpinDeparture, id: 
     uphill: list.angleIf(`${at}.slope.uphill`, spin.slope?.uphill),
     braking: WHEELS.map((w) => all ?? list.si(`${at}.wheels.${w}.braking`, (each as FourWheels)[w].braking)),
     steer: WHEELS.map((w) => (each ? list.angle(`${at}.wheels.${w}.steer`, each[w].steer) : null)),
-    track: casefile.vehicles[id].track,
     surfaces: (casefile.scene?.surfaces ?? []).map(({ outline, friction }, k) => ({
       outline,
       friction: list.shared(`scene.surfaces.${k}.friction`, friction),

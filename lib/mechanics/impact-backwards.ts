@@ -16,6 +16,10 @@ export interface VehicleState extends Body {
   /** Unit vector of the approach (directions). */
   hx: number;
   hy: number;
+  /** What the road gave the vehicle while the contact lasted: impulse, N s, and change of the yaw rate, rad/s; 0 in an instant. */
+  roadX: number;
+  roadY: number;
+  roadW: number;
 }
 
 export interface ImpactState {
@@ -77,6 +81,9 @@ const emptyVehicleState = (): VehicleState => ({
   wMeasured: NaN,
   hx: 1,
   hy: 0,
+  roadX: 0,
+  roadY: 0,
+  roadW: 0,
 });
 
 /** A state to be filled in, used again for every draw. */
@@ -119,22 +126,23 @@ export const LEAST_RESTITUTION = 0.05;
 
 /**
  * Method directions: momentum along both approach directions gives both speeds and the impulse,
- * mA sA hA + mB sB hB = mA vA' + mB vB', J = mB (vB' - sB hB); restitution and impulse ratio follow at the contact point.
+ * mA sA hA + mB sB hB = mA vA' + mB vB' - IA - IB, J = mB (vB' - sB hB) - IB, with I what the road gave while the contact
+ * lasted; restitution and impulse ratio follow at the contact point.
  * Fills `out` with all that exists and returns why the answer is impossible, or null.
  */
 export function solveDirections(s: ImpactState, out: ImpactAnswer): Reason | null {
   const { A, B } = s;
   setFrame(s, out.frame);
   setApproach(s, out);
-  const Jx = B.m * (B.vx - out.B.vx);
-  const Jy = B.m * (B.vy - out.B.vy);
+  const Jx = B.m * (B.vx - out.B.vx) - B.roadX;
+  const Jy = B.m * (B.vy - out.B.vy) - B.roadY;
   const { nx, ny, dAx, dAy, dBx, dBy } = out.frame;
   out.Jn = Jx * nx + Jy * ny;
   out.Jt = Jy * nx - Jx * ny;
   out.A.wBefore = A.wBefore;
   out.B.wBefore = B.wBefore;
-  out.A.wPredicted = A.wBefore - cross(dAx, dAy, Jx, Jy) / A.I;
-  out.B.wPredicted = B.wBefore + cross(dBx, dBy, Jx, Jy) / B.I;
+  out.A.wPredicted = A.wBefore - cross(dAx, dAy, Jx, Jy) / A.I + A.roadW;
+  out.B.wPredicted = B.wBefore + cross(dBx, dBy, Jx, Jy) / B.I + B.roadW;
   out.A.wAfter = Number.isNaN(A.wMeasured) ? out.A.wPredicted : A.wMeasured;
   out.B.wAfter = Number.isNaN(B.wMeasured) ? out.B.wPredicted : B.wMeasured;
   setClosing(out);
@@ -147,8 +155,8 @@ export function solveDirections(s: ImpactState, out: ImpactAnswer): Reason | nul
 
 /** Approach speeds and velocities from momentum, with the figures that say how well it fixes them. */
 function setApproach({ A, B }: ImpactState, out: ImpactAnswer): void {
-  const Px = A.m * A.vx + B.m * B.vx;
-  const Py = A.m * A.vy + B.m * B.vy;
+  const Px = A.m * A.vx + B.m * B.vx - A.roadX - B.roadX;
+  const Py = A.m * A.vy + B.m * B.vy - A.roadY - B.roadY;
   const between = cross(A.hx, A.hy, B.hx, B.hy);
   out.A.speed = cross(Px, Py, B.hx, B.hy) / (A.m * between);
   out.B.speed = cross(A.hx, A.hy, Px, Py) / (B.m * between);

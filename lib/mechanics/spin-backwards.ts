@@ -19,6 +19,10 @@ export interface Pose {
   heading: number;
 }
 
+/** The largest difference between two poses: m, and rad of the heading. */
+export const farthest = (a: Pose, b: Pose): number =>
+  Math.max(Math.abs(a.x - b.x), Math.abs(a.y - b.y), Math.abs(a.heading - b.heading));
+
 export interface Inversion {
   /** Whether the rest pose is met to within the tolerance; else what came nearest is answered. */
   met: boolean;

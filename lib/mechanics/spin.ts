@@ -78,8 +78,9 @@ export function fourWheels(
 export class TyreMotion {
   private readonly force = { along: 0, across: 0 };
   private readonly cosGrade: number;
-  private readonly downhillX: number;
-  private readonly downhillY: number;
+  /** Acceleration by the grade, m/s^2. */
+  readonly downhillX: number;
+  readonly downhillY: number;
   private readonly tyres;
 
   constructor(

@@ -61,3 +61,31 @@ export class BogackiShampine {
     for (let i = 0; i < y.length; i++) out[i] = y[i] + a * (next[i] - y[i]) + b * h * ((1 - s) * dy[i] - s * dyNext[i]);
   }
 }
+
+/** The classical method of Runge and Kutta, order 4, with steps of one length: smooth in its inputs, as a search needs it. */
+export class RungeKutta {
+  private readonly k: Float64Array[];
+  private readonly at: Float64Array;
+
+  constructor(
+    private readonly f: Derivative,
+    length: number,
+  ) {
+    this.at = new Float64Array(length);
+    this.k = [1, 2, 3, 4].map(() => new Float64Array(length));
+  }
+
+  /** Moves y from t to t + h. */
+  step(t: number, h: number, y: Float64Array): void {
+    const { f, at } = this;
+    const [k1, k2, k3, k4] = this.k;
+    f(t, y, k1);
+    for (let i = 0; i < y.length; i++) at[i] = y[i] + (h / 2) * k1[i];
+    f(t + h / 2, at, k2);
+    for (let i = 0; i < y.length; i++) at[i] = y[i] + (h / 2) * k2[i];
+    f(t + h / 2, at, k3);
+    for (let i = 0; i < y.length; i++) at[i] = y[i] + h * k3[i];
+    f(t + h, at, k4);
+    for (let i = 0; i < y.length; i++) y[i] += (h / 6) * (k1[i] + 2 * k2[i] + 2 * k3[i] + k4[i]);
+  }
+}

@@ -54,14 +54,18 @@ export const assumptionsSection = (casefile: CaseFile): Section => ({
 function assumptions(casefile: CaseFile): string[] {
   return [
     'Both vehicles are rigid bodies that move in one plane, apart from the damage at one common contact point.',
-    'The contact is instantaneous: the vehicles do not move while it lasts, and the tyres give no impulse during it. How far that holds is bounded by the check on tyre impulse.',
+    casefile.analysis.contact === 'lasting'
+      ? 'The contact lasts as long as stated, with a force that rises and falls as a half sine at one point fixed in one body; the tyres of both vehicles push meanwhile, and what they give is reckoned in. Vehicles on legs then have the friction and the retardation share of their first leg at every wheel.'
+      : 'The contact is instantaneous: the vehicles do not move while it lasts, and the tyres give no impulse during it. How far that holds is bounded by the check on tyre impulse.',
     'Over each leg of the travel friction, retardation share and grade are constant.',
     ...(Object.values(casefile.departure).some((travel) => travel?.kind === 'spin')
       ? [
           'Simulated travel: four wheels under their static loads, with the braking and steer stated, on one plane; no one drove, and nothing was struck on the way.',
         ]
       : []),
-    ...(casefile.pulse ? ['The contact duration serves the accelerations only; it does not enter the speeds.'] : []),
+    ...(casefile.pulse && casefile.analysis.contact !== 'lasting'
+      ? ['The contact duration serves the accelerations only; it does not enter the speeds.']
+      : []),
     'Inputs whose spread is not stated are taken as exact, and inputs are drawn independently of each other.',
   ];
 }

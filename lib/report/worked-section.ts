@@ -3,6 +3,7 @@ import type { Result } from '@/lib/results/result';
 import type { Block, Section } from './report';
 import { failuresOf } from './failures';
 import { largestDifference, workedCalculation } from './worked/calculation';
+import { roadGiven } from './worked/road';
 import { withSimulatedGiven } from './worked/simulated';
 import { WORKED_DIGITS } from './worked/figure';
 
@@ -11,7 +12,7 @@ const SAME = 1e-9;
 
 /** The calculation at the central values, line by line, with how well its ends agree with the engine. */
 export function workedSection(casefile: CaseFile, result: Result): Section | null {
-  const sheet = workedCalculation(withSimulatedGiven(casefile, result.central), result.method);
+  const sheet = workedCalculation(withSimulatedGiven(casefile, result.central), result.method, roadGiven(result));
   if (!sheet) return null;
   const failed: Block[] =
     failuresOf(result).length === 0
@@ -33,7 +34,8 @@ export function workedSection(casefile: CaseFile, result: Result): Section | nul
           'Every line can be checked by hand: the formula, the numbers put in, the answer. SI units throughout. ' +
           `Figures are carried unrounded and printed to ${WORKED_DIGITS} significant digits, so a hand check with the printed figures may differ in the last of them. ` +
           agreement(largestDifference(sheet, result.central)) +
-          (isSimulated(casefile) ? SIMULATED : ''),
+          (isSimulated(casefile) ? SIMULATED : '') +
+          (casefile.analysis.contact === 'lasting' ? LASTING : ''),
       },
       { kind: 'symbols', rows: SYMBOLS },
       { kind: 'steps', chapters: sheet.chapters },
@@ -45,6 +47,9 @@ const isSimulated = ({ departure: { A, B } }: CaseFile): boolean => A?.kind === 
 
 const SIMULATED =
   ' Where the travel of a vehicle is simulated, its separation is taken from the simulation as given: those steps cannot be written out by hand.';
+
+const LASTING =
+  ' What the tyres gave while the contact lasted is taken from the simulation of the contact as given, for the same reason.';
 
 const agreement = (difference: number): string =>
   difference < SAME
@@ -61,6 +66,7 @@ const SYMBOLS: [string, string][] = [
   ['!v, ω', 'velocity and yaw rate'],
   ['!c, !u', 'velocity of the contact point on a vehicle; relative velocity A less B there'],
   ['!J', 'impulse on B'],
+  ['!T, τ', 'impulse and change of the yaw rate that the road gave while the contact lasted'],
   ['e, μ', 'restitution, impulse ratio'],
   ['d_{k}, f_{k}, q_{k}, G_{k}', 'distance, friction, retardation share, grade of leg k'],
   ['ψ, x, y', 'heading; seat position in vehicle axes'],

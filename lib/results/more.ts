@@ -1,6 +1,7 @@
 import { tyreShareOf } from '@/lib/evidence/tyre-share';
-import { VEHICLE_IDS } from '@/lib/casefile/schema';
+import { VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
 import { atan2, hypot } from '@/lib/numerics/elementary';
+import { PAIR } from '@/lib/mechanics/pair-motion';
 import { peakAcceleration } from '@/lib/mechanics/pulse';
 import type { Solution } from '@/lib/solve/solve';
 import type { Result } from './result';
@@ -31,11 +32,34 @@ export function moreOf(solution: Solution): Result['more'] {
     angularMomentumBefore: angularMomentum(solution, 'before'),
     angularMomentumAfter: angularMomentum(solution, 'after'),
     tyreShare: tyreShareOf(problem, figures.impulse) ?? undefined,
+    ...lastingFigures(solution),
   };
   const finite = Object.entries(more).filter(([, value]) =>
     [value].flat().every((x) => typeof x === 'number' && Number.isFinite(x)),
   );
   return { ...Object.fromEntries(finite), ...separationsOf(solution) };
+}
+
+/** What a contact that lasts was like. */
+function lastingFigures({ central: { lasting, state, figures } }: Solution): Result['more'] {
+  if (!lasting?.pushed) return {};
+  const { pushed, duration } = lasting;
+  const of = (id: VehicleId, at: number): [string, number | [number, number]][] => {
+    const tyres = hypot(pushed.y[at], pushed.y[at + 1]);
+    const { roadX, roadY, roadW } = state[id];
+    return [
+      [`${id}.tyreImpulse`, tyres],
+      [`${id}.tyreShare`, tyres / figures.impulse],
+      [`${id}.roadImpulse`, [roadX, roadY]],
+      [`${id}.roadYawRate`, roadW * DEGREES_PER_RADIAN],
+    ];
+  };
+  return {
+    contactDuration: duration,
+    penetration: pushed.penetration,
+    slide: pushed.slide,
+    ...Object.fromEntries([...of('A', PAIR.tyresA), ...of('B', PAIR.tyresB)]),
+  };
 }
 
 /** Every separation that leads to a measured rest pose, that answered first. */

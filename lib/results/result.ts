@@ -90,6 +90,20 @@ export const resultSchema = z
       angularMomentumAfter: number.optional(),
       /** Tyre impulse over contact impulse, an upper bound. */
       tyreShare: number.optional(),
+      /** A contact that lasts: its duration, s; the greatest depth of the contact point beyond the line and the way it slid along it, m. */
+      contactDuration: number.optional(),
+      penetration: number.optional(),
+      slide: number.optional(),
+      /** What the tyres gave meanwhile, N s, and over the contact impulse. */
+      'A.tyreImpulse': number.optional(),
+      'B.tyreImpulse': number.optional(),
+      'A.tyreShare': number.optional(),
+      'B.tyreShare': number.optional(),
+      /** What the road gave meanwhile, grade included: impulse in the world, N s, and change of the yaw rate, deg/s. */
+      'A.roadImpulse': z.tuple([number, number]).optional(),
+      'B.roadImpulse': z.tuple([number, number]).optional(),
+      'A.roadYawRate': number.optional(),
+      'B.roadYawRate': number.optional(),
     }),
   })
   .meta({ id: 'RetrodictResult', title: 'Retrodict result file, version 1' });

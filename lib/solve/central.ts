@@ -3,7 +3,8 @@ import type { Problem } from '@/lib/evidence/problem';
 import type { ImpactAnswer, ImpactState, Reason } from '@/lib/mechanics/impact-backwards';
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
 import { type FigureName, columnOf, figuresOf } from './columns';
-import { Kernel } from './kernel';
+import { CENTRAL_STEPS, Kernel } from './kernel';
+import type { LastingDirections } from './lasting-directions';
 import { type SpinsFound, findSpins } from './spin-central';
 
 /** The answer with every input at its value. */
@@ -20,12 +21,14 @@ export interface Central {
   figures: Record<FigureName, number>;
   state: ImpactState;
   answer: ImpactAnswer;
+  /** The contact that lasts, where the case asks for one. */
+  lasting: LastingDirections | null;
 }
 
 /** Solves every input at its value, and first looks for the separations of simulated travel. */
 export function solveCentral(asked: Problem): Central {
   const { problem, spins } = findSpins(asked);
-  const kernel = new Kernel(problem);
+  const kernel = new Kernel(problem, CENTRAL_STEPS);
   const reason = kernel.solveCentral();
   const figures = Object.fromEntries(
     figuresOf(problem).map((name) => [name, columnOf(kernel.columns, name)[0]]),
@@ -38,6 +41,7 @@ export function solveCentral(asked: Problem): Central {
     figures,
     state: kernel.state,
     answer: kernel.answer,
+    lasting: kernel.lasting,
   };
 }
 

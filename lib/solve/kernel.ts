@@ -18,11 +18,25 @@ import { closingSpeedFromWork, obliqueFactor, stripWork } from '@/lib/mechanics/
 import { estimatedYawInertia } from '@/lib/mechanics/inertia';
 import { meanAcceleration } from '@/lib/mechanics/pulse';
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
-import { DRAW_ERROR, separateDraw, targetOf } from './spin-travel';
+import { LastingDirections } from './lasting-directions';
+import {
+  type Departing,
+  DRAW_ERROR,
+  type Met,
+  carriedOn,
+  isNear,
+  separateDraw,
+  shifted,
+  targetOf,
+} from './spin-travel';
 import { type VehicleColumns, type Columns, makeColumns } from './columns';
 
 /** Draws are made and solved in blocks of this many; draw k of an input depends on (seed, path, k) alone. */
 export const BLOCK = 1024;
+
+/** Steps through a contact that lasts: of a draw, and of the central answer. */
+const DRAW_STEPS = 12;
+export const CENTRAL_STEPS = 400;
 
 /** A speed below this has no direction, m/s. */
 const STANDING = 1e-9;
@@ -58,9 +72,19 @@ export class Kernel {
   readonly inputs: Float64Array[];
   private readonly own: Record<VehicleId, Travelled> = { A: freshTravel(), B: freshTravel() };
   private travelled = { ...this.own };
+  /** The separation of simulated travel that was found last. */
+  private met: Record<VehicleId, Met | null> = { A: null, B: null };
   private kept: Record<VehicleId, boolean> = { A: false, B: false };
 
-  constructor(readonly problem: Problem) {
+  /** The contact that lasts, where the problem has one: the records of the draw solved last. */
+  readonly lasting: LastingDirections | null;
+
+  /** `steps`: of a contact that lasts, at least. */
+  constructor(
+    readonly problem: Problem,
+    steps = DRAW_STEPS,
+  ) {
+    this.lasting = problem.lasting && new LastingDirections(problem, problem.lasting, steps);
     this.inputs = problem.inputs.map((input) => new Float64Array(BLOCK).fill(input.value));
     this.columns = makeColumns(BLOCK);
   }
@@ -106,7 +130,7 @@ export class Kernel {
   }
 
   private solveDraw(k: number): void {
-    const { problem, state, answer } = this;
+    const { problem, state } = this;
     const { A, B } = problem.vehicles;
     const lost = this.loadVehicle(k, 'A', A, state.A) || this.loadVehicle(k, 'B', B, state.B);
     if (lost !== 0) {
@@ -116,14 +140,52 @@ export class Kernel {
     state.px = this.inputs[problem.pointX][k];
     state.py = this.inputs[problem.pointY][k];
     state.plane = this.inputs[problem.plane][k];
-    let reason: Reason | null;
-    if (problem.restitution !== null && problem.impulseRatio !== null) {
-      state.e = this.inputs[problem.restitution][k];
-      state.mu = this.inputs[problem.impulseRatio][k];
-      reason = solveRestitution(state, answer);
-    } else reason = solveDirections(state, answer);
+    const reason = this.solveContact(k);
     this.reasons[k] = reason === null ? 0 : 1 + REASONS.indexOf(reason);
     this.write(k);
+  }
+
+  private solveContact(k: number): Reason | null {
+    const { problem, state, answer, inputs } = this;
+    if (problem.restitution !== null && problem.impulseRatio !== null) {
+      state.e = inputs[problem.restitution][k];
+      state.mu = inputs[problem.impulseRatio][k];
+      return solveRestitution(state, answer);
+    }
+    if (!this.lasting) return solveDirections(state, answer);
+    return this.lasting.solve(inputs, k, state, answer, (id, departing) => this.separateAgain(k, id, departing));
+  }
+
+  /** Finds the separation of a vehicle whose travel is simulated. */
+  private separate(k: number, id: VehicleId, departing: Departing): boolean {
+    const slots = this.problem.vehicles[id];
+    if (slots.departure.kind !== 'spin') return true;
+    const body = this.state[id];
+    const target = targetOf(this.inputs, k, slots, slots.departure, body, departing, DRAW_ERROR);
+    const met = separateDraw(target, slots.departure, body);
+    this.met[id] = { target, vx: body.vx, vy: body.vy, w: body.wMeasured };
+    return met;
+  }
+
+  /** The same for travel that begins elsewhere: shifted from the one found last while it is near, else found anew. */
+  private separateAgain(k: number, id: VehicleId, departing: Departing): boolean {
+    const { departure } = this.problem.vehicles[id];
+    const found = this.met[id];
+    if (!found || departure.kind !== 'spin' || !departure.start) return false;
+    if (!isNear(found.target.from, departing.from)) return this.separate(k, id, departing);
+    const body = this.state[id];
+    [body.vx, body.vy, body.wMeasured] = shifted(found, departing.from, departure.start);
+    return true;
+  }
+
+  /** Where and when the simulated travel of a draw begins: at first touch, or where a contact that lasts is thought to end. */
+  private departing(k: number, { x, y, heading, departure }: VehicleSlots): Departing {
+    const { inputs } = this;
+    const pose = { x: inputs[x][k], y: inputs[y][k], heading: inputs[heading][k] };
+    const carried = departure.kind === 'spin' ? departure.start?.carried : undefined;
+    const { lasting } = this.problem;
+    if (!lasting || !carried) return { from: pose, elapsed: 0 };
+    return { from: carriedOn(pose, carried), elapsed: inputs[lasting.pulse][k] };
   }
 
   /** All that is known of one vehicle. Answers why its travel cannot have been, as in `reasons`, or 0. */
@@ -137,21 +199,20 @@ export class Kernel {
     }
     vehicle.wBefore = slots.approachYawRate === null ? 0 : inputs[slots.approachYawRate][k];
     const travelled = this.travelled[id];
-    if (!this.kept[id]) this.findTravel(k, slots, vehicle, travelled);
+    if (!this.kept[id]) this.findTravel(k, id, vehicle, travelled);
     vehicle.vx = travelled.vx[k];
     vehicle.vy = travelled.vy[k];
     vehicle.wMeasured = travelled.w[k];
     return travelled.lost[k];
   }
 
-  private findTravel(k: number, slots: VehicleSlots, vehicle: VehicleState, to: Travelled): void {
-    const { departure } = slots;
-    to.lost[k] =
-      departure.kind === 'legs'
-        ? this.loadLegs(k, departure, vehicle)
-        : separateDraw(targetOf(this.inputs, k, slots, departure, vehicle, DRAW_ERROR), departure, vehicle)
-          ? 0
-          : NO_REST;
+  private findTravel(k: number, id: VehicleId, vehicle: VehicleState, to: Travelled): void {
+    const slots = this.problem.vehicles[id];
+    if (slots.departure.kind === 'legs') to.lost[k] = this.loadLegs(k, slots.departure, vehicle);
+    else {
+      const departing = this.departing(k, slots);
+      to.lost[k] = this.separate(k, id, departing) ? 0 : NO_REST;
+    }
     to.vx[k] = vehicle.vx;
     to.vy[k] = vehicle.vy;
     to.w[k] = vehicle.wMeasured;

@@ -36,6 +36,11 @@ export function refusalOf(central: Central): Issue | null {
       path: 'impact.plane',
       says: 'the vehicles do not part at the contact point after contact, so the restitution cannot tell how fast they closed: look at the travel after contact, the yaw rates, the contact point and the plane',
     };
+  if (reason === 'neverParts')
+    return {
+      path: 'pulse',
+      says: 'the contact never parts as stated: what the tyres give while it lasts does not settle against the travel after it; look at the contact duration, the braking and the travel, or take the contact as an instant',
+    };
   if (reason === 'notFinite')
     return { path: 'vehicles', says: 'the figures are too large or too small to compute with' };
   return null;

@@ -1,4 +1,4 @@
-import { VEHICLE_IDS } from '@/lib/casefile/schema';
+import { VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
 import type { Problem } from '@/lib/evidence/problem';
 import { travelSlots } from '@/lib/evidence/travel-slots';
 import { type FigureName, columnOf } from './columns';
@@ -39,7 +39,7 @@ export function sobolIndices(
     b.solve(count);
     slots.forEach((slot, s) => {
       ab.inputs[slot] = b.inputs[slot];
-      for (const id of VEHICLE_IDS) if (!travel[id].has(slot)) ab.keepTravel(id, a);
+      for (const id of VEHICLE_IDS) if (!travel[id].has(slot) && isApart(problem, id)) ab.keepTravel(id, a);
       ab.solve(count);
       ab.forgetTravel();
       ab.inputs[slot] = a.inputs[slot];
@@ -52,6 +52,10 @@ export function sobolIndices(
     total: sums[s].map((sum) => sum.total()),
   }));
 }
+
+/** Whether the travel of a vehicle hangs on its own inputs alone: a contact that lasts decides where a simulated one begins. */
+const isApart = ({ lasting, vehicles }: Problem, id: VehicleId): boolean =>
+  lasting === null || vehicles[id].departure.kind === 'legs';
 
 const rowsOf = (kernel: Kernel, name: FigureName) => ({
   values: columnOf(kernel.columns, name),

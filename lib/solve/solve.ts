@@ -97,9 +97,9 @@ function drawTasks(from: number, draws: number, perTask = DRAWS_PER_TASK): Task[
   return tasks;
 }
 
-/** Whether the travel of a vehicle is simulated. */
-const isSimulated = ({ vehicles: { A, B } }: Problem): boolean =>
-  A.departure.kind === 'spin' || B.departure.kind === 'spin';
+/** Whether a draw takes simulations: of the travel, or of a contact that lasts. */
+const isSimulated = ({ lasting, vehicles: { A, B } }: Problem): boolean =>
+  lasting !== null || A.departure.kind === 'spin' || B.departure.kind === 'spin';
 
 function sobolTasks(problem: Problem, figures: FigureName[]): Task[] {
   if (figures.length === 0) return [];

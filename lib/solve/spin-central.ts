@@ -1,4 +1,4 @@
-import type { VehicleId } from '@/lib/casefile/schema';
+import { VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
 import type { Problem, SpinSlots, SpinStart } from '@/lib/evidence/problem';
 import { G } from '@/lib/mechanics/legs';
 import type { VehicleState } from '@/lib/mechanics/impact-backwards';
@@ -11,10 +11,12 @@ import {
   missOf,
   solve3,
 } from '@/lib/mechanics/spin-backwards';
+import { PAIR } from '@/lib/mechanics/pair-motion';
 import { TyreMotion } from '@/lib/mechanics/spin';
 import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
-import { Kernel } from './kernel';
-import { meanBraking, reachOf, targetOf } from './spin-travel';
+import { CENTRAL_STEPS, Kernel } from './kernel';
+import { type Moment, travelPath } from './travel-path';
+import { carriedOn, meanBraking, targetOf, wayBetween } from './spin-travel';
 
 /** Position error, m, that a simulation of the central answer aims at, and how near it must come, m and rad. */
 const ERROR = 1e-7;
@@ -31,28 +33,81 @@ export interface SpinFound {
   otherTurns: Inversion[];
   /** What came nearest, where none meets it. */
   nearest: Inversion | null;
+  /** The travel of the separation that is answered, or else of the nearest; empty where there is none. */
+  path: Moment[];
 }
 
 export type SpinsFound = Record<VehicleId, SpinFound | null>;
 
 /** Looks for the separations of the vehicles whose travel is simulated, and fills in where their draws begin. */
-export function findSpins(problem: Problem): { problem: Problem; spins: SpinsFound } {
+export function findSpins(asked: Problem): { problem: Problem; spins: SpinsFound } {
+  let carried: Carried = { A: [0, 0, 0], B: [0, 0, 0] };
+  let found = searched(asked, carried);
+  if (!asked.lasting) return found;
+  for (let round = 0; round < MOST_ROUNDS; round++) {
+    const next = carriedBy(found.problem);
+    if (!next || settled(next, carried)) break;
+    carried = next;
+    found = searched(asked, carried);
+  }
+  return found;
+}
+
+/** Way and turn of each vehicle from first touch to separation, in the axes of its heading at first touch. */
+type Carried = Record<VehicleId, [number, number, number]>;
+
+/** How often a contact that lasts and the travel after it are matched, and how near they must come, m and rad. */
+const MOST_ROUNDS = 12;
+const MATCHED = 2e-6;
+
+const settled = (a: Carried, b: Carried): boolean =>
+  VEHICLE_IDS.every((id) => a[id].every((v, i) => Math.abs(v - b[id][i]) < MATCHED));
+
+/** Where a contact that lasts leaves the vehicles; null where it could not be solved. */
+function carriedBy(problem: Problem): Carried | null {
+  if (VEHICLE_IDS.some((id) => isLost(problem, id))) return null;
+  const kernel = new Kernel(problem, CENTRAL_STEPS);
+  kernel.solveCentral();
+  const { inputs, lasting } = kernel;
+  if (!lasting?.pushed) return null;
+  const { y } = lasting.pushed;
+  const of = (id: VehicleId): [number, number, number] => {
+    const slots = problem.vehicles[id];
+    const pose = { x: inputs[slots.x][0], y: inputs[slots.y][0], heading: inputs[slots.heading][0] };
+    const at = PAIR[id];
+    return wayBetween(pose, { x: y[at], y: y[at + 1], heading: y[at + 2] });
+  };
+  return { A: of('A'), B: of('B') };
+}
+
+/** A vehicle whose travel is simulated and for which no separation was found. */
+const isLost = ({ vehicles }: Problem, id: VehicleId): boolean => {
+  const { departure } = vehicles[id];
+  return departure.kind === 'spin' && departure.start === null;
+};
+
+/** The separations for travel that begins where the contact has carried the vehicles. */
+function searched(problem: Problem, carried: Carried): { problem: Problem; spins: SpinsFound } {
   const kernel = new Kernel(problem);
   const spins: SpinsFound = { A: null, B: null };
   const vehicles = { ...problem.vehicles };
-  for (const id of ['A', 'B'] as const) {
-    const spin = problem.vehicles[id].departure;
+  for (const id of VEHICLE_IDS) {
+    const slots = problem.vehicles[id];
+    const spin = slots.departure;
     if (spin.kind !== 'spin') continue;
-    const body = kernel.loadBody(0, problem.vehicles[id], kernel.state[id]);
-    const target = targetOf(kernel.inputs, 0, problem.vehicles[id], spin, body, ERROR);
+    const body = kernel.loadBody(0, slots, kernel.state[id]);
+    const touch = { x: body.x, y: body.y, heading: kernel.inputs[slots.heading][0] };
+    const elapsed = problem.lasting ? kernel.inputs[problem.lasting.pulse][0] : 0;
+    const departing = { from: carriedOn(touch, carried[id]), elapsed };
+    const target = targetOf(kernel.inputs, 0, slots, spin, body, departing, ERROR);
     const found = findSeparations(target, body);
-    spins[id] = found;
     const best = found.separations[0];
-    if (best)
-      vehicles[id] = {
-        ...vehicles[id],
-        departure: { ...spin, start: startOf(target, best.separation) } satisfies SpinSlots,
-      };
+    const shown = best ?? found.nearest;
+    spins[id] = { ...found, path: shown ? travelPath(target, shown.separation, elapsed) : [] };
+    if (best) {
+      const start = { ...startOf(target, best.separation), carried: carried[id] };
+      vehicles[id] = { ...slots, departure: { ...spin, start } satisfies SpinSlots };
+    }
   }
   return { problem: { ...problem, vehicles }, spins };
 }
@@ -60,7 +115,7 @@ export function findSpins(problem: Problem): { problem: Problem; spins: SpinsFou
 const energyOf = ({ m, I }: VehicleState, { vx, vy, w }: Separation): number =>
   (m * (vx * vx + vy * vy) + I * w * w) / 2;
 
-function findSeparations(target: Target, body: VehicleState): SpinFound {
+function findSeparations(target: Target, body: VehicleState): Omit<SpinFound, 'path'> {
   const all = guesses(target).map((guess) => invertFrom(target, guess, MET));
   const turns = [FULL_TURN, -FULL_TURN].flatMap((turn) => {
     const other = { ...target, to: { ...target.to, heading: target.to.heading + turn } };
@@ -104,7 +159,7 @@ function guesses(target: Target): Separation[] {
   });
 }
 
-function startOf(target: Target, separation: Separation): SpinStart {
+function startOf(target: Target, separation: Separation): Omit<SpinStart, 'carried'> {
   const [c, s] = [cos(target.from.heading), sin(target.from.heading)];
   const { vx, vy, w } = separation;
   const J = jacobian(target, [vx, vy, w]);
@@ -126,7 +181,7 @@ function startOf(target: Target, separation: Separation): SpinStart {
     forward: vx * c + vy * s,
     left: vy * c - vx * s,
     w,
-    reach: reachOf(target),
+    reach: wayBetween(target.from, target.to),
     inverse: intoLocal(world, c, s),
     friction: target.motion.ground.friction,
     braking: meanBraking(target),

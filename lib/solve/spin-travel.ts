@@ -1,10 +1,9 @@
 import type { LocalSeparation, SpinSlots, SpinStart, VehicleSlots } from '@/lib/evidence/problem';
-import { holds } from '@/lib/geometry/polygon';
 import type { VehicleState } from '@/lib/mechanics/impact-backwards';
-import { type Ground, TyreMotion, fourWheels } from '@/lib/mechanics/spin';
 import { brakingWithRolling } from '@/lib/mechanics/wheel';
-import { type Target, invertFrom, missOf } from '@/lib/mechanics/spin-backwards';
+import { type Pose, type Target, farthest, invertFrom, missOf } from '@/lib/mechanics/spin-backwards';
 import { cos, sin } from '@/lib/numerics/elementary';
+import { roadUnder } from './road';
 
 /** Position error, m, that a simulation of a draw aims at. */
 export const DRAW_ERROR = 5e-5;
@@ -14,52 +13,38 @@ const MOST_STEPS = 12;
 /** Where the coarse simulation is too uneven to search on, m. */
 const FINER_ERROR = 1e-6;
 
-/** The target of one draw: the vehicle under its tyres as drawn, its pose at contact and its pose at rest. */
+/** When and where the travel of a draw begins: the pose, and the time since first touch, s. */
+export interface Departing {
+  from: Pose;
+  elapsed: number;
+}
+
+/** The target of one draw: the vehicle under its tyres as drawn, where its travel begins and its pose at rest. */
 export function targetOf(
   inputs: readonly Float64Array[],
   k: number,
   slots: VehicleSlots,
   spin: SpinSlots,
   body: VehicleState,
+  { from, elapsed }: Departing,
   error: number,
 ): Target {
-  const at = (slot: number | null): number => (slot === null ? 0 : inputs[slot][k]);
-  const settings = spin.braking.map((slot, i) => ({ braking: at(slot), steer: at(spin.steer[i]) }));
-  const wheels = fourWheels(
-    {
-      m: body.m,
-      wheelbase: slots.wheelbase,
-      track: spin.track,
-      frontAxleToMassCentre: at(slots.frontAxleToMassCentre),
-    },
-    settings,
-  );
-  const ground: Ground = {
-    friction: at(spin.friction),
-    frictionAt: frictionAt(inputs, k, spin),
-    grade: at(spin.grade),
-    uphill: at(spin.uphill),
-  };
   return {
-    motion: new TyreMotion({ m: body.m, I: body.I, wheels }, ground, at(spin.onset)),
-    from: { x: body.x, y: body.y, heading: at(slots.heading) },
-    to: { x: at(spin.restX), y: at(spin.restY), heading: at(spin.restHeading) },
+    motion: roadUnder(inputs, k, slots, body, elapsed),
+    from,
+    to: { x: inputs[spin.restX][k], y: inputs[spin.restY][k], heading: inputs[spin.restHeading][k] },
     error,
   };
 }
 
-/** Of overlapping surfaces the last listed counts. */
-function frictionAt(inputs: readonly Float64Array[], k: number, spin: SpinSlots): Ground['frictionAt'] {
-  if (spin.surfaces.length === 0) return null;
-  const elsewhere = inputs[spin.friction][k];
-  return (x, y) => {
-    const under = spin.surfaces.findLast(({ outline }) => holds(outline, [x, y]));
-    return under ? inputs[under.friction][k] : elsewhere;
-  };
+/** A pose carried on by a way and a turn in the axes of its heading, m and rad. */
+export function carriedOn({ x, y, heading }: Pose, [forward, left, turn]: readonly number[]): Pose {
+  const [c, s] = [cos(heading), sin(heading)];
+  return { x: x + forward * c - left * s, y: y + forward * s + left * c, heading: heading + turn };
 }
 
-/** Rest less contact in the axes of the heading at contact: m, m, rad. */
-export function reachOf({ from, to }: Target): [number, number, number] {
+/** The way and the turn from one pose to another in the axes of the first, m and rad. */
+export function wayBetween(from: Pose, to: Pose): [number, number, number] {
   const [c, s] = [cos(from.heading), sin(from.heading)];
   const [dx, dy] = [to.x - from.x, to.y - from.y];
   return [dx * c + dy * s, dy * c - dx * s, to.heading - from.heading];
@@ -85,11 +70,36 @@ export function separateDraw(target: Target, spin: SpinSlots, body: VehicleState
   return true;
 }
 
+/** A separation that was found, in world axes, and for what. */
+export interface Met {
+  target: Target;
+  vx: number;
+  vy: number;
+  w: number;
+}
+
+/** As far as a separation is shifted with the beginning of its travel instead of found anew, m and rad. */
+const NEAR = 0.02;
+
+export const isNear = (a: Pose, b: Pose): boolean => farthest(a, b) < NEAR;
+
+/** A separation shifted to travel that begins nearby, by the central answer to the rest pose: (vx, vy, w) in world axes. */
+export function shifted({ target, vx, vy, w }: Met, from: Pose, start: SpinStart): number[] {
+  const before = wayBetween(target.from, target.to);
+  const by = times(
+    start.inverse,
+    wayBetween(from, target.to).map((d, i) => d - before[i]),
+  );
+  const [c, s] = [cos(target.from.heading), sin(target.from.heading)];
+  const local = { forward: vx * c + vy * s + by[0], left: vy * c - vx * s + by[1], w: w + by[2] };
+  return turned(local, from.heading);
+}
+
 /** The central separation, moved with the rest pose, the friction and the braking of the draw. */
 function predicted(target: Target, start: SpinStart): LocalSeparation {
   const ahead = times(
     start.inverse,
-    reachOf(target).map((d, i) => d - start.reach[i]),
+    wayBetween(target.from, target.to).map((d, i) => d - start.reach[i]),
   );
   const friction = target.motion.ground.friction / start.friction - 1;
   const braking = meanBraking(target) / start.braking - 1;

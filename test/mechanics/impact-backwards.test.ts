@@ -202,11 +202,14 @@ describe('where the scene lies, and which vehicle is called A, does not matter',
   );
 });
 
+/** An instant: the road gives nothing meanwhile. */
+const NO_ROAD = { roadX: 0, roadY: 0, roadW: 0 };
+
 describe('reasons', () => {
   /** A comes down on B from the north while B comes from the west; both stop each other's motion in part. */
   const state = (change: Partial<ImpactState> = {}): ImpactState => ({
-    A: { m: 1000, I: 1500, x: 0, y: 1, vx: 1, vy: -3, wBefore: 0, wMeasured: NaN, hx: 0, hy: -1 },
-    B: { m: 1000, I: 1500, x: 0, y: -1, vx: 4, vy: -4, wBefore: 0, wMeasured: NaN, hx: 1, hy: 0 },
+    A: { m: 1000, I: 1500, x: 0, y: 1, vx: 1, vy: -3, wBefore: 0, wMeasured: NaN, hx: 0, hy: -1, ...NO_ROAD },
+    B: { m: 1000, I: 1500, x: 0, y: -1, vx: 4, vy: -4, wBefore: 0, wMeasured: NaN, hx: 1, hy: 0, ...NO_ROAD },
     px: 0,
     py: 0,
     plane: 0,

@@ -5,6 +5,7 @@ import type { CaseFile } from '@/lib/casefile/schema';
 import { parseMaths } from '@/lib/report/maths';
 import { largestDifference, workedCalculation } from '@/lib/report/worked/calculation';
 import type { Step } from '@/lib/report/worked/sheet';
+import { roadGiven } from '@/lib/report/worked/road';
 import { withSimulatedGiven } from '@/lib/report/worked/simulated';
 import type { Result } from '@/lib/results/result';
 import { solveCase } from '@/lib/solve-case';
@@ -28,7 +29,7 @@ async function solved(casefile: CaseFile): Promise<Result> {
 }
 
 const workedOf = (casefile: CaseFile, result: Result) =>
-  workedCalculation(withSimulatedGiven(casefile, result.central), result.method);
+  workedCalculation(withSimulatedGiven(casefile, result.central), result.method, roadGiven(result));
 
 async function stepsOf(casefile: CaseFile): Promise<Step[]> {
   const steps = workedOf(casefile, await solved(casefile))?.chapters.flatMap((chapter) => chapter.steps) ?? [];

@@ -7,6 +7,7 @@ import { CHECKS } from '@/lib/results/checks/all';
 import type { Check } from '@/lib/results/result';
 import { solveCase } from '@/lib/solve-case';
 import { q } from '../support/build-case';
+import { MORE_ON } from './more-checks-on';
 
 /** Every check, off and on, in whole cases: the junction and the queue, with one thing changed. */
 
@@ -111,7 +112,7 @@ const ON: Case[] = [
 ];
 
 /** Checks of travel that is simulated to a rest pose. */
-const SIMULATED = ['restPose', 'otherTurns'];
+const SIMULATED = ['restPose', 'otherTurns', 'secondContact'];
 
 describe('simulated travel', () => {
   const simulated = async (...edits: Edit[]) => {
@@ -143,8 +144,10 @@ describe('simulated travel', () => {
 describe('on', () => {
   test.each(ON)('%s: %s', async (id, level, name, edits) => expect(await levelOf(id, name, ...edits)).toBe(level));
 
-  test('every check is turned on here or with simulated travel below', () =>
-    expect(new Set([...ON.map(([id]) => id), ...SIMULATED])).toEqual(new Set(CHECKS.map(({ id }) => id))));
+  test('every check is turned on here, with simulated travel, or among the further checks', () =>
+    expect(new Set([...ON.map(([id]) => id), ...SIMULATED, ...MORE_ON.map(({ id }) => id)])).toEqual(
+      new Set(CHECKS.map(({ id }) => id)),
+    ));
 });
 
 test('every check says what it found, what to do where it speaks up, and where its limit comes from', async () => {

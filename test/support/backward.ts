@@ -14,7 +14,20 @@ export function evidenceOf(before: ImpactBefore, after: ImpactAfter): ImpactStat
     const { m, I, x, y, vx, vy, w } = before[id];
     const speed = Math.hypot(vx, vy);
     const found = after[id];
-    return { m, I, x, y, vx: found.vx, vy: found.vy, wBefore: w, wMeasured: found.w, hx: vx / speed, hy: vy / speed };
+    const road = { roadX: 0, roadY: 0, roadW: 0 };
+    return {
+      m,
+      I,
+      x,
+      y,
+      vx: found.vx,
+      vy: found.vy,
+      wBefore: w,
+      wMeasured: found.w,
+      hx: vx / speed,
+      hy: vy / speed,
+      ...road,
+    };
   };
   const { px, py, plane, e } = before;
   return { A: vehicle('A'), B: vehicle('B'), px, py, plane, e, mu: after.Jt / after.Jn };

@@ -3,6 +3,7 @@ import type { Result } from '@/lib/results/result';
 import { RESULT_NAMES, isDirection } from '@/lib/results/names';
 import { contactFrame } from './contact-frame';
 import { directionsLines } from './directions';
+import type { RoadGiven } from './road';
 import { restitutionLines } from './restitution';
 import { type Sheet, newSheet } from './sheet';
 import { speedChangeLines } from './speed-change';
@@ -13,15 +14,17 @@ import { separationVelocity } from './travel';
  * plain arithmetic, so that its ends can be held against the engine's. Null where the method or the travel has no closed
  * form to write out.
  */
-export function workedCalculation(casefile: CaseFile, method: Result['method']): Sheet | null {
+export function workedCalculation(casefile: CaseFile, method: Result['method'], road: RoadGiven | null): Sheet | null {
   const { A, B } = casefile.departure;
-  if (A?.kind !== 'legs' || B?.kind !== 'legs' || method === 'fit' || casefile.analysis.contact === 'lasting')
-    return null;
+  if (A?.kind !== 'legs' || B?.kind !== 'legs' || method === 'fit') return null;
   const sheet = newSheet();
   const frame = contactFrame(casefile, sheet);
   const travel = (id: 'A' | 'B') => separationVelocity(casefile.departure[id] as LegsDeparture, id, sheet);
   const after = { A: travel('A'), B: travel('B') };
-  const motions = (method === 'directions' ? directionsLines : restitutionLines)(casefile, frame, after, sheet);
+  const motions =
+    method === 'directions'
+      ? directionsLines(casefile, frame, after, road, sheet)
+      : restitutionLines(casefile, frame, after, sheet);
   speedChangeLines(casefile, frame, motions, sheet);
   return sheet;
 }

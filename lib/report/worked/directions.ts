@@ -3,6 +3,7 @@ import { VEHICLE_IDS } from '@/lib/casefile/schema';
 import { type Motions, energyLost, momentumBalance, relativeVelocity } from './contact-motion';
 import type { ContactFrame } from './contact-frame';
 import { degrees, figure, inner, minus, pair } from './figure';
+import { type RoadGiven, roadLines } from './road';
 import type { Sheet } from './sheet';
 import { type Vector, asDegrees, cross, dot, less, radians, scaled, size, sum, unit } from './vector';
 
@@ -14,13 +15,15 @@ export function directionsLines(
   casefile: CaseFile,
   frame: ContactFrame,
   v: Record<VehicleId, Vector>,
+  road: RoadGiven | null,
   sheet: Sheet,
 ): Motions[] {
-  const approach = approachVelocities(casefile, frame, v, sheet);
-  const J = impulse(frame, approach, v, sheet);
+  if (road) roadLines(road, sheet);
+  const approach = approachVelocities(casefile, frame, v, road, sheet);
+  const J = impulse(frame, approach, v, road, sheet);
   sheet.begin('At the contact point');
   const before = motionsBefore(casefile, approach, sheet);
-  const after = motionsAfter(casefile, frame, before, v, J, sheet);
+  const after = motionsAfter(casefile, frame, before, v, J, road, sheet);
   const [u, uAfter] = [relativeVelocity(before, frame, '', sheet), relativeVelocity(after, frame, '′', sheet)];
   const e = -uAfter.un / u.un;
   sheet.line(
@@ -41,18 +44,20 @@ function approachVelocities(
   casefile: CaseFile,
   frame: ContactFrame,
   v: Record<VehicleId, Vector>,
+  road: RoadGiven | null,
   sheet: Sheet,
 ): Record<VehicleId, Vector> {
   const { A, B } = frame;
   sheet.begin('Momentum of the pair, and the approach speeds');
-  const p = sum(scaled(v.A, A.m), scaled(v.B, B.m));
+  const after = sum(scaled(v.A, A.m), scaled(v.B, B.m));
+  const p = road ? less(less(after, road.A.impulse), road.B.impulse) : after;
+  const component = (key: 'x' | 'y'): string =>
+    `${figure(A.m)} * ${inner(v.A[key])} + ${figure(B.m)} * ${inner(v.B[key])}` +
+    (road ? ` ${minus(road.A.impulse[key])} ${minus(road.B.impulse[key])}` : '');
   sheet.line(
-    'Momentum after contact',
-    '!p = m_{A} !v_{A}′ + m_{B} !v_{B}′',
-    [
-      `(${figure(A.m)} * ${inner(v.A.x)} + ${figure(B.m)} * ${inner(v.B.x)},`,
-      `${figure(A.m)} * ${inner(v.A.y)} + ${figure(B.m)} * ${inner(v.B.y)})`,
-    ],
+    road ? 'Momentum after contact, less what the road gave' : 'Momentum after contact',
+    `!p = m_{A} !v_{A}′ + m_{B} !v_{B}′${road ? ' - !T_{A} - !T_{B}' : ''}`,
+    [`(${component('x')},`, `${component('y')})`],
     `!p = ${pair(p)} "kg m/s"`,
   );
   const h = { A: directionOfApproach(casefile, 'A', sheet), B: directionOfApproach(casefile, 'B', sheet) };
@@ -110,15 +115,21 @@ function impulse(
   frame: ContactFrame,
   before: Record<VehicleId, Vector>,
   after: Record<VehicleId, Vector>,
+  road: RoadGiven | null,
   sheet: Sheet,
 ): Vector {
   sheet.begin('Impulse');
   const m = frame.B.m;
-  const J = scaled(less(after.B, before.B), m);
+  const change = scaled(less(after.B, before.B), m);
+  const J = road ? less(change, road.B.impulse) : change;
+  const component = (key: 'x' | 'y'): string =>
+    `${figure(m)} * (${figure(after.B[key])} ${minus(before.B[key])}) ${minus(road?.B.impulse[key] ?? 0)}`;
   sheet.line(
     'Impulse on B (that on A is its opposite)',
-    '!J = m_{B} (!v_{B}′ - !v_{B})',
-    `${figure(m)} (${figure(after.B.x)} ${minus(before.B.x)}, ${figure(after.B.y)} ${minus(before.B.y)})`,
+    `!J = m_{B} (!v_{B}′ - !v_{B})${road ? ' - !T_{B}' : ''}`,
+    road
+      ? [`(${component('x')},`, `${component('y')})`]
+      : `${figure(m)} (${figure(after.B.x)} ${minus(before.B.x)}, ${figure(after.B.y)} ${minus(before.B.y)})`,
     `!J = ${pair(J)} "N s"`,
   );
   const part = (key: 'n' | 't', words: string): number => {
@@ -170,17 +181,19 @@ function motionsAfter(
   before: Motions,
   v: Record<VehicleId, Vector>,
   J: Vector,
+  road: RoadGiven | null,
   sheet: Sheet,
 ): Motions {
   const motion = (id: VehicleId) => {
     const { I, d } = frame[id];
     const turn = cross(d, J) / I;
     const sign = id === 'A' ? '-' : '+';
-    const predicted = before[id].w + (id === 'A' ? -turn : turn);
+    const byRoad = road?.[id].yawRate ?? 0;
+    const predicted = before[id].w + (id === 'A' ? -turn : turn) + byRoad;
     sheet.line(
       `Yaw rate of ${id} after contact that the impulse predicts`,
-      `ω_{${id}}′ = ω_{${id}} ${sign} frac{d_{x} J_{y} - d_{y} J_{x}}{I_{${id}}}`,
-      `${figure(before[id].w)} ${sign} frac{${inner(d.x)} * ${inner(J.y)} - ${inner(d.y)} * ${inner(J.x)}}{${figure(I)}}`,
+      `ω_{${id}}′ = ω_{${id}} ${sign} frac{d_{x} J_{y} - d_{y} J_{x}}{I_{${id}}}${road ? ` + τ_{${id}}` : ''}`,
+      `${figure(before[id].w)} ${sign} frac{${inner(d.x)} * ${inner(J.y)} - ${inner(d.y)} * ${inner(J.x)}}{${figure(I)}}${road ? ` ${minus(-byRoad)}` : ''}`,
       `ω_{${id}}′ = ${figure(predicted)} "rad/s" = ${figure(asDegrees(predicted))}" °/s"`,
     );
     return { v: v[id], w: measuredRate(casefile.departure[id] as LegsDeparture, id, sheet) ?? predicted };

@@ -1,23 +1,13 @@
 import { cos, exp, log, sin } from '@/lib/numerics/elementary';
 import { BogackiShampine } from '@/lib/numerics/ode';
 import { G } from './legs';
-import { CORNERING, brakingWithRolling, tyreForce } from './wheel';
+import { Tyre, type Wheel } from './tyre';
+import { brakingWithRolling } from './wheel';
 
 /**
  * Travel from separation to rest: a rigid vehicle in the plane on four wheels. SI and radians;
  * world axes for position and velocity.
  */
-
-/** A wheel in vehicle axes from the mass centre, m, its static load on level ground, N, and what the driver or damage does to it. */
-export interface Wheel {
-  x: number;
-  y: number;
-  load: number;
-  /** Share of friction times load, [0, 1], from the onset on; before it the wheel rolls freely. */
-  braking: number;
-  /** rad, counter-clockwise. */
-  steer: number;
-}
 
 export interface SpinVehicle {
   m: number;
@@ -93,24 +83,15 @@ export class TyreMotion {
     this.cosGrade = 1 / slope;
     this.downhillX = (-G * ground.grade * cos(ground.uphill)) / slope;
     this.downhillY = (-G * ground.grade * sin(ground.uphill)) / slope;
-    this.tyres = vehicle.wheels.map((wheel) => ({
-      ...wheel,
-      cosSteer: cos(wheel.steer),
-      sinSteer: sin(wheel.steer),
-      tyre: {
-        load: wheel.load * this.cosGrade,
-        friction: ground.friction,
-        braking: 0,
-        stiffness: CORNERING * wheel.load * this.cosGrade,
-      },
-    }));
+    this.tyres = vehicle.wheels.map((wheel) => new Tyre(wheel, wheel.load * this.cosGrade, ground.friction));
   }
 
   /** dy/dt of the motion y at offset `at` of a longer state, at t s after separation. */
   derivative = (t: number, y: Float64Array, dy: Float64Array, at = 0): void => {
-    const { force, ground } = this;
+    const { force, ground, tyres } = this;
     const { m, I } = this.vehicle;
-    const [x0, y0, w] = [y[at], y[at + 1], y[at + 5]];
+    const braked = t >= this.onset;
+    const w = y[at + 5];
     const c = cos(y[at + 2]);
     const s = sin(y[at + 2]);
     const forward = y[at + 3] * c + y[at + 4] * s;
@@ -118,18 +99,13 @@ export class TyreMotion {
     let fx = 0;
     let fy = 0;
     let moment = 0;
-    for (const wheel of this.tyres) {
-      const { tyre, x, y: yw, cosSteer, sinSteer } = wheel;
-      tyre.friction = ground.frictionAt ? ground.frictionAt(x0 + c * x - s * yw, y0 + s * x + c * yw) : ground.friction;
-      tyre.braking = brakingWithRolling(t < this.onset ? 0 : wheel.braking, tyre.friction);
-      const hubForward = forward - w * yw;
-      const hubLeft = left + w * x;
-      tyreForce(hubForward * cosSteer + hubLeft * sinSteer, hubLeft * cosSteer - hubForward * sinSteer, tyre, force);
-      const bodyX = force.along * cosSteer - force.across * sinSteer;
-      const bodyY = force.along * sinSteer + force.across * cosSteer;
-      fx += bodyX;
-      fy += bodyY;
-      moment += x * bodyY - yw * bodyX;
+    for (let i = 0; i < tyres.length; i++) {
+      const tyre = tyres[i];
+      if (ground.frictionAt) tyre.regrip(ground.frictionAt(...tyre.under(y, at, c, s)));
+      tyre.force(forward - w * tyre.y, left + w * tyre.x, braked, force);
+      fx += force.along;
+      fy += force.across;
+      moment += tyre.x * force.across - tyre.y * force.along;
     }
     dy[at] = y[at + 3];
     dy[at + 1] = y[at + 4];
@@ -150,9 +126,9 @@ export class TyreMotion {
   private holds(y: Float64Array): boolean {
     const pull = this.vehicle.m * Math.sqrt(this.downhillX * this.downhillX + this.downhillY * this.downhillY);
     const [c, s] = [cos(y[2]), sin(y[2])];
-    const held = this.tyres.reduce((sum, { x, y: yw, tyre, braking }) => {
-      const friction = this.ground.frictionAt?.(y[0] + c * x - s * yw, y[1] + s * x + c * yw) ?? this.ground.friction;
-      return sum + brakingWithRolling(braking, friction) * friction * tyre.load;
+    const held = this.tyres.reduce((sum, tyre) => {
+      const friction = this.ground.frictionAt?.(...tyre.under(y, 0, c, s)) ?? this.ground.friction;
+      return sum + brakingWithRolling(tyre.braking, friction) * friction * tyre.load;
     }, 0);
     return held >= pull;
   }

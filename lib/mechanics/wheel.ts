@@ -10,48 +10,60 @@ export const CREEP = 0.05;
 /** Cornering stiffness over the wheel load, 1/rad. */
 export const CORNERING = 8;
 
-/** What a tyre is under: load N, friction, braking share of friction times load in [0, 1], cornering stiffness N/rad. */
-export interface Tyre {
-  load: number;
-  friction: number;
-  braking: number;
-  stiffness: number;
-}
-
 /** The braking share with rolling resistance as its floor. */
 export const brakingWithRolling = (braking: number, friction: number): number =>
   Math.min(1, Math.max(braking, ROLLING / friction));
 
-/**
- * Fiala's cubic (brush tyre, parabolic pressure): side force, N, at the tangent of the slip angle, for a stiffness (N/rad)
- * and the most the tyre can give sideways (N).
- */
-export function sideForce(tangent: number, stiffness: number, most: number): number {
-  const z = (stiffness * tangent) / most;
-  return z < 3 ? most * (z - (z * z) / 3 + (z * z * z) / 27) : most;
+/** What a tyre can give under a load, a friction and a braking share: reckoned once for as long as these stay. */
+export interface Grip {
+  friction: number;
+  /** Braking share, rolling resistance included, and its square. */
+  braking: number;
+  brakingSquared: number;
+  /** Friction times load; the braking force; the most that braking leaves sideways, N. */
+  most: number;
+  drag: number;
+  side: number;
+  /** Cornering stiffness over `side`. */
+  steepness: number;
 }
+
+/** `share`: braking without rolling resistance. */
+export function gripOf(load: number, friction: number, share: number): Grip {
+  const braking = brakingWithRolling(share, friction);
+  const most = friction * load;
+  const side = most * Math.sqrt(1 - braking * braking);
+  return {
+    friction,
+    braking,
+    brakingSquared: braking * braking,
+    most,
+    drag: braking * most,
+    side,
+    steepness: (CORNERING * load) / side,
+  };
+}
+
+/**
+ * Fiala's cubic (brush tyre, parabolic pressure): side force over the most that the tyre can give, for z = stiffness times
+ * the tangent of the slip angle over that most. It slides from z = 3 on.
+ */
+export const sideShare = (z: number): number => (z < 3 ? z * (1 - z * (1 / 3 - z / 27)) : 1);
 
 /**
  * Force on the hub, N, along and across the wheel, for the velocity (m/s) of the hub along and across it. Locked, or
  * sliding sideways: friction against the motion; else braking along and Fiala's side force under what braking leaves.
  */
-export function tyreForce(along: number, across: number, tyre: Tyre, out: { along: number; across: number }): void {
-  const speed = Math.sqrt(along * along + across * across);
-  if (speed === 0) {
-    out.along = 0;
-    out.across = 0;
-    return;
-  }
-  const most = tyre.friction * tyre.load;
-  const fade = speed < CREEP ? speed / CREEP : 1;
-  if (tyre.braking * speed >= Math.abs(along)) {
-    const drag = (-most * fade) / speed;
+export function tyreForce(along: number, across: number, grip: Grip, out: { along: number; across: number }): void {
+  const squared = along * along + across * across;
+  if (grip.brakingSquared * squared >= along * along) {
+    const drag = -grip.most / Math.max(CREEP, Math.sqrt(squared));
     out.along = drag * along;
     out.across = drag * across;
     return;
   }
-  const side = most * Math.sqrt(1 - tyre.braking * tyre.braking);
-  const across0 = sideForce(Math.abs(across / along), tyre.stiffness, side);
-  out.along = -fade * tyre.braking * most * Math.sign(along);
-  out.across = -fade * across0 * Math.sign(across);
+  const fade = squared < CREEP * CREEP ? Math.sqrt(squared) / CREEP : 1;
+  const side = fade * grip.side * sideShare(grip.steepness * Math.abs(across / along));
+  out.along = along > 0 ? -fade * grip.drag : fade * grip.drag;
+  out.across = across > 0 ? -side : side;
 }

@@ -24,7 +24,7 @@ export class BogackiShampine {
   ) {
     const fresh = (): Float64Array => new Float64Array(y.length);
     this.t = t;
-    this.y = Float64Array.from(y);
+    this.y = new Float64Array(y);
     [this.next, this.error, this.dy, this.dyNext, this.k2, this.k3] = [
       fresh(),
       fresh(),
@@ -49,9 +49,11 @@ export class BogackiShampine {
   }
 
   accept(h: number): void {
+    const { y, next, dy } = this;
     this.t += h;
-    this.y.set(this.next);
-    [this.dy, this.dyNext] = [this.dyNext, this.dy];
+    for (let i = 0; i < y.length; i++) y[i] = next[i];
+    this.dy = this.dyNext;
+    this.dyNext = dy;
   }
 
   /** The state a share s in [0, 1] of the way through the last trial of length h: cubic Hermite. */

@@ -4,7 +4,7 @@ import { type Edit, applyEdit } from '@/lib/casefile/edit';
 import { parseCase } from '@/lib/casefile/parse';
 import type { CaseFile, LegsDeparture, VehicleId } from '@/lib/casefile/schema';
 import { G } from '@/lib/mechanics/legs';
-import { tyreForce } from '@/lib/mechanics/wheel';
+import { gripOf, tyreForce } from '@/lib/mechanics/wheel';
 import { secondContact } from '@/lib/results/checks/second-contact';
 import type { CheckContext } from '@/lib/results/checks/check';
 import type { Result } from '@/lib/results/result';
@@ -77,12 +77,7 @@ function pushedPlainly(casefile: CaseFile, result: Result, id: VehicleId): [numb
     let [fx, fy, moment] = [rate * Jx, rate * Jy, 0];
     const [c, s] = [Math.cos(h), Math.sin(h)];
     for (const { x: wx, y: wy, load, friction, braking } of wheels) {
-      tyreForce(
-        vx * c + vy * s - w * wy,
-        vy * c - vx * s + w * wx,
-        { load, friction, braking, stiffness: 8 * load },
-        force,
-      );
+      tyreForce(vx * c + vy * s - w * wy, vy * c - vx * s + w * wx, gripOf(load, friction, braking), force);
       fx += force.along * c - force.across * s;
       fy += force.along * s + force.across * c;
       moment += wx * force.across - wy * force.along;

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { G } from '@/lib/mechanics/legs';
-import { type Ground, TyreMotion, type Wheel, travelToRest } from '@/lib/mechanics/spin';
+import { type Ground, TyreMotion, travelToRest } from '@/lib/mechanics/spin';
+import type { Wheel } from '@/lib/mechanics/tyre';
 
 /**
  * A rigid ring that slides and spins on dry friction, as a locked vehicle with many contacts on a circle (Farkas et al.,

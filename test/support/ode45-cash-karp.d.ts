@@ -11,10 +11,6 @@ declare module 'ode45-cash-karp' {
     derivative: (dy: Float64Array, y: Float64Array, t: number) => void,
     t: number,
     step: number,
-    options: {
-      tol: number;
-      verbose: boolean;
-      errorScaleFunction?: (i: number, dt: number, y: number, dy: number) => number;
-    },
+    options: { tol: number; verbose: boolean; errorScaleFunction?: () => number },
   ): Integrator;
 }

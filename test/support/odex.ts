@@ -12,7 +12,7 @@ interface Solver {
   absoluteTolerance: number;
   /** Calls `seen` after every accepted step, and at the start with xOld = x; `false` ends the run. */
   solve(
-    f: (x: number, y: number[]) => number[],
+    f: (x: number, y: number[]) => ArrayLike<number>,
     x: number,
     y: readonly number[],
     xEnd: number,

@@ -60,10 +60,10 @@ export function odexToRest(motion: TyreMotion, start: readonly number[], toleran
   solver.maxStepSize = longest;
   const y = new Float64Array(6);
   const dy = new Float64Array(6);
-  const f = (t: number, state: number[]): number[] => {
+  const f = (t: number, state: number[]): Float64Array => {
     y.set(state);
     motion.derivative(t, y, dy);
-    return Array.from(dy);
+    return dy;
   };
   let before: readonly number[] = start;
   let rest = restAt('noRest', LONGEST, start);
@@ -78,10 +78,19 @@ export function odexToRest(motion: TyreMotion, start: readonly number[], toleran
   return rest;
 }
 
-export function cashKarpToRest(motion: TyreMotion, start: readonly number[], tolerance: number): Rest {
+/** `scale`: what an error is weighed against; `own` is the default of the library (size and change of each number). */
+export function cashKarpToRest(
+  motion: TyreMotion,
+  start: readonly number[],
+  tolerance: number,
+  scale: 'own' | 'absolute',
+): Rest {
   const f = (dy: Float64Array, y: Float64Array, t: number): void => motion.derivative(t, y, dy);
-  const options = { tol: tolerance, verbose: false, errorScaleFunction: () => 1 };
-  const run = cashKarp(Float64Array.from(start), f, 0, 1e-3, options);
+  const run = cashKarp(Float64Array.from(start), f, 0, 1e-3, {
+    tol: tolerance,
+    verbose: false,
+    errorScaleFunction: scale === 'own' ? undefined : () => 1,
+  });
   const before = Float64Array.from(start);
   let t = 0;
   while (motion.unrest(run.y) > 1) {

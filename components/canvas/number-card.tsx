@@ -14,7 +14,7 @@ import styles from './board.module.css';
 
 /** The numbers that place the selected thing: what the board draws of it. */
 const PLACES =
-  /^(impact\.[AB]\.(x|y|heading)|impact\.point\.[xy]|impact\.plane|approach\.[AB]\.direction|departure\.[AB]\.direction|departure\.[AB]\.rest\.(x|y|heading)|departure\.[AB]\.legs\.\d+\.distance)$/;
+  /^(impact\.[AB]\.(x|y|heading)|impact\.point\.[xy]|impact\.plane|approach\.[AB]\.direction|departure\.[AB]\.direction|departure\.[AB]\.rest\.(x|y|heading)|departure\.[AB]\.legs\.\d+\.distance|scene\.surfaces\.\d+\.friction)$/;
 
 function fieldsOfThing(casefile: CaseFile, thing: ThingId): Field[] {
   const all = fieldsOf(casefile).filter(({ path }) => PLACES.test(path) && isQuantity(nodeAt(casefile, path)));
@@ -73,6 +73,7 @@ const shortLabel = ({ path, label }: Field): string => {
   if (path.endsWith('.y')) return 'y';
   if (path.endsWith('heading')) return 'Heading';
   if (path.endsWith('plane')) return 'Plane';
+  if (path.endsWith('friction')) return 'Friction';
   return path.endsWith('direction') ? 'Direction' : label;
 };
 

@@ -10,7 +10,9 @@ import type { Measured } from '@/lib/session/tools/measure';
 import { BoardLabel } from './board-label';
 import { flat } from './ink';
 import type { Shown } from './scene-labels';
+import { OutlineInHand } from './surface-shape';
 import type { Theme } from './theme';
+import type { InHand } from './use-tool';
 
 interface Props {
   scene: Scene;
@@ -19,16 +21,17 @@ interface Props {
   speeds: Speeds;
   selection: ThingId | null;
   hovered: Grip | null;
-  measured: Measured | null;
+  drawing: InHand;
   shown: Shown;
 }
 
 /** Radius of a handle, pixels: at rest, of what is selected, under the pointer. */
 const RADIUS = { quiet: 3.5, own: 5.5, over: 7.5 };
 
-/** The handles, and the line of the measuring tool. */
+/** The handles, and what a tool has drawn that is not in the case. */
 export const OverlayLayer = memo(function OverlayLayer(props: Props) {
-  const { scene, view, theme, speeds, selection, hovered, measured, shown } = props;
+  const { scene, view, theme, speeds, selection, hovered, drawing, shown } = props;
+  const { measured, outlining } = drawing;
   return (
     <Layer listening={false}>
       {handlesOf(scene, speeds)
@@ -45,6 +48,7 @@ export const OverlayLayer = memo(function OverlayLayer(props: Props) {
           />
         ))}
       {hovered?.part === 'point' && <PointRing at={toScreen(view, scene.point.at)} theme={theme} />}
+      {outlining && <OutlineInHand drawn={outlining} view={view} theme={theme} />}
       {measured && <MeasureLine measured={measured} view={view} theme={theme} shown={shown} />}
     </Layer>
   );

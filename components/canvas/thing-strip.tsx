@@ -17,6 +17,7 @@ export function ThingStrip() {
     return boardList(casefile, {
       length: (metres) => formatWithUnit(metres, 'length', units, { decimals: 2 }),
       angle: (degrees) => formatWithUnit(degrees, 'angle', units, { decimals: 1 }),
+      ratio: (share) => formatWithUnit(share, 'ratio', units, { decimals: 2 }),
     });
   }, [casefile]);
   return (

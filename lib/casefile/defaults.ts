@@ -1,4 +1,4 @@
-import type { CaseFile, Departure, Leg, Quantity, SpinDeparture, Vehicle } from './schema';
+import type { CaseFile, Departure, Leg, Quantity, SpinDeparture, Surface, Vehicle } from './schema';
 
 /** The source of a value that nobody has touched; shown and printed as such. */
 export const DEFAULT_SOURCE = 'default, not measured';
@@ -77,6 +77,24 @@ export const defaultSpin = (x: number, y: number, heading: number): Departure =>
   onset: null,
   wheels: { all: { braking: rectangular(0.5, 0.2, 0.8) } },
 });
+
+/** A surface as it is drawn: dry asphalt until somebody states its friction. `place`: which of the surfaces it becomes, from 0. */
+export const defaultSurface = (place: number, outline: [number, number][]): Surface => ({
+  name: `Surface ${place + 1}`,
+  outline,
+  friction: normal(0.74, 0.06),
+});
+
+/** Half the length and width of a surface that is added without drawing, m. */
+const PATCH = { length: 3, width: 2 };
+
+/** A rectangle about a place (m), to begin with. */
+export const patchAbout = (x: number, y: number): [number, number][] => [
+  [x - PATCH.length, y - PATCH.width],
+  [x + PATCH.length, y - PATCH.width],
+  [x + PATCH.length, y + PATCH.width],
+  [x - PATCH.length, y + PATCH.width],
+];
 
 /** A slope to begin with: level, rising along +x. */
 export const LEVEL_SLOPE = { grade: normal(0, 0.003), uphill: normal(0, 5) };

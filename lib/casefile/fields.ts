@@ -27,6 +27,7 @@ export const GROUPS = [
   { id: 'before', title: 'Before contact' },
   { id: 'after.A', title: 'After contact, A' },
   { id: 'after.B', title: 'After contact, B' },
+  { id: 'surfaces', title: 'Surfaces' },
 ] as const;
 export type GroupId = (typeof GROUPS)[number]['id'];
 
@@ -39,6 +40,7 @@ export type ThingId =
   | `departure.${VehicleId}`
   | `leg.${VehicleId}.${number}`
   | `rest.${VehicleId}`
+  | `surface.${number}`
   | `mark.${number}`;
 
 type Line = [key: string, label: string, dimension: Dimension | null, optional?: 'optional'];
@@ -104,6 +106,7 @@ export function fieldsOf(casefile: CaseFile): Field[] {
       APPROACH.map((line) => field(`approach.${id}.${line[0]}`, line, 'before', `approach.${id}`, `${id}:`)),
     ),
     ...VEHICLE_IDS.flatMap((id) => departureFields(casefile, id)),
+    ...(casefile.scene?.surfaces ?? []).flatMap((_, k) => surfaceFields(k)),
   ];
 }
 
@@ -135,7 +138,14 @@ function departureFields(casefile: CaseFile, id: VehicleId): Field[] {
   ];
 }
 
-/** Parts of a case that stand for a group of rows, not for one. */
+const SURFACE: Line[] = [
+  ['name', 'name', null],
+  ['friction', 'friction', 'ratio'],
+];
+
+const surfaceFields = (k: number): Field[] =>
+  SURFACE.map((line) => field(`scene.surfaces.${k}.${line[0]}`, line, 'surfaces', `surface.${k}`, `Surface ${k + 1}:`));
+
 /** What is no row of its own and may still be pointed at by a refusal or a check. */
 const WHOLE_GROUPS: Record<string, string> = {
   approach: 'Before contact',
@@ -147,6 +157,7 @@ const WHOLE_GROUPS: Record<string, string> = {
   impact: 'Contact',
   'analysis.method': 'Method',
   'analysis.contact': 'Kind of contact',
+  'scene.surfaces': 'Surfaces',
   vehicles: 'Vehicles',
   'vehicles.A.seats': 'A: Seats',
   'vehicles.B.seats': 'B: Seats',
@@ -154,7 +165,12 @@ const WHOLE_GROUPS: Record<string, string> = {
 
 function groupLabel(path: string): string {
   const leg = /^departure\.([AB])\.legs\.(\d+)$/.exec(path);
-  return leg ? `${leg[1]}: Leg ${Number(leg[2]) + 1}` : (WHOLE_GROUPS[path] ?? path);
+  if (leg) return `${leg[1]}: Leg ${Number(leg[2]) + 1}`;
+  const surface = /^scene\.surfaces\.(\d+)(\.outline)?(?:\.(\d+))?/.exec(path);
+  if (!surface) return WHOLE_GROUPS[path] ?? path;
+  const [, k, outline, corner] = surface;
+  const part = corner ? `: corner ${Number(corner) + 1}` : outline ? ': corners' : '';
+  return `Surface ${Number(k) + 1}${part}`;
 }
 
 const WHEELS = [

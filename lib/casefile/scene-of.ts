@@ -66,6 +66,11 @@ export function sceneOf(casefile: CaseFile): Scene {
     }),
     travel: each((which) => travelOf(casefile, which)),
     rest: each((which) => restOf(casefile, which)),
+    surfaces: (scene?.surfaces ?? []).map(({ name, friction, outline }) => ({
+      name,
+      friction: friction.value,
+      outline: outline.map(([x, y]): Vec => [x, y]),
+    })),
     marks: (scene?.marks ?? []).map(({ label, points }) => ({ label, points: points.map(([x, y]): Vec => [x, y]) })),
     north: toRadians(scene?.north ?? 90),
   };

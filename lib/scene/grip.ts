@@ -1,4 +1,4 @@
-import { distanceOutside } from '@/lib/geometry/polygon';
+import { distanceOutside, holds } from '@/lib/geometry/polygon';
 import { distanceToSegment } from '@/lib/geometry/segment';
 import { type Vec, add, distance, fromBody, scale, subtract, unit } from '@/lib/geometry/vector';
 import {
@@ -12,6 +12,7 @@ import {
   outlineAt,
   pathOf,
 } from './scene';
+import { insideOf } from './inside';
 
 /** What can be taken hold of on the board, and where. */
 export type Grip =
@@ -28,7 +29,10 @@ export type Grip =
   /** A known rest pose. */
   | { part: 'rest'; which: Which }
   | { part: 'restTurn'; which: Which }
-  | { part: 'mark'; index: number };
+  | { part: 'mark'; index: number }
+  /** A surface as a whole. */
+  | { part: 'surface'; index: number }
+  | { part: 'corner'; index: number; corner: number };
 
 const BOTH = ['A', 'B'] as const;
 /** Beyond the nose, m. */
@@ -54,7 +58,23 @@ export function handlesOf(scene: Scene, speeds: Speeds): Handle[] {
     { grip: { part: 'point' }, at: scene.point.at },
     { grip: { part: 'plane' }, at: planeHandle(scene) },
     ...BOTH.flatMap((which) => handlesOfVehicle(scene, which, speeds[which])),
+    ...scene.surfaces.flatMap((_, index) => handlesOfSurface(scene, index)),
   ];
+}
+
+/** A handle at each corner, and one inside that moves the whole. */
+function handlesOfSurface({ surfaces }: Scene, index: number): Handle[] {
+  const { outline } = surfaces[index];
+  return [
+    ...outline.map((at, corner): Handle => ({ grip: { part: 'corner', index, corner }, at })),
+    { grip: { part: 'surface', index }, at: insideOf(outline) },
+  ];
+}
+
+/** The surface under a point; of several the one that counts. */
+export function surfaceAt({ surfaces }: Scene, at: Vec): number | null {
+  const index = surfaces.findLastIndex(({ outline }) => holds(outline, at));
+  return index < 0 ? null : index;
 }
 
 function handlesOfVehicle(scene: Scene, which: Which, speed: number | undefined): Handle[] {
@@ -126,6 +146,10 @@ function linesOf(scene: Scene, speeds: Speeds): Line[] {
       ];
     }),
     ...scene.marks.map(({ points }, index): Line => ({ grip: { part: 'mark', index }, points })),
+    ...scene.surfaces.map(({ outline }, index): Line => ({
+      grip: { part: 'surface', index },
+      points: [...outline, outline[0]],
+    })),
   ];
 }
 

@@ -40,6 +40,13 @@ export interface SceneTravel {
   legs: number[];
 }
 
+/** A stretch of ground with a friction of its own; of overlapping ones the last counts. */
+export interface SceneSurface {
+  name: string;
+  friction: number;
+  outline: Vec[];
+}
+
 export interface Scene {
   vehicles: Record<Which, SceneVehicle>;
   point: { at: Vec; spread: Vec };
@@ -49,6 +56,7 @@ export interface Scene {
   travel: Record<Which, SceneTravel | null>;
   /** Where a vehicle is known to have come to rest, when its travel is not given by legs. */
   rest: Record<Which, ScenePose | null>;
+  surfaces: SceneSurface[];
   marks: { label: string; points: Vec[] }[];
   north: number;
 }

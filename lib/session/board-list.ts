@@ -8,7 +8,7 @@ import {
   VEHICLE_IDS,
   type VehicleId,
 } from '@/lib/casefile/schema';
-import type { NamedEdit } from './thing-edits';
+import type { NamedEdit } from './named-edit';
 
 /** A thing of the board as an entry of a list that can be walked. */
 export interface BoardItem {
@@ -20,10 +20,11 @@ export interface BoardItem {
   add?: NamedEdit;
 }
 
-/** How numbers are said: lengths in m, angles in deg. */
+/** How numbers are said: lengths in m, angles in deg, and plain ones. */
 export interface Spoken {
   length: (metres: number) => string;
   angle: (degrees: number) => string;
+  ratio: (share: number) => string;
 }
 
 /** Standard uncertainty of what is added from the list, deg. */
@@ -45,6 +46,11 @@ export function boardList(casefile: CaseFile, say: Spoken): BoardItem[] {
     { thing: 'contact.plane', name: 'Plane', says: `Contact plane, direction ${say.angle(impact.plane.value)}` },
     ...VEHICLE_IDS.map((id) => approachItem(casefile, id, say)),
     ...VEHICLE_IDS.flatMap((id) => travelItems(casefile, id, say)),
+    ...(scene?.surfaces ?? []).map(({ name, outline, friction }, k): BoardItem => ({
+      thing: `surface.${k}`,
+      name: name || `Surface ${k + 1}`,
+      says: `Surface ${k + 1}: ${name}, ${outline.length} corners, friction ${say.ratio(friction.value)}`,
+    })),
     ...(scene?.marks ?? []).map(({ kind, label }, k): BoardItem => {
       const name = label || kind || `Mark ${k + 1}`;
       return { thing: `mark.${k}`, name, says: `Mark ${k + 1}: ${name}` };

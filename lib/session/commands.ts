@@ -1,7 +1,9 @@
 import type { Edit } from '@/lib/casefile/edit';
 import { type ThingId, fieldsOf, labelOf } from '@/lib/casefile/fields';
 import { type CaseFile, type Method, VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
-import { type NamedEdit, deletion, duplication } from './thing-edits';
+import type { NamedEdit } from './named-edit';
+import { deletion, duplication } from './thing-edits';
+import { patchAddition } from './surface-edits';
 import { nameOf } from './thing-names';
 import { TOOL_OF } from './tools/all';
 import { TOOLS, type ToolId } from './tools/tool';
@@ -62,6 +64,7 @@ export const commandsOf = (casefile: CaseFile, selection: ThingId | null = null)
   ...analysisCommands(casefile),
   ...selectCommands(casefile),
   ...VEHICLE_IDS.map((id) => travelCommand(casefile, id)),
+  surfaceCommand(casefile),
   ...fieldsOf(casefile).map(({ path }): Command => ({
     id: `row.${path}`,
     title: labelOf(casefile, path),
@@ -136,6 +139,11 @@ function travelCommand(casefile: CaseFile, id: VehicleId): Command {
   if (leg) return edits(`leg.${id}`, `Add a leg to the travel of ${id}`, `add a leg of ${id}`, leg.edit);
   const at = `departure.${id}`;
   return { id: `row.${at}`, title: `Enter the travel of ${id}`, group: 'Analysis', does: { do: 'row', path: at } };
+}
+
+function surfaceCommand(casefile: CaseFile): Command {
+  const { label, edit } = patchAddition(casefile);
+  return edits('surface.add', 'Add a surface, a rectangle about the contact point', label, edit);
 }
 
 /** The commands whose titles hold every word of the query, in any order; those that begin with it first. */

@@ -6,6 +6,7 @@ import { sceneOf } from '@/lib/casefile/scene-of';
 import { type Vec, angleOf, distance, subtract, toDegrees, unit } from '@/lib/geometry/vector';
 import type { Grip } from '@/lib/scene/grip';
 import { type Scene, type Which, centreOf, pathOf } from '@/lib/scene/scene';
+import { cornerMove, surfaceMove } from './surface-edits';
 
 /** Drawn figures are kept to the centimetre and the tenth of a degree: finer than anyone draws. */
 const centimetres = (x: number): number => Math.round(x * 100) / 100;
@@ -63,6 +64,10 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
       return value(`departure.${grip.which}.direction`, turn(centre(casefile, grip.which)));
     case 'mark':
       return markEdit(casefile, grip.index, by);
+    case 'surface':
+      return surfaceMove(casefile, grip.index, [centimetres(by[0]), centimetres(by[1])]);
+    case 'corner':
+      return cornerMove(casefile, grip.index, grip.corner, [centimetres(to[0]), centimetres(to[1])]);
     case 'rest':
     case 'restTurn':
       return restEdit(casefile, grip, by, to, coarse);
@@ -198,6 +203,9 @@ export function thingOf(grip: Grip, scene: Scene): ThingId {
       return `rest.${grip.which}`;
     case 'mark':
       return `mark.${grip.index}`;
+    case 'surface':
+    case 'corner':
+      return `surface.${grip.index}`;
     case 'end':
       return `departure.${grip.which}`;
   }
@@ -226,6 +234,10 @@ export function labelOfGrip(grip: Grip): string {
       return `turn ${grip.which} at rest`;
     case 'mark':
       return 'move a mark';
+    case 'surface':
+      return `move surface ${grip.index + 1}`;
+    case 'corner':
+      return `shape surface ${grip.index + 1}`;
     case 'end':
       return `travel of ${grip.which}`;
   }

@@ -3,6 +3,7 @@ import type { ThingId } from '@/lib/casefile/fields';
 import type { CaseFile, Quantity, VehicleId } from '@/lib/casefile/schema';
 import type { Vec } from '@/lib/geometry/vector';
 import { asLine, markEdit, wrapped } from './drag';
+import { surfaceMove } from './surface-edits';
 
 /** A step in the world (m) and a turn (deg, counter-clockwise). */
 interface Nudge {
@@ -43,6 +44,10 @@ function nudges(casefile: CaseFile, thing: ThingId, by: Nudge): Edit[] {
     }
     case 'rest':
       return restNudge(casefile, which, by);
+    case 'surface':
+      return by.step[0] === 0 && by.step[1] === 0 && by.turn === 0
+        ? []
+        : [surfaceMove(casefile, Number(which), by.step, by.turn)];
     case 'mark':
       return by.step[0] === 0 && by.step[1] === 0 ? [] : [markEdit(casefile, Number(which), by.step)];
     default:

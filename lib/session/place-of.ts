@@ -11,5 +11,6 @@ export function placeOf(scene: Scene, thing: ThingId, speeds: Speeds): Vec {
   if (rest) return [rest.x, rest.y];
   if (kind === 'departure' || kind === 'rest') return pathOf(scene, which).at(-1) ?? scene.point.at;
   if (kind === 'leg') return pathOf(scene, which)[Number(k) + 1] ?? scene.point.at;
+  if (kind === 'surface') return scene.surfaces[Number(which)]?.outline[0] ?? scene.point.at;
   return scene.point.at;
 }

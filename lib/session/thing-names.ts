@@ -14,6 +14,8 @@ export function nameOf(thing: ThingId): string {
       return `leg ${Number(k) + 1} of ${which}`;
     case 'rest':
       return `the rest pose of ${which}`;
+    case 'surface':
+      return `surface ${Number(which) + 1}`;
     case 'mark':
       return `mark ${Number(which) + 1}`;
     default:

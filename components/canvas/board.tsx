@@ -3,8 +3,8 @@ import { useMemo, useRef, useState } from 'react';
 import { Stage } from 'react-konva/lib/ReactKonvaCore';
 import './shapes';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
-import { sceneOf } from '@/lib/casefile/scene-of';
 import { METRES_PER } from '@/lib/scene/grid';
+import { shownScene } from '@/lib/session/shown-scene';
 import type { Dimension } from '@/lib/units/dimension';
 import { formatWithUnit } from '@/lib/units/format';
 import styles from './board.module.css';
@@ -38,7 +38,7 @@ export function Board() {
   const units = casefile.display?.units ?? 'metric';
   const answer = useAnswerDrawn(units);
   const { speeds } = answer;
-  const scene = useMemo(() => sceneOf(casefile), [casefile]);
+  const scene = useMemo(() => shownScene(casefile, selection), [casefile, selection]);
   const { size, view, setView, touch, fitAll, zoom } = useView(frame, scene);
   const { hovered, drawing, panning, cancel, key, handlers } = useTool({ frame, view, setView, speeds });
 

@@ -3,7 +3,7 @@ import { Circle, Layer, Line } from 'react-konva/lib/ReactKonvaCore';
 import type { ThingId } from '@/lib/casefile/fields';
 import { type Vec, angleOf, distance, fromBody, subtract, toDegrees } from '@/lib/geometry/vector';
 import { type Grip, type Handle, handlesOf, isSameGrip } from '@/lib/scene/grip';
-import { type Scene, type Speeds, noseOf } from '@/lib/scene/scene';
+import { type Scene, type Speeds, noseOf, wheelPlaces } from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import { thingOf } from '@/lib/session/drag';
 import type { Measured } from '@/lib/session/tools/measure';
@@ -78,7 +78,8 @@ function HandleShape({ handle: { grip, at }, scene, view, theme, over, own }: Ha
   const [x, y] = toScreen(view, at);
   const colour = 'which' in grip ? theme[grip.which] : theme.ink;
   const vehicle = grip.part === 'turn' ? scene.vehicles[grip.which] : null;
-  const nose = vehicle && toScreen(view, fromBody([noseOf(vehicle), 0], vehicle.pose));
+  const wheel = grip.part === 'steer' ? wheelPlaces(scene.vehicles[grip.which])[grip.wheel] : null;
+  const nose = wheel ? toScreen(view, wheel) : vehicle && toScreen(view, fromBody([noseOf(vehicle), 0], vehicle.pose));
   return (
     <>
       {nose && <Line points={flat([nose, [x, y]])} stroke={colour} strokeWidth={1} opacity={own || over ? 0.9 : 0.4} />}

@@ -1,10 +1,10 @@
 import { type PointerEvent as ReactPointerEvent, type RefObject, useCallback, useRef, useState } from 'react';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
-import { sceneOf } from '@/lib/casefile/scene-of';
 import type { Vec } from '@/lib/geometry/vector';
 import { type Grip, gripAt, isSameGrip } from '@/lib/scene/grip';
 import type { Speeds } from '@/lib/scene/scene';
 import { type View, toWorld } from '@/lib/scene/view';
+import { shownScene } from '@/lib/session/shown-scene';
 import type { SessionActions } from '@/lib/session/session';
 import { TOOL_OF } from '@/lib/session/tools/all';
 import type { Measured } from '@/lib/session/tools/measure';
@@ -54,7 +54,7 @@ export function useTool({ frame, view, setView, speeds }: Board) {
       const state = session.getState();
       const casefile = state.gesture?.casefile ?? state.casefile;
       const { tool } = TOOL_OF[state.tool];
-      const context = { casefile, scene: sceneOf(casefile), speeds, reach };
+      const context = { casefile, scene: shownScene(casefile, state.selection), speeds, reach };
       const next = step(tool, doing.current[tool.id] ?? null, context);
       if (!next) return null;
       doing.current = { ...doing.current, [tool.id]: next.state };
@@ -82,7 +82,8 @@ export function useTool({ frame, view, setView, speeds }: Board) {
     send({ type, at: toWorld(view, pixelOf(event)), coarse: event.shiftKey }, reachOf(event.pointerType) / view.scale);
   const hover = (event: ReactPointerEvent): void => {
     const at = toWorld(view, pixelOf(event));
-    const grip = gripAt(sceneOf(session.getState().casefile), speeds, at, reachOf(event.pointerType) / view.scale);
+    const { casefile, selection } = session.getState();
+    const grip = gripAt(shownScene(casefile, selection), speeds, at, reachOf(event.pointerType) / view.scale);
     setHovered((before) => (isSameGrip(before, grip) ? before : grip));
   };
 

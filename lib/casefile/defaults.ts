@@ -1,4 +1,4 @@
-import type { CaseFile, Departure, Leg, Quantity, SpinDeparture, Surface, Vehicle } from './schema';
+import type { CaseFile, Departure, Leg, Quantity, Surface, Vehicle } from './schema';
 
 /** The source of a value that nobody has touched; shown and printed as such. */
 export const DEFAULT_SOURCE = 'default, not measured';
@@ -98,19 +98,6 @@ export const patchAbout = (x: number, y: number): [number, number][] => [
 
 /** A slope to begin with: level, rising along +x. */
 export const LEVEL_SLOPE = { grade: normal(0, 0.003), uphill: normal(0, 5) };
-
-type Wheels = SpinDeparture['wheels'];
-
-/** The one braking of all wheels, stated for each, straight ahead. */
-export function wheelsApart(wheels: Wheels): Wheels {
-  if (!('all' in wheels)) return wheels;
-  const wheel = { braking: wheels.all.braking, steer: fixed(0) };
-  return { frontLeft: wheel, frontRight: wheel, rearLeft: wheel, rearRight: wheel };
-}
-
-/** The braking of the front left wheel, for all. */
-export const wheelsTogether = (wheels: Wheels): Wheels =>
-  'all' in wheels ? wheels : { all: { braking: wheels.frontLeft.braking } };
 
 /** The value that a quantity starts from when it is added to a case (SI, deg). */
 export function startingQuantity(path: string): Quantity {

@@ -2,6 +2,7 @@ import type { Dimension } from '@/lib/units/dimension';
 import { nodeAt } from './quantities';
 import type { CaseFile, SpinDeparture, VehicleId } from './schema';
 import { VEHICLE_IDS } from './schema';
+import { WHEELS, type WheelId } from './wheels';
 
 /**
  * Every value of a case that a person can enter, as one list: the ledger's rows, the report's input table, the words a
@@ -40,6 +41,7 @@ export type ThingId =
   | `departure.${VehicleId}`
   | `leg.${VehicleId}.${number}`
   | `rest.${VehicleId}`
+  | `wheel.${VehicleId}.${WheelId}`
   | `surface.${number}`
   | `mark.${number}`;
 
@@ -173,22 +175,17 @@ function groupLabel(path: string): string {
   return `Surface ${Number(k) + 1}${part}`;
 }
 
-const WHEELS = [
-  ['frontLeft', 'front left'],
-  ['frontRight', 'front right'],
-  ['rearLeft', 'rear left'],
-  ['rearRight', 'rear right'],
-] as const;
-
 function spinFields({ wheels, slope }: SpinDeparture, id: VehicleId): Field[] {
   const group: GroupId = `after.${id}`;
   const at = `departure.${id}`;
   const row = (key: string, label: string, dimension: Dimension, optional?: 'optional'): Field =>
     field(`${at}.${key}`, [key, label, dimension, optional], group, `rest.${id}`);
-  const each = WHEELS.flatMap(([wheel, words]) => [
-    row(`wheels.${wheel}.braking`, `Braking share, ${words}`, 'ratio'),
-    row(`wheels.${wheel}.steer`, `Steer, ${words}`, 'angle'),
-  ]);
+  const each = WHEELS.flatMap(({ id: wheel, words }) =>
+    [
+      row(`wheels.${wheel}.braking`, `Braking share, ${words}`, 'ratio'),
+      row(`wheels.${wheel}.steer`, `Steer, ${words}`, 'angle'),
+    ].map((own): Field => ({ ...own, thing: `wheel.${id}.${wheel}` })),
+  );
   return [
     row('rest.x', 'Mass centre at rest, x', 'length'),
     row('rest.y', 'Mass centre at rest, y', 'length'),

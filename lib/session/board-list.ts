@@ -8,6 +8,7 @@ import {
   VEHICLE_IDS,
   type VehicleId,
 } from '@/lib/casefile/schema';
+import { WHEELS } from '@/lib/casefile/wheels';
 import type { NamedEdit } from './named-edit';
 
 /** A thing of the board as an entry of a list that can be walked. */
@@ -73,7 +74,7 @@ function approachItem({ approach, impact }: CaseFile, id: VehicleId, say: Spoken
 
 function travelItems({ departure, impact }: CaseFile, id: VehicleId, say: Spoken): BoardItem[] {
   const travel = departure[id];
-  if (travel?.kind === 'spin') return [restItem(travel, id, say)];
+  if (travel?.kind === 'spin') return [restItem(travel, id, say), ...wheelItems(travel, id, say)];
   if (travel) return statedTravel(travel, id, say);
   const to = defaultDeparture(impact[id].heading.value, STRAIGHT_ON);
   return [
@@ -91,6 +92,19 @@ function restItem({ rest }: SpinDeparture, id: VehicleId, say: Spoken): BoardIte
   const place = x && y ? `mass centre at ${say.length(x.value)}, ${say.length(y.value)}` : 'place not stated';
   const turn = heading ? `heading ${say.angle(heading.value)}` : 'heading not stated';
   return { thing: `rest.${id}`, name: `${id} at rest`, says: `Rest pose of ${id}, ${place}, ${turn}` };
+}
+
+/** Where they are set one by one. */
+function wheelItems({ wheels }: SpinDeparture, id: VehicleId, say: Spoken): BoardItem[] {
+  if ('all' in wheels) return [];
+  return WHEELS.map(({ id: wheel, words }) => {
+    const [braking, steer] = [say.ratio(wheels[wheel].braking.value), say.angle(wheels[wheel].steer.value)];
+    return {
+      thing: `wheel.${id}.${wheel}`,
+      name: `${id} ${words}`,
+      says: `Wheel of ${id}, ${words}, braking share ${braking}, steer ${steer}`,
+    };
+  });
 }
 
 function statedTravel({ direction, legs }: LegsDeparture, id: VehicleId, say: Spoken): BoardItem[] {

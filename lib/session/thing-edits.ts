@@ -32,6 +32,7 @@ export function deletion(casefile: CaseFile, thing: ThingId): NamedEdit | null {
 /** Why Delete does nothing, for what every case has. */
 export function whyKept(thing: ThingId): string | null {
   if (thing.startsWith('vehicle.')) return 'A case has two vehicles: they can be moved and changed, not deleted';
+  if (thing.startsWith('wheel.')) return 'A vehicle has four wheels: they can be set, not deleted';
   return thing.startsWith('contact.') ? 'Every contact has a point and a plane: they can be moved, not deleted' : null;
 }
 

@@ -10,6 +10,7 @@ import type { AnswerDrawn } from './use-answer-drawn';
 export interface Shown {
   length: (metres: number) => string;
   angle: (degrees: number) => string;
+  ratio: (share: number) => string;
 }
 
 interface Props {

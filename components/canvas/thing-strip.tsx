@@ -1,10 +1,14 @@
 import { useMemo } from 'react';
 import { useSession } from '@/components/hooks/use-session';
-import { boardList, standsFor } from '@/lib/session/board-list';
+import { type BoardItem, boardList, standsFor } from '@/lib/session/board-list';
 import { formatWithUnit } from '@/lib/units/format';
 import styles from './board.module.css';
 
 const KEYS = 'Arrow keys move it, [ and ] turn it, Shift for larger and Alt for finer steps; Enter opens its numbers';
+
+const WHEEL_KEYS =
+  'Left and right steer it, up and down brake it more and less, Shift for larger and Alt for finer steps; Enter opens its numbers';
+const keysOf = ({ thing }: BoardItem): string => (thing.startsWith('wheel.') ? WHEEL_KEYS : KEYS);
 
 /** Everything on the board as a list that can be walked: focus selects, keys move what is selected. */
 export function ThingStrip() {
@@ -17,6 +21,7 @@ export function ThingStrip() {
     return boardList(casefile, {
       length: (metres) => formatWithUnit(metres, 'length', units, { decimals: 2 }),
       angle: (degrees) => formatWithUnit(degrees, 'angle', units, { decimals: 1 }),
+      ratio: (share) => formatWithUnit(share, 'ratio', units, { decimals: 2 }),
     });
   }, [casefile]);
   return (
@@ -27,7 +32,7 @@ export function ThingStrip() {
             type="button"
             aria-pressed={standsFor(item, items, selection)}
             aria-label={item.says}
-            title={item.add ? item.says : `${item.says}. ${KEYS}`}
+            title={item.add ? item.says : `${item.says}. ${keysOf(item)}`}
             className={item.add ? styles.missing : undefined}
             onFocus={() => {
               if (!item.add) select(item.thing);

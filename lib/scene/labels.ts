@@ -1,6 +1,6 @@
 import { distanceOutside } from '@/lib/geometry/polygon';
 import { type Vec, add, fromBody, scale, unit } from '@/lib/geometry/vector';
-import { type Scene, type Which, centreOf, noseOf, outlineAt, pathOf, restPose } from './scene';
+import { type Scene, type Which, centreOf, noseOf, outlineAt, pathOf, restPose, wheelsOf } from './scene';
 
 /**
  * Where words stand so that they cover as little as can be, in world metres. `off`: how far they stand off what they
@@ -47,6 +47,19 @@ export function legLabelAt(scene: Scene, which: Which, leg: number, off: number)
     return [add(on, scale(across, off)), add(on, scale(across, -off))];
   });
   return clearest(scene, places, off);
+}
+
+/** Half the width and height of the words about a wheel, pixels. */
+export const WHEEL_WORDS: Vec = [40, 14];
+
+/** Outside the vehicle, beside a wheel. `half`: half the width and height of the words, m. */
+export function wheelLabelAt({ vehicles }: Scene, which: Which, wheel: number, half: Vec): Vec {
+  const vehicle = vehicles[which];
+  const [x, y] = wheelsOf(vehicle)[wheel];
+  const side = Math.sign(y);
+  const away = unit(vehicle.pose.heading + (side * Math.PI) / 2);
+  const edge = fromBody([x, (side * vehicle.body.width) / 2], vehicle.pose);
+  return add(edge, [away[0] * half[0], away[1] * half[1]]);
 }
 
 /** On the tail of a vehicle. */

@@ -276,3 +276,17 @@ test('Croft, «Practical Auto Crash Reconstruction in LOSRIC, Part V», Dynamic 
   const back = byRestitution({ ...evidenceOf(scene, after), e: 0.6, mu: 0 }).answer;
   expect(back.un).toBeCloseTo(closing, 12);
 });
+
+test('a staged test: rear of a standing small car, June 2005 (gbbuk.com, «Rear to front collision 5.5 mph»)', () => {
+  // 950 kg at 5.5 mph into 770 kg; measured speed changes 3.5 mph of the struck and 3.1 mph of the striking car, from which
+  // e = (3.5 + 3.1) / 5.5 - 1 = 0.20. Their momenta differ by 8.5 % (instruments and tyres): 0.4 mph allowed.
+  const after = solved(inLine({ m: 950, vx: 5.5 }, { m: 770 }, 0.2));
+  expect(Math.abs(after.B.vx - 3.5)).toBeLessThan(0.4);
+  expect(Math.abs(5.5 - after.A.vx - 3.1)).toBeLessThan(0.4);
+});
+
+test('what e means: 20 km/h into a standing car of equal mass, 4 km/h apart after (Gratzer, EVU conference, Vienna 2008)', () => {
+  const after = solved(inLine({ m: 1200, vx: 20 }, { m: 1200 }, 0.2));
+  expect(after.B.vx - after.A.vx).toBeCloseTo(4, 12);
+  expect([after.A.vx, after.B.vx].map((v) => Math.round(v * 1e9) / 1e9)).toEqual([8, 12]);
+});

@@ -53,3 +53,33 @@ test('a surface is drawn corner by corner, shaped by mouse and keys, and kept', 
     [3, 3.9],
   ]);
 });
+
+test('a surface is added, moved, taken away and brought back by keyboard', async ({ page }) => {
+  await page.goto('/');
+  await live(page);
+  await page.getByRole('button', { name: 'New case' }).click();
+  await page.waitForURL(/\/cases\/.+/);
+  const [open, board] = [new OpenCase(page), new DrawingBoard(page)];
+  await open.ready();
+  await board.ready();
+  const press = (key: string): Promise<void> => page.keyboard.press(key);
+
+  await page.getByRole('button', { name: 'Add a surface' }).focus();
+  await press('Enter');
+  await expect(page.getByRole('textbox', { name: 'Surface 1: name' })).toBeFocused();
+  await board.thing(/^Surface 1/).focus();
+  await press('Shift+ArrowRight');
+  await press('Enter'); // its numbers
+  await expect(page.getByRole('textbox', { name: 'Surface 1: friction, on the board' })).toBeFocused();
+  await press('Escape');
+  await open.saved();
+  const outline = (text: string) =>
+    (JSON.parse(text) as CaseFile).scene?.surfaces?.map((surface) => surface.outline[0]);
+  expect(outline((await open.saveFile()).text)).toEqual([[-2, -2]]);
+
+  await board.thing(/^Surface 1/).focus();
+  await press('Delete');
+  await expect(board.thing(/^Surface 1/)).toHaveCount(0);
+  await press('Control+z');
+  await expect(board.thing(/^Surface 1/)).toHaveCount(1);
+});

@@ -3,7 +3,7 @@ import { memo } from 'react';
 import { Circle, Layer, Line, Shape } from 'react-konva/lib/ReactKonvaCore';
 import type { ThingId } from '@/lib/casefile/fields';
 import type { Vec } from '@/lib/geometry/vector';
-import { insideOf } from '@/lib/scene/inside';
+import { surfacePlace } from '@/lib/scene/labels';
 import type { Scene } from '@/lib/scene/scene';
 import { type View, boundsOf, toScreen } from '@/lib/scene/view';
 import type { Outlining } from '@/lib/session/tools/surface';
@@ -39,8 +39,8 @@ export const SurfaceLayer = memo(function SurfaceLayer({ scene, view, theme, sel
           selected={selection === `surface.${k}`}
         />
       ))}
-      {scene.surfaces.map(({ outline, name, friction }, k) => {
-        const [x, y] = toScreen(view, insideOf(outline));
+      {scene.surfaces.map(({ name, friction }, k) => {
+        const [x, y] = toScreen(view, surfacePlace(scene, k));
         return (
           <BoardLabel
             key={k}

@@ -1,6 +1,7 @@
 import { useMemo } from 'react';
 import { useSession } from '@/components/hooks/use-session';
-import { type BoardItem, boardList, standsFor } from '@/lib/session/board-list';
+import { type BoardItem, type Spoken, boardList, standsFor } from '@/lib/session/board-list';
+import type { Dimension, UnitSystem } from '@/lib/units/dimension';
 import { formatWithUnit } from '@/lib/units/format';
 import styles from './board.module.css';
 
@@ -10,20 +11,19 @@ const WHEEL_KEYS =
   'Left and right steer it, up and down brake it more and less, Shift for larger and Alt for finer steps; Enter opens its numbers';
 const keysOf = ({ thing }: BoardItem): string => (thing.startsWith('wheel.') ? WHEEL_KEYS : KEYS);
 
+function spoken(units: UnitSystem): Spoken {
+  const as = (dimension: Dimension, decimals: number) => (value: number) =>
+    formatWithUnit(value, dimension, units, { decimals });
+  return { length: as('length', 2), angle: as('angle', 1), ratio: as('ratio', 2) };
+}
+
 /** Everything on the board as a list that can be walked: focus selects, keys move what is selected. */
 export function ThingStrip() {
   const casefile = useSession((s) => s.casefile);
   const selection = useSession((s) => s.selection);
   const select = useSession((s) => s.select);
   const edit = useSession((s) => s.edit);
-  const items = useMemo(() => {
-    const units = casefile.display?.units ?? 'metric';
-    return boardList(casefile, {
-      length: (metres) => formatWithUnit(metres, 'length', units, { decimals: 2 }),
-      angle: (degrees) => formatWithUnit(degrees, 'angle', units, { decimals: 1 }),
-      ratio: (share) => formatWithUnit(share, 'ratio', units, { decimals: 2 }),
-    });
-  }, [casefile]);
+  const items = useMemo(() => boardList(casefile, spoken(casefile.display?.units ?? 'metric')), [casefile]);
   return (
     <ul className={styles.strip} aria-label="Things on the board">
       {items.map((item) => (

@@ -31,30 +31,15 @@ export function LedgerCorners({ index, units }: { index: number; units: UnitSyst
           {outline.length} corners
         </summary>
         {outline.map((corner, k) => (
-          <div key={k} className={styles.corner}>
-            <span>{k + 1}</span>
-            <CornerField index={index} corner={k} axis={0} value={corner[0]} units={units} />
-            <CornerField index={index} corner={k} axis={1} value={corner[1]} units={units} />
-            <button
-              type="button"
-              className={styles.clear}
-              aria-label={`Add a corner after corner ${k + 1} of ${whole}`}
-              title="Add a corner after this one"
-              onClick={() => carryOut(cornerAddition(session.getState().casefile, index, k), `${at}.${k + 1}.0`)}
-            >
-              <Plus aria-hidden />
-            </button>
-            <button
-              type="button"
-              className={styles.clear}
-              aria-label={`Take away corner ${k + 1} of ${whole}`}
-              title="Take this corner away"
-              disabled={outline.length <= FEWEST_CORNERS}
-              onClick={() => carryOut(cornerRemoval(session.getState().casefile, index, k), at)}
-            >
-              <X aria-hidden />
-            </button>
-          </div>
+          <CornerRow
+            key={k}
+            index={index}
+            corner={k}
+            at={corner}
+            few={outline.length <= FEWEST_CORNERS}
+            units={units}
+            carryOut={carryOut}
+          />
         ))}
       </details>
       <button
@@ -68,6 +53,53 @@ export function LedgerCorners({ index, units }: { index: number; units: UnitSyst
         }}
       >
         <Trash2 aria-hidden />
+      </button>
+    </div>
+  );
+}
+
+interface RowProps {
+  index: number;
+  corner: number;
+  at: readonly [number, number];
+  /** Whether none can be spared. */
+  few: boolean;
+  units: UnitSystem;
+  /** Carries an edit out and takes the focus on. */
+  carryOut: (found: NamedEdit | null, next: string) => void;
+}
+
+/** One corner: its place, a further one after it, and away with it. */
+function CornerRow({ index, corner, at, few, units, carryOut }: RowProps) {
+  const session = useSessionStore();
+  const whole = `surface ${index + 1}`;
+  const field = `field-scene.surfaces.${index}.outline`;
+  const add = (): void =>
+    carryOut(cornerAddition(session.getState().casefile, index, corner), `${field}.${corner + 1}.0`);
+  const remove = (): void => carryOut(cornerRemoval(session.getState().casefile, index, corner), field);
+  return (
+    <div className={styles.corner}>
+      <span>{corner + 1}</span>
+      <CornerField index={index} corner={corner} axis={0} value={at[0]} units={units} />
+      <CornerField index={index} corner={corner} axis={1} value={at[1]} units={units} />
+      <button
+        type="button"
+        className={styles.clear}
+        aria-label={`Add a corner after corner ${corner + 1} of ${whole}`}
+        title="Add a corner after this one"
+        onClick={add}
+      >
+        <Plus aria-hidden />
+      </button>
+      <button
+        type="button"
+        className={styles.clear}
+        aria-label={`Take away corner ${corner + 1} of ${whole}`}
+        title="Take this corner away"
+        disabled={few}
+        onClick={remove}
+      >
+        <X aria-hidden />
       </button>
     </div>
   );

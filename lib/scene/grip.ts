@@ -13,7 +13,7 @@ import {
   pathOf,
   wheelPlaces,
 } from './scene';
-import { insideOf } from './inside';
+import { surfacePlace } from './labels';
 
 /** What can be taken hold of on the board, and where. */
 export type Grip =
@@ -90,11 +90,11 @@ function wheelAt({ vehicles, wheels, open }: Scene, at: Vec): Grip | null {
 }
 
 /** A handle at each corner, and one inside that moves the whole. */
-function handlesOfSurface({ surfaces }: Scene, index: number): Handle[] {
-  const { outline } = surfaces[index];
+function handlesOfSurface(scene: Scene, index: number): Handle[] {
+  const { outline } = scene.surfaces[index];
   return [
     ...outline.map((at, corner): Handle => ({ grip: { part: 'corner', index, corner }, at })),
-    { grip: { part: 'surface', index }, at: insideOf(outline) },
+    { grip: { part: 'surface', index }, at: surfacePlace(scene, index) },
   ];
 }
 

@@ -4,10 +4,12 @@ import { applyEdit } from '@/lib/casefile/edit';
 import { fieldsOf, labelOf } from '@/lib/casefile/fields';
 import { sceneOf } from '@/lib/casefile/scene-of';
 import type { CaseFile } from '@/lib/casefile/schema';
-import { holds } from '@/lib/geometry/polygon';
+import { distanceOutside, holds } from '@/lib/geometry/polygon';
 import type { Vec } from '@/lib/geometry/vector';
 import { gripAt, handlesOf } from '@/lib/scene/grip';
 import { insideOf } from '@/lib/scene/inside';
+import { surfacePlace } from '@/lib/scene/labels';
+import { outlineAt } from '@/lib/scene/scene';
 import { boardList } from '@/lib/session/board-list';
 import { nudgeEdit } from '@/lib/session/nudge';
 import { cornerAddition, cornerRemoval, patchAddition } from '@/lib/session/surface-edits';
@@ -125,7 +127,7 @@ describe('a surface on the board', () => {
       [10, 4.5],
       [10, 7.5],
     ];
-    const inside = insideOf(sceneOf(drawn).surfaces[0].outline);
+    const inside = surfacePlace(sceneOf(drawn), 0);
     for (const from of [[7, 3] as Vec, inside])
       expect(outlineOf(drag(from, [from[0] + 1, from[1] + 1.5]).after)).toEqual(moved);
   });
@@ -199,7 +201,51 @@ test('the handle of a surface of any shape lies inside it', () => {
     [0, 10],
   ];
   expect(holds(angled, [27 / 6, 22 / 6])).toBe(false); // the middle of its corners is outside
-  expect(holds(angled, insideOf(angled))).toBe(true);
+  const anywhere = (): boolean => true;
+  expect(holds(angled, insideOf(angled, anywhere))).toBe(true);
+  expect(insideOf(angled, ([x]) => x > 8)[0]).toBeGreaterThan(8);
+  expect(
+    holds(
+      angled,
+      insideOf(angled, () => false),
+    ),
+  ).toBe(true);
   const scene = sceneOf(drawn);
   expect(handlesOf(scene, {}).filter(({ grip }) => grip.part === 'corner' || grip.part === 'surface')).toHaveLength(4);
+});
+
+test('the name of the ground keeps off the vehicles on it and off what lies over it', () => {
+  const road = applyEdit(fresh, {
+    do: 'set',
+    path: 'scene.surfaces',
+    to: [
+      {
+        name: 'Road',
+        friction: { value: 0.7 },
+        outline: [
+          [-9, -4],
+          [9, -4],
+          [9, 4],
+          [-9, 4],
+        ],
+      },
+      {
+        name: 'Ice',
+        friction: { value: 0.1 },
+        outline: [
+          [-9, 0],
+          [9, 0],
+          [9, 4],
+          [-9, 4],
+        ],
+      },
+    ],
+  });
+  if (!road.ok) throw new Error('refused');
+  const scene = sceneOf(road.casefile);
+  const at = surfacePlace(scene, 0);
+  expect(holds(scene.surfaces[0].outline, at)).toBe(true);
+  expect(holds(scene.surfaces[1].outline, at)).toBe(false);
+  for (const which of ['A', 'B'] as const)
+    expect(distanceOutside(at, outlineAt(scene.vehicles[which]))).toBeGreaterThan(1);
 });

@@ -2,8 +2,8 @@ import { DEFAULT_COVERAGE, DEFAULT_DRAWS, DEFAULT_SEED } from '@/lib/casefile/de
 import type { Issue } from '@/lib/casefile/issue';
 import { needsOf } from '@/lib/casefile/needs';
 import type { CaseFile, Method } from '@/lib/casefile/schema';
-import type { SolvedMethod } from '@/lib/evidence/problem';
-import { notYetSolved, readEvidence } from '@/lib/evidence/read-evidence';
+import { readEvidence } from '@/lib/evidence/read-evidence';
+import { fitCase } from '@/lib/fit-case';
 import type { Shapes } from '@/lib/results/bands';
 import { HEADLINES } from '@/lib/results/names';
 import type { Result } from '@/lib/results/result';
@@ -46,10 +46,9 @@ export async function solveCase(casefile: CaseFile, options: SolveOptions = {}):
   const method = options.method ?? analysis.method;
   const lacking = needsOf(casefile, method);
   if (lacking.length > 0) return { kind: 'invalid', issues: lacking };
-  const missing = notYetSolved(casefile, method);
-  if (missing) return { kind: 'unsolved', reason: missing };
 
-  const asked = readEvidence(casefile, method as SolvedMethod, options.seed ?? analysis.seed ?? DEFAULT_SEED);
+  const asked = readEvidence(casefile, method, options.seed ?? analysis.seed ?? DEFAULT_SEED);
+  if (method === 'fit') return fitCase(casefile, asked, options);
   const central = solveCentral(asked);
   const refusal = refusalOf(central);
   if (refusal) return { kind: 'unsolved', reason: refusal };

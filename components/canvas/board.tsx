@@ -3,8 +3,8 @@ import { useMemo, useRef, useState } from 'react';
 import { Stage } from 'react-konva/lib/ReactKonvaCore';
 import './shapes';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
-import { sceneOf } from '@/lib/casefile/scene-of';
 import { METRES_PER } from '@/lib/scene/grid';
+import { shownScene } from '@/lib/session/shown-scene';
 import type { Dimension } from '@/lib/units/dimension';
 import { formatWithUnit } from '@/lib/units/format';
 import styles from './board.module.css';
@@ -15,6 +15,7 @@ import { NumberCard } from './number-card';
 import { OverlayLayer } from './overlay-layer';
 import type { Shown } from './scene-labels';
 import { SceneLayer } from './scene-layer';
+import { SurfaceLayer } from './surface-shape';
 import { useTheme } from './theme';
 import { ThingStrip } from './thing-strip';
 import { Toolbar } from './toolbar';
@@ -37,9 +38,9 @@ export function Board() {
   const units = casefile.display?.units ?? 'metric';
   const answer = useAnswerDrawn(units);
   const { speeds } = answer;
-  const scene = useMemo(() => sceneOf(casefile), [casefile]);
+  const scene = useMemo(() => shownScene(casefile, selection), [casefile, selection]);
   const { size, view, setView, touch, fitAll, zoom } = useView(frame, scene);
-  const { hovered, measured, panning, cancel, handlers } = useTool({ frame, view, setView, speeds });
+  const { hovered, drawing, panning, cancel, key, handlers } = useTool({ frame, view, setView, speeds });
 
   const openNumbers = (): boolean => {
     if (!session.getState().selection) return false;
@@ -48,13 +49,13 @@ export function Board() {
     requestAnimationFrame(() => whole.current?.querySelector<HTMLInputElement>('[data-numbers] input')?.select());
     return true;
   };
-  const keys = useBoardKeys({ cancel, say, openNumbers });
+  const keys = useBoardKeys({ cancel, key, say, openNumbers });
   useSheetKeys({ fitAll, zoom });
 
   const shown = useMemo((): Shown => {
     const as = (dimension: Dimension, decimals: number) => (value: number) =>
       formatWithUnit(value, dimension, units, { decimals });
-    return { length: as('length', 2), angle: as('angle', 1) };
+    return { length: as('length', 2), angle: as('angle', 1), ratio: as('ratio', 2) };
   }, [units]);
   const drawn = { scene, view, theme, selection, shown };
 
@@ -82,8 +83,9 @@ export function Board() {
         {size.width > 0 && (
           <Stage width={size.width} height={size.height} listening={false}>
             <GridLayer view={view} size={size} unit={METRES_PER[units]} theme={theme} />
+            <SurfaceLayer {...drawn} />
             <SceneLayer {...drawn} answer={answer} />
-            <OverlayLayer {...drawn} speeds={speeds} hovered={hovered} measured={measured} />
+            <OverlayLayer {...drawn} speeds={speeds} hovered={hovered} drawing={drawing} />
           </Stage>
         )}
       </div>

@@ -1,12 +1,13 @@
 import { useState } from 'react';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
+import { WheelsButton } from '@/components/panels/wheels-button';
 import { type Field, type ThingId, fieldsOf } from '@/lib/casefile/fields';
 import { isQuantity, nodeAt } from '@/lib/casefile/quantities';
-import { sceneOf } from '@/lib/casefile/scene-of';
 import type { CaseFile } from '@/lib/casefile/schema';
 import { inkOf, placeBeside } from '@/lib/scene/beside';
 import type { Speeds } from '@/lib/scene/scene';
 import { type Size, type View, toScreen } from '@/lib/scene/view';
+import { shownScene } from '@/lib/session/shown-scene';
 import { placeOf } from '@/lib/session/place-of';
 import { formatValue, unitOf } from '@/lib/units/format';
 import { parseEntry } from '@/lib/units/parse';
@@ -14,7 +15,7 @@ import styles from './board.module.css';
 
 /** The numbers that place the selected thing: what the board draws of it. */
 const PLACES =
-  /^(impact\.[AB]\.(x|y|heading)|impact\.point\.[xy]|impact\.plane|approach\.[AB]\.direction|departure\.[AB]\.direction|departure\.[AB]\.rest\.(x|y|heading)|departure\.[AB]\.legs\.\d+\.distance)$/;
+  /^(impact\.[AB]\.(x|y|heading)|impact\.point\.[xy]|impact\.plane|approach\.[AB]\.direction|departure\.[AB]\.direction|departure\.[AB]\.rest\.(x|y|heading)|departure\.[AB]\.legs\.\d+\.distance|departure\.[AB]\.wheels\.\w+\.(braking|steer)|scene\.surfaces\.\d+\.friction)$/;
 
 function fieldsOfThing(casefile: CaseFile, thing: ThingId): Field[] {
   const all = fieldsOf(casefile).filter(({ path }) => PLACES.test(path) && isQuantity(nodeAt(casefile, path)));
@@ -45,8 +46,10 @@ export function NumberCard({ thing, view, size, speeds }: Props) {
   const placedBy = useSession((s) => s.gesture?.casefile ?? s.casefile);
   const fields = fieldsOfThing(casefile, thing);
   if (fields.length === 0) return null;
-  const card = { width: CARD.width, height: fields.length * CARD.row + CARD.around };
-  const scene = sceneOf(placedBy);
+  const opened = shownScene(casefile, thing).open;
+  const rows = fields.length + (opened ? 1 : 0);
+  const card = { width: CARD.width, height: rows * CARD.row + CARD.around };
+  const scene = shownScene(placedBy, thing);
   const at = toScreen(view, placeOf(scene, thing, speeds));
   const [left, top] = placeBeside(at, card, size, CLEAR, inkOf(scene, speeds, view));
   return (
@@ -61,9 +64,15 @@ export function NumberCard({ thing, view, size, speeds }: Props) {
       {fields.map((f) => (
         <CardNumber key={f.path} field={f} casefile={casefile} />
       ))}
+      {opened && <WheelsButton id={opened} onDone={focusCard} />}
     </div>
   );
 }
+
+/** Goes to the first number of the card, which may first have to change. */
+const focusCard = (): void => {
+  requestAnimationFrame(() => document.querySelector<HTMLInputElement>('[data-numbers] input')?.select());
+};
 
 /** Short words: the card stands beside the thing, so its name need not be said again. */
 const shortLabel = ({ path, label }: Field): string => {
@@ -73,6 +82,9 @@ const shortLabel = ({ path, label }: Field): string => {
   if (path.endsWith('.y')) return 'y';
   if (path.endsWith('heading')) return 'Heading';
   if (path.endsWith('plane')) return 'Plane';
+  if (path.endsWith('friction')) return 'Friction';
+  if (path.endsWith('braking')) return 'Braking';
+  if (path.endsWith('steer')) return 'Steer';
   return path.endsWith('direction') ? 'Direction' : label;
 };
 

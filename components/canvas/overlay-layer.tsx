@@ -3,14 +3,16 @@ import { Circle, Layer, Line } from 'react-konva/lib/ReactKonvaCore';
 import type { ThingId } from '@/lib/casefile/fields';
 import { type Vec, angleOf, distance, fromBody, subtract, toDegrees } from '@/lib/geometry/vector';
 import { type Grip, type Handle, handlesOf, isSameGrip } from '@/lib/scene/grip';
-import { type Scene, type Speeds, noseOf } from '@/lib/scene/scene';
+import { type Scene, type Speeds, noseOf, wheelPlaces } from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import { thingOf } from '@/lib/session/drag';
 import type { Measured } from '@/lib/session/tools/measure';
 import { BoardLabel } from './board-label';
 import { flat } from './ink';
 import type { Shown } from './scene-labels';
+import { OutlineInHand } from './surface-shape';
 import type { Theme } from './theme';
+import type { InHand } from './use-tool';
 
 interface Props {
   scene: Scene;
@@ -19,16 +21,17 @@ interface Props {
   speeds: Speeds;
   selection: ThingId | null;
   hovered: Grip | null;
-  measured: Measured | null;
+  drawing: InHand;
   shown: Shown;
 }
 
 /** Radius of a handle, pixels: at rest, of what is selected, under the pointer. */
 const RADIUS = { quiet: 3.5, own: 5.5, over: 7.5 };
 
-/** The handles, and the line of the measuring tool. */
+/** The handles, and what a tool has drawn that is not in the case. */
 export const OverlayLayer = memo(function OverlayLayer(props: Props) {
-  const { scene, view, theme, speeds, selection, hovered, measured, shown } = props;
+  const { scene, view, theme, speeds, selection, hovered, drawing, shown } = props;
+  const { measured, outlining } = drawing;
   return (
     <Layer listening={false}>
       {handlesOf(scene, speeds)
@@ -45,6 +48,7 @@ export const OverlayLayer = memo(function OverlayLayer(props: Props) {
           />
         ))}
       {hovered?.part === 'point' && <PointRing at={toScreen(view, scene.point.at)} theme={theme} />}
+      {outlining && <OutlineInHand drawn={outlining} view={view} theme={theme} />}
       {measured && <MeasureLine measured={measured} view={view} theme={theme} shown={shown} />}
     </Layer>
   );
@@ -74,7 +78,8 @@ function HandleShape({ handle: { grip, at }, scene, view, theme, over, own }: Ha
   const [x, y] = toScreen(view, at);
   const colour = 'which' in grip ? theme[grip.which] : theme.ink;
   const vehicle = grip.part === 'turn' ? scene.vehicles[grip.which] : null;
-  const nose = vehicle && toScreen(view, fromBody([noseOf(vehicle), 0], vehicle.pose));
+  const wheel = grip.part === 'steer' ? wheelPlaces(scene.vehicles[grip.which])[grip.wheel] : null;
+  const nose = wheel ? toScreen(view, wheel) : vehicle && toScreen(view, fromBody([noseOf(vehicle), 0], vehicle.pose));
   return (
     <>
       {nose && <Line points={flat([nose, [x, y]])} stroke={colour} strokeWidth={1} opacity={own || over ? 0.9 : 0.4} />}

@@ -1,5 +1,5 @@
-import type { Vec } from '@/lib/geometry/vector';
-import { legLabelAt, letterAt, restLabelAt } from '@/lib/scene/labels';
+import { type Vec, scale } from '@/lib/geometry/vector';
+import { WHEEL_WORDS, legLabelAt, letterAt, restLabelAt, wheelLabelAt } from '@/lib/scene/labels';
 import { type Scene, type Speeds, type Which, approachTail } from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import { BoardLabel } from './board-label';
@@ -10,6 +10,7 @@ import type { AnswerDrawn } from './use-answer-drawn';
 export interface Shown {
   length: (metres: number) => string;
   angle: (degrees: number) => string;
+  ratio: (share: number) => string;
 }
 
 interface Props {
@@ -43,7 +44,9 @@ export function SceneLabels({ scene, which, view, theme, speeds, words, shown }:
         size={17}
         strong
       />
-      {rest && <BoardLabel at={screen(rest)} text={`${which} at rest`} theme={theme} colour={theme[which]} />}
+      {rest && !isOverWheels(scene, which, view, rest) && (
+        <BoardLabel at={screen(rest)} text={`${which} at rest`} theme={theme} colour={theme[which]} />
+      )}
       {tail && speed && (
         <BoardLabel
           at={besideTail(screen(tail), screen(scene.point.at))}
@@ -65,6 +68,16 @@ export function SceneLabels({ scene, which, view, theme, speeds, words, shown }:
       )}
     </>
   );
+}
+
+/** Where the words about its wheels stand, those at rest give way. */
+function isOverWheels(scene: Scene, which: Which, view: View, at: Vec): boolean {
+  if (scene.open !== which) return false;
+  const [width, height] = scale(WHEEL_WORDS, 2 / view.scale);
+  return [0, 1, 2, 3].some((wheel) => {
+    const [x, y] = wheelLabelAt(scene, which, wheel, scale(WHEEL_WORDS, 1 / view.scale));
+    return Math.abs(x - at[0]) < width && Math.abs(y - at[1]) < height;
+  });
 }
 
 /** Beyond the tail of an arrow, seen from the contact. */

@@ -1,6 +1,7 @@
 import { memo } from 'react';
 import { Group, Layer, Line } from 'react-konva/lib/ReactKonvaCore';
 import type { ThingId } from '@/lib/casefile/fields';
+import { WHEELS } from '@/lib/casefile/wheels';
 import { type Scene, type Which, withComputed } from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import { BoardLabel } from './board-label';
@@ -11,6 +12,7 @@ import { SceneLabels, type Shown } from './scene-labels';
 import type { Theme } from './theme';
 import type { AnswerDrawn } from './use-answer-drawn';
 import { VehicleShape } from './vehicle-shape';
+import { WheelLabels } from './wheel-shape';
 
 interface Props {
   scene: Scene;
@@ -25,6 +27,12 @@ const BOTH = ['A', 'B'] as const;
 
 const isTravel = (selection: ThingId | null, which: Which): boolean =>
   selection === `departure.${which}` || (selection?.startsWith(`leg.${which}.`) ?? false);
+
+/** The selected wheel of a vehicle, by its place in the list. */
+function wheelIn(selection: ThingId | null, which: Which): number | null {
+  const index = WHEELS.findIndex(({ id }) => selection === `wheel.${which}.${id}`);
+  return index < 0 ? null : index;
+}
 
 /** The collision itself, drawn in world metres. What is known is solid; what follows from it is dashed and lighter. */
 export const SceneLayer = memo(function SceneLayer({ scene: known, view, theme, selection, answer, shown }: Props) {
@@ -50,6 +58,8 @@ export const SceneLayer = memo(function SceneLayer({ scene: known, view, theme, 
             vehicle={scene.vehicles[which]}
             pose={scene.vehicles[which].pose}
             theme={theme}
+            wheels={scene.wheels[which]}
+            wheel={wheelIn(selection, which)}
             selected={selection === `vehicle.${which}`}
           />
         ))}
@@ -77,6 +87,7 @@ export const SceneLayer = memo(function SceneLayer({ scene: known, view, theme, 
           colour={theme.inkSoft}
         />
       ))}
+      {scene.open && <WheelLabels scene={scene} which={scene.open} view={view} theme={theme} shown={shown} />}
       {BOTH.map((which) => (
         <SceneLabels
           key={which}

@@ -1,4 +1,14 @@
-import { ArrowRightToLine, Maximize, MousePointer2, Ruler, Slash, Spline, ZoomIn, ZoomOut } from 'lucide-react';
+import {
+  ArrowRightToLine,
+  Maximize,
+  MousePointer2,
+  Pentagon,
+  Ruler,
+  Slash,
+  Spline,
+  ZoomIn,
+  ZoomOut,
+} from 'lucide-react';
 import type { ReactNode } from 'react';
 import { useSession } from '@/components/hooks/use-session';
 import { TOOL_OF } from '@/lib/session/tools/all';
@@ -10,6 +20,7 @@ const ICONS: Record<ToolId, ReactNode> = {
   approach: <ArrowRightToLine />,
   travel: <Spline />,
   plane: <Slash />,
+  surface: <Pentagon />,
   measure: <Ruler />,
 };
 

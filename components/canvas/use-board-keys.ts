@@ -2,8 +2,10 @@ import { type KeyboardEvent, useRef } from 'react';
 import { useSessionStore } from '@/components/hooks/use-session';
 import type { Vec } from '@/lib/geometry/vector';
 import { nudgeEdit } from '@/lib/session/nudge';
-import { type NamedEdit, deletion, duplication, whyKept } from '@/lib/session/thing-edits';
+import type { NamedEdit } from '@/lib/session/named-edit';
+import { deletion, duplication, whyKept } from '@/lib/session/thing-edits';
 import { nameOf } from '@/lib/session/thing-names';
+import type { ToolKey } from '@/lib/session/tools/tool';
 
 const ARROWS: Record<string, Vec> = { ArrowLeft: [-1, 0], ArrowRight: [1, 0], ArrowUp: [0, 1], ArrowDown: [0, -1] };
 const TURNS: Record<string, number> = { BracketLeft: 1, BracketRight: -1 };
@@ -12,6 +14,8 @@ const STEP = { metres: 0.1, degrees: 1 };
 
 const factorOf = (event: KeyboardEvent): number => (event.shiftKey ? 10 : event.altKey ? 0.1 : 1);
 const isCommand = (event: KeyboardEvent): boolean => event.ctrlKey || event.metaKey;
+const isUndo = (event: KeyboardEvent): boolean =>
+  isCommand(event) && !event.shiftKey && event.key.toLowerCase() === 'z';
 /** '[' by what is written on the key, or by its place on keyboards that write something else there. */
 const turnOf = (event: KeyboardEvent): number =>
   event.key === '[' ? 1 : event.key === ']' ? -1 : (TURNS[event.code] ?? 0);
@@ -19,6 +23,8 @@ const turnOf = (event: KeyboardEvent): number =>
 interface Doing {
   /** Lets go of what the pointer holds. */
   cancel: () => void;
+  /** Offers a key to the tool in hand; says whether it took it. */
+  key: (key: ToolKey) => boolean;
   /** Says why nothing happened. */
   say: (words: string | null) => void;
   /** Goes to the numbers of the selected thing. */
@@ -26,7 +32,7 @@ interface Doing {
 }
 
 /** Keys on the board and on its list of things: nudge, turn, delete, duplicate, step back. A held key is one step of undo. */
-export function useBoardKeys({ cancel, say, openNumbers }: Doing) {
+export function useBoardKeys({ cancel, key, say, openNumbers }: Doing) {
   const session = useSessionStore();
   const total = useRef<{ step: Vec; turn: number } | null>(null);
 
@@ -57,6 +63,7 @@ export function useBoardKeys({ cancel, say, openNumbers }: Doing) {
   const stepBack = (): boolean => {
     const state = session.getState();
     total.current = null;
+    if (key('back')) return true;
     if (state.gesture) {
       cancel();
       state.cancel();
@@ -81,12 +88,16 @@ export function useBoardKeys({ cancel, say, openNumbers }: Doing) {
     const turn = turnOf(event);
     const by = factorOf(event);
     if (event.key === 'Escape') return stepBack();
+    if (isUndo(event) && key('back')) {
+      event.stopPropagation();
+      return true;
+    }
     if (isCommand(event))
       return event.key.toLowerCase() === 'd' && selection !== null && carryOut(duplication(casefile, selection));
     if (arrow) return nudge([arrow[0] * STEP.metres * by, arrow[1] * STEP.metres * by], 0);
     if (turn !== 0) return nudge([0, 0], turn * STEP.degrees * by);
-    if (event.key === 'Delete' || event.key === 'Backspace') return remove();
-    return event.key === 'Enter' && openNumbers();
+    if (event.key === 'Delete' || event.key === 'Backspace') return key('back') || remove();
+    return event.key === 'Enter' && (key('finish') || openNumbers());
   };
 
   return {

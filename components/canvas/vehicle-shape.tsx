@@ -1,11 +1,11 @@
 import type { Context } from 'konva/lib/Context';
-import { Circle, Group, Line, Rect, Shape } from 'react-konva/lib/ReactKonvaCore';
-import type { ScenePose, SceneVehicle } from '@/lib/scene/scene';
-import { noseOf, wheelsOf } from '@/lib/scene/scene';
+import { Circle, Group, Line, Shape } from 'react-konva/lib/ReactKonvaCore';
+import type { ScenePose, SceneVehicle, SceneWheels } from '@/lib/scene/scene';
+import { noseOf } from '@/lib/scene/scene';
 import { toDegrees } from '@/lib/geometry/vector';
 import type { Theme } from './theme';
+import { Wheels } from './wheel-shape';
 
-const WHEEL = { length: 0.6, width: 0.2 };
 /** Between two lines of the hatch, m. */
 const HATCH = 0.28;
 
@@ -14,11 +14,16 @@ export function VehicleShape({
   vehicle,
   pose,
   theme,
+  wheels,
+  wheel,
   selected,
 }: {
   vehicle: SceneVehicle;
   pose: ScenePose;
   theme: Theme;
+  wheels: SceneWheels | null;
+  /** The selected one of its wheels. */
+  wheel: number | null;
   selected: boolean;
 }) {
   const { length, width } = vehicle.body;
@@ -27,18 +32,7 @@ export function VehicleShape({
   return (
     <Group x={pose.x} y={pose.y} rotation={toDegrees(pose.heading)}>
       <Shape sceneFunc={(context) => fillBody(context, vehicle, theme)} />
-      {wheelsOf(vehicle).map(([x, y]) => (
-        <Rect
-          key={`${x} ${y}`}
-          x={x - WHEEL.length / 2}
-          y={y - WHEEL.width / 2}
-          width={WHEEL.length}
-          height={WHEEL.width}
-          fill={theme.ink}
-          opacity={0.75}
-          cornerRadius={0.05}
-        />
-      ))}
+      <Wheels vehicle={vehicle} set={wheels} selected={wheel} theme={theme} />
       <Shape
         sceneFunc={(context, shape) => {
           tracePath(context, nose, length, width);

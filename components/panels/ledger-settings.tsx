@@ -9,6 +9,15 @@ const METHODS: [id: string, name: string, when: string][] = [
   ['restitution', 'known restitution', 'Restitution, impulse ratio and both yaw rates after contact are known.'],
 ];
 
+const CONTACTS: [id: string, name: string, when: string][] = [
+  ['instant', 'an instant', 'The vehicles do not move while they touch, and the tyres give nothing meanwhile.'],
+  [
+    'lasting',
+    'lasting',
+    'The tyres push while the vehicles touch: at walking pace they give a good part of the impulse. Needs the contact duration; poses are those at first touch.',
+  ],
+];
+
 /** How the case is solved and shown. */
 export function LedgerSettings() {
   const analysis = useSession((s) => s.casefile.analysis);
@@ -30,17 +39,16 @@ export function LedgerSettings() {
         onChoose={(method) => set('method', 'analysis.method', method)}
       />
       <p className={styles.hint}>{METHODS.find(([id]) => id === analysis.method)?.[2]}</p>
-      {analysis.contact === 'lasting' && (
-        <p className={styles.hint}>
-          The contact that lasts is not solved by this version.{' '}
-          <button
-            type="button"
-            className={styles.add}
-            onClick={() => set('instant contact', 'analysis.contact', 'instant')}
-          >
-            Use the instant contact
-          </button>
-        </p>
+      {analysis.method !== 'restitution' && (
+        <>
+          <Choice
+            label="Contact"
+            value={analysis.contact ?? 'instant'}
+            options={CONTACTS.map(([id, name]) => [id, name] as const)}
+            onChoose={(contact) => set('kind of contact', 'analysis.contact', contact)}
+          />
+          <p className={styles.hint}>{CONTACTS.find(([id]) => id === (analysis.contact ?? 'instant'))?.[2]}</p>
+        </>
       )}
       <Figure
         label="Draws"

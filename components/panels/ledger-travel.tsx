@@ -2,18 +2,13 @@
 import { Plus, Trash2 } from 'lucide-react';
 import { useSession } from '@/components/hooks/use-session';
 import buttons from '@/components/ui/button.module.css';
-import {
-  LEVEL_SLOPE,
-  defaultDeparture,
-  defaultLeg,
-  defaultSpin,
-  wheelsApart,
-  wheelsTogether,
-} from '@/lib/casefile/defaults';
+import { LEVEL_SLOPE, defaultDeparture, defaultLeg, defaultSpin } from '@/lib/casefile/defaults';
+import { wheelsTogether } from '@/lib/casefile/wheels';
 import type { CaseFile, Departure, SpinDeparture, VehicleId } from '@/lib/casefile/schema';
 import { focusNext } from './focus-next';
 import { LedgerMark } from './ledger-mark';
 import styles from './ledger.module.css';
+import { WheelsButton } from './wheels-button';
 
 /** Lengths that are added to begin with, m. */
 const FIRST = 5;
@@ -136,11 +131,14 @@ function RestTools({ id, spin }: { id: VehicleId; spin: SpinDeparture }) {
   );
   return (
     <div className={styles.tools}>
-      {together
-        ? tool('State each wheel', `${at}.wheels`, wheelsApart(spin.wheels))
-        : tool('One braking for all wheels', `${at}.wheels`, wheelsTogether(spin.wheels))}
+      <WheelsButton id={id} onDone={() => focusNext(`field-${at}.wheels.${together ? 'frontLeft' : 'all'}.braking`)} />
       {spin.slope ? tool('Level ground', `${at}.slope`, null) : tool('State a slope', `${at}.slope`, LEVEL_SLOPE)}
       {tool('Take away the travel', at, null)}
+      {!together && !wheelsTogether(spin.wheels) && (
+        <p className={styles.aside}>
+          One braking for all wheels is offered again once all four brake alike and each steer is exactly 0°.
+        </p>
+      )}
     </div>
   );
 }

@@ -1,5 +1,5 @@
 'use client';
-import { useEffect, useMemo, useRef, useState } from 'react';
+import { Fragment, useEffect, useMemo, useRef, useState } from 'react';
 import { useAnswer } from '@/components/hooks/use-answer';
 import { useSession } from '@/components/hooks/use-session';
 import { type Field, type GroupId, GROUPS, fieldsOf } from '@/lib/casefile/fields';
@@ -10,6 +10,7 @@ import { LedgerDamage } from './ledger-damage';
 import { LedgerRow } from './ledger-row';
 import { LedgerSeats } from './ledger-seats';
 import { LedgerSettings } from './ledger-settings';
+import { LedgerCorners, LedgerSurfaces } from './ledger-surfaces';
 import { LedgerTravel } from './ledger-travel';
 import styles from './ledger.module.css';
 
@@ -53,13 +54,15 @@ export function Ledger() {
               {marked > 0 && <span className={styles.count}>{marked} to look at</span>}
             </summary>
             {rows.map((field) => (
-              <LedgerRow
-                key={field.path}
-                field={field}
-                units={units}
-                share={shares?.[field.path]?.total ?? null}
-                mark={marks.get(field.path) ?? null}
-              />
+              <Fragment key={field.path}>
+                <LedgerRow
+                  field={field}
+                  units={units}
+                  share={shares?.[field.path]?.total ?? null}
+                  mark={marks.get(field.path) ?? null}
+                />
+                <BelowRow path={field.path} units={units} />
+              </Fragment>
             ))}
             <GroupTools id={id} units={units} marks={marks} />
           </details>
@@ -75,12 +78,19 @@ export function Ledger() {
   );
 }
 
+/** The corners of a surface stand under the last of its rows. */
+function BelowRow({ path, units }: { path: string; units: UnitSystem }) {
+  const surface = /^scene\.surfaces\.(\d+)\.friction$/.exec(path);
+  return surface ? <LedgerCorners index={Number(surface[1])} units={units} /> : null;
+}
+
 function GroupTools({ id, units, marks }: { id: GroupId; units: UnitSystem; marks: ReadonlyMap<string, string> }) {
   if (id === 'A' || id === 'B') return <LedgerSeats id={id} units={units} />;
   if (id === 'after.A') return <LedgerTravel id="A" mark={marks.get('departure.A') ?? null} />;
   if (id === 'after.B') return <LedgerTravel id="B" mark={marks.get('departure.B') ?? null} />;
   if (id === 'damage.A') return <LedgerDamage id="A" mark={marks.get(id) ?? null} />;
   if (id === 'damage.B') return <LedgerDamage id="B" mark={marks.get(id) ?? null} />;
+  if (id === 'surfaces') return <LedgerSurfaces />;
   return null;
 }
 

@@ -1,4 +1,4 @@
-import type { CaseFile, Damage, Departure, Leg, Quantity, SpinDeparture, Vehicle } from './schema';
+import type { CaseFile, Damage, Departure, Leg, Quantity, Surface, Vehicle } from './schema';
 
 /** The source of a value that nobody has touched; shown and printed as such. */
 export const DEFAULT_SOURCE = 'default, not measured';
@@ -90,21 +90,26 @@ export const defaultDamage = (): Damage => ({
   b: normal(600_000, 250_000),
 });
 
+/** A surface as it is drawn: dry asphalt until somebody states its friction. `place`: which of the surfaces it becomes, from 0. */
+export const defaultSurface = (place: number, outline: [number, number][]): Surface => ({
+  name: `Surface ${place + 1}`,
+  outline,
+  friction: normal(0.74, 0.06),
+});
+
+/** Half the length and width of a surface that is added without drawing, m. */
+const PATCH = { length: 3, width: 2 };
+
+/** A rectangle about a place (m), to begin with. */
+export const patchAbout = (x: number, y: number): [number, number][] => [
+  [x - PATCH.length, y - PATCH.width],
+  [x + PATCH.length, y - PATCH.width],
+  [x + PATCH.length, y + PATCH.width],
+  [x - PATCH.length, y + PATCH.width],
+];
+
 /** A slope to begin with: level, rising along +x. */
 export const LEVEL_SLOPE = { grade: normal(0, 0.003), uphill: normal(0, 5) };
-
-type Wheels = SpinDeparture['wheels'];
-
-/** The one braking of all wheels, stated for each, straight ahead. */
-export function wheelsApart(wheels: Wheels): Wheels {
-  if (!('all' in wheels)) return wheels;
-  const wheel = { braking: wheels.all.braking, steer: fixed(0) };
-  return { frontLeft: wheel, frontRight: wheel, rearLeft: wheel, rearRight: wheel };
-}
-
-/** The braking of the front left wheel, for all. */
-export const wheelsTogether = (wheels: Wheels): Wheels =>
-  'all' in wheels ? wheels : { all: { braking: wheels.frontLeft.braking } };
 
 /** The value that a quantity starts from when it is added to a case (SI, deg). */
 export function startingQuantity(path: string): Quantity {

@@ -1,8 +1,8 @@
 import { DEFAULT_SOURCE, DRAWN_SOURCE } from './defaults';
 import type { Issue } from './issue';
 import { checkCase } from './parse';
-import { isQuantity, nodeAt } from './quantities';
-import type { CaseFile, Quantity } from './schema';
+import { isQuantity, nodeAt, supportOf } from './quantities';
+import type { CaseFile, Quantity, Spread } from './schema';
 
 /**
  * Edits are data. A drag, a field, a key and a test send the same ones; applyEdit is the one place that applies them.
@@ -37,7 +37,7 @@ function applied(document: unknown, edit: Edit): unknown {
     case 'value': {
       const node = nodeAt(document, edit.path);
       if (!isQuantity(node)) return replaced(document, edit.path.split('.'), edit.value);
-      return replaced(document, edit.path.split('.'), shifted(node, edit.value, edit.source));
+      return replaced(document, edit.path.split('.'), shifted(edit, node));
     }
     case 'set':
       return Object.is(nodeAt(document, edit.path), edit.to)
@@ -55,15 +55,20 @@ function applied(document: unknown, edit: Edit): unknown {
 }
 
 /** The quantity at another value: limits move along, a default becomes drawn. */
-function shifted(quantity: Quantity, value: number, source: string | undefined): Quantity {
-  const by = value - quantity.value;
-  const { spread } = quantity;
-  const moved =
-    spread && (spread.shape === 'rectangular' || spread.shape === 'triangular')
-      ? { ...spread, low: spread.low + by, high: spread.high + by }
-      : spread;
+function shifted({ path, value, source }: Edit & { do: 'value' }, quantity: Quantity): Quantity {
+  const moved = movedSpread(path, quantity, value);
   const said = source ?? (quantity.source === DEFAULT_SOURCE ? DRAWN_SOURCE : quantity.source);
   return { value, ...(moved ? { spread: moved } : {}), ...(said === undefined ? {} : { source: said }) };
+}
+
+/** Limits end where what they limit cannot go on: a share of 0.5 ± 0.3 that becomes 0.9 reaches from 0.6 to 1. */
+function movedSpread(path: string, { value: from, spread }: Quantity, to: number): Spread | undefined {
+  if (!spread || spread.shape === 'fixed' || spread.shape === 'normal') return spread;
+  const by = to - from;
+  const { low, high, lowOpen } = supportOf(path);
+  const least = lowOpen || to < low ? -Infinity : low;
+  const most = to > high ? Infinity : high;
+  return { ...spread, low: Math.max(least, spread.low + by), high: Math.min(most, spread.high + by) };
 }
 
 function replaced(node: unknown, path: string[], to: unknown): unknown {

@@ -2,6 +2,7 @@ import type { Dimension } from '@/lib/units/dimension';
 import { nodeAt } from './quantities';
 import type { CaseFile, SpinDeparture, VehicleId } from './schema';
 import { VEHICLE_IDS } from './schema';
+import { WHEELS, type WheelId } from './wheels';
 
 /**
  * Every value of a case that a person can enter, as one list: the ledger's rows, the report's input table, the words a
@@ -30,6 +31,7 @@ export const GROUPS = [
   { id: 'damage.A', title: 'Damage, A' },
   { id: 'damage.B', title: 'Damage, B' },
   { id: 'recorded', title: 'Recorded' },
+  { id: 'surfaces', title: 'Surfaces' },
 ] as const;
 export type GroupId = (typeof GROUPS)[number]['id'];
 
@@ -42,6 +44,8 @@ export type ThingId =
   | `departure.${VehicleId}`
   | `leg.${VehicleId}.${number}`
   | `rest.${VehicleId}`
+  | `wheel.${VehicleId}.${WheelId}`
+  | `surface.${number}`
   | `mark.${number}`;
 
 type Line = [key: string, label: string, dimension: Dimension | null, optional?: 'optional'];
@@ -111,6 +115,7 @@ export function fieldsOf(casefile: CaseFile): Field[] {
     ...VEHICLE_IDS.flatMap((id) =>
       RECORDED.map((line) => field(`recorded.${id}.${line[0]}`, line, 'recorded', `vehicle.${id}`, `${id}:`)),
     ),
+    ...(casefile.scene?.surfaces ?? []).flatMap((_, k) => surfaceFields(k)),
   ];
 }
 
@@ -161,6 +166,13 @@ function damageFields(casefile: CaseFile, id: VehicleId): Field[] {
   const each = depths.map((_, k): Line => [`depths.${k}`, `Depth ${k + 1}`, 'length']);
   return [...DAMAGE, ...each].map((line) => field(`damage.${id}.${line[0]}`, line, `damage.${id}`, `vehicle.${id}`));
 }
+const SURFACE: Line[] = [
+  ['name', 'name', null],
+  ['friction', 'friction', 'ratio'],
+];
+
+const surfaceFields = (k: number): Field[] =>
+  SURFACE.map((line) => field(`scene.surfaces.${k}.${line[0]}`, line, 'surfaces', `surface.${k}`, `Surface ${k + 1}:`));
 
 /** What is no row of its own and may still be pointed at by a refusal or a check. */
 const WHOLE_GROUPS: Record<string, string> = {
@@ -173,6 +185,7 @@ const WHOLE_GROUPS: Record<string, string> = {
   impact: 'Contact',
   'analysis.method': 'Method',
   'analysis.contact': 'Kind of contact',
+  'scene.surfaces': 'Surfaces',
   vehicles: 'Vehicles',
   'vehicles.A.seats': 'A: Seats',
   'vehicles.B.seats': 'B: Seats',
@@ -189,25 +202,25 @@ const WHOLE_GROUPS: Record<string, string> = {
 
 function groupLabel(path: string): string {
   const leg = /^departure\.([AB])\.legs\.(\d+)$/.exec(path);
-  return leg ? `${leg[1]}: Leg ${Number(leg[2]) + 1}` : (WHOLE_GROUPS[path] ?? path);
+  if (leg) return `${leg[1]}: Leg ${Number(leg[2]) + 1}`;
+  const surface = /^scene\.surfaces\.(\d+)(\.outline)?(?:\.(\d+))?/.exec(path);
+  if (!surface) return WHOLE_GROUPS[path] ?? path;
+  const [, k, outline, corner] = surface;
+  const part = corner ? `: corner ${Number(corner) + 1}` : outline ? ': corners' : '';
+  return `Surface ${Number(k) + 1}${part}`;
 }
-
-const WHEELS = [
-  ['frontLeft', 'front left'],
-  ['frontRight', 'front right'],
-  ['rearLeft', 'rear left'],
-  ['rearRight', 'rear right'],
-] as const;
 
 function spinFields({ wheels, slope }: SpinDeparture, id: VehicleId): Field[] {
   const group: GroupId = `after.${id}`;
   const at = `departure.${id}`;
   const row = (key: string, label: string, dimension: Dimension, optional?: 'optional'): Field =>
     field(`${at}.${key}`, [key, label, dimension, optional], group, `rest.${id}`);
-  const each = WHEELS.flatMap(([wheel, words]) => [
-    row(`wheels.${wheel}.braking`, `Braking share, ${words}`, 'ratio'),
-    row(`wheels.${wheel}.steer`, `Steer, ${words}`, 'angle'),
-  ]);
+  const each = WHEELS.flatMap(({ id: wheel, words }) =>
+    [
+      row(`wheels.${wheel}.braking`, `Braking share, ${words}`, 'ratio'),
+      row(`wheels.${wheel}.steer`, `Steer, ${words}`, 'angle'),
+    ].map((own): Field => ({ ...own, thing: `wheel.${id}.${wheel}` })),
+  );
   return [
     row('rest.x', 'Mass centre at rest, x', 'length'),
     row('rest.y', 'Mass centre at rest, y', 'length'),

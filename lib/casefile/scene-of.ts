@@ -1,6 +1,15 @@
 import { type Vec, toRadians } from '@/lib/geometry/vector';
-import type { Scene, SceneDirection, ScenePose, SceneTravel, SceneVehicle, Which } from '@/lib/scene/scene';
+import type {
+  Scene,
+  SceneDirection,
+  ScenePose,
+  SceneTravel,
+  SceneVehicle,
+  SceneWheels,
+  Which,
+} from '@/lib/scene/scene';
 import type { CaseFile, Quantity } from './schema';
+import { WHEELS, wheelsApart } from './wheels';
 
 /** Standard uncertainty that a quantity states, in its own unit. */
 function uncertaintyOf({ value, spread }: Quantity): number {
@@ -40,6 +49,17 @@ function restOf({ departure }: CaseFile, which: Which): ScenePose | null {
   return x && y && heading ? { x: x.value, y: y.value, heading: toRadians(heading.value) } : null;
 }
 
+function wheelsOf({ departure }: CaseFile, which: Which): SceneWheels | null {
+  const stated = departure[which];
+  if (stated?.kind !== 'spin') return null;
+  const wheels = wheelsApart(stated.wheels);
+  const each = WHEELS.map(({ id }) => ({
+    braking: wheels[id].braking.value,
+    steer: toRadians(wheels[id].steer.value),
+  }));
+  return { each, apart: !('all' in stated.wheels) };
+}
+
 /** The angle of the normal from A into B. */
 function normalOf(plane: number, a: SceneVehicle, b: SceneVehicle): number {
   const normal: Vec = [Math.sin(plane), -Math.cos(plane)];
@@ -66,6 +86,13 @@ export function sceneOf(casefile: CaseFile): Scene {
     }),
     travel: each((which) => travelOf(casefile, which)),
     rest: each((which) => restOf(casefile, which)),
+    wheels: each((which) => wheelsOf(casefile, which)),
+    open: null,
+    surfaces: (scene?.surfaces ?? []).map(({ name, friction, outline }) => ({
+      name,
+      friction: friction.value,
+      outline: outline.map(([x, y]): Vec => [x, y]),
+    })),
     marks: (scene?.marks ?? []).map(({ label, points }) => ({ label, points: points.map(([x, y]): Vec => [x, y]) })),
     north: toRadians(scene?.north ?? 90),
   };

@@ -133,6 +133,8 @@ const recordedSchema = z
 
 const pointSchema = z.tuple([number, number]);
 
+const surfaceSchema = z.strictObject({ name: text, outline: z.array(pointSchema).min(3), friction: positiveQuantity });
+
 const sceneSchema = z.strictObject({
   background: z
     .strictObject({
@@ -144,9 +146,7 @@ const sceneSchema = z.strictObject({
       opacity: number.min(0).max(1),
     })
     .nullish(),
-  surfaces: z
-    .array(z.strictObject({ name: text, outline: z.array(pointSchema).min(3), friction: positiveQuantity }))
-    .optional(),
+  surfaces: z.array(surfaceSchema).optional(),
   marks: z.array(z.strictObject({ kind: text, label: text, points: z.array(pointSchema).min(1) })).optional(),
   north: number.optional(),
 });
@@ -201,5 +201,6 @@ export type LegsDeparture = z.infer<typeof legsDeparture>;
 export type SpinDeparture = z.infer<typeof spinDeparture>;
 export type FourWheels = z.infer<typeof fourWheelsSchema>;
 export type Leg = z.infer<typeof legSchema>;
+export type Surface = z.infer<typeof surfaceSchema>;
 export type Damage = z.infer<typeof damageSchema>;
 export type Method = (typeof METHODS)[number];

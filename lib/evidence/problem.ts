@@ -56,9 +56,8 @@ export interface SpinStart extends LocalSeparation {
 /** Travel simulated to rest. */
 export interface SpinSlots {
   kind: 'spin';
-  restX: Slot;
-  restY: Slot;
-  restHeading: Slot;
+  /** The measured rest pose, where the travel is worked backwards; null in a fit, which runs it forward. */
+  rest: { x: Slot; y: Slot; heading: Slot } | null;
   friction: Slot;
   onset: Slot | null;
   grade: Slot | null;
@@ -70,6 +69,40 @@ export interface SpinSlots {
   /** Filled in once the central values are solved. */
   start: SpinStart | null;
 }
+
+/** Travel that is evidence of a fit: what its wheels do while a contact lasts. */
+export interface ObservedSlots {
+  kind: 'observed';
+  friction: Slot;
+  share: Slot;
+}
+
+/** What a fit sets beyond the vehicles, and what it is held against. */
+export interface FitSlots {
+  speed: Record<VehicleId, Slot>;
+  /** The direction of approach, or where `fromHeading` the slip that is added to the heading. */
+  direction: Record<VehicleId, { slot: Slot; fromHeading: boolean }>;
+  restitution: Slot;
+  friction: Slot;
+  observations: Observation[];
+}
+
+/** One piece of evidence: what it is of, its mean and standard uncertainty in SI and radians. */
+export interface Observation {
+  path: string;
+  of: Observed;
+  value: number;
+  sd: number;
+}
+
+export type Observed =
+  | `${VehicleId}.${'departureSpeed' | 'departureDirection' | 'departureYawRate' | 'deltaVForward' | 'deltaVLeft'}`
+  | `${VehicleId}.${'restX' | 'restY' | 'restHeading'}`
+  | `offset.${'x' | 'y' | 'heading'}`
+  | 'slide'
+  | 'energyLost'
+  /** An upper limit: no residual depth on either vehicle. */
+  | 'energyBelow';
 
 /** Residual crush of one vehicle. */
 export interface DamageSlots {
@@ -97,13 +130,10 @@ export interface VehicleSlots {
   /** Inputs of the method directions; results of the method restitution. */
   approachDirection: Slot | null;
   approachYawRate: Slot | null;
-  departure: LegsSlots | SpinSlots;
+  departure: LegsSlots | SpinSlots | ObservedSlots;
   /** null without any residual depth: that bounds the energy from above and gives no estimate. */
   damage: DamageSlots | null;
 }
-
-/** The methods that this version solves. */
-export type SolvedMethod = Exclude<Method, 'fit'>;
 
 /** A contact of finite duration: who carries the contact line. */
 export interface LastingSlots {
@@ -113,7 +143,9 @@ export interface LastingSlots {
 }
 
 export interface Problem {
-  method: SolvedMethod;
+  method: Method;
+  /** null: the impact is worked backwards. */
+  fit: FitSlots | null;
   /** null: the impact is an instant. */
   lasting: LastingSlots | null;
   inputs: Input[];

@@ -1,20 +1,14 @@
-import type { Issue } from '@/lib/casefile/issue';
 import { type CaseFile, type Method } from '@/lib/casefile/schema';
 import { InputList } from './input-list';
-import type { Problem, SolvedMethod } from './problem';
+import type { Problem } from './problem';
+import { readFit } from './read-fit';
 import { readVehicle } from './read-vehicle';
 
-/** What a case asks for that this version does not compute, as the reason of an unsolved case; null when it does. */
-export function notYetSolved(casefile: CaseFile, method: Method): Issue | null {
-  if (method === 'fit') return { path: 'analysis.method', says: 'this version does not solve the method fit yet' };
-  return null;
-}
-
 /**
- * Turns a case into the problem that its method solves, in SI and radians. The case must have passed needsOf and
- * notYetSolved for the method.
+ * Turns a case into the problem that its method solves, in SI and radians. The case must have passed needsOf
+ * for the method.
  */
-export function readEvidence(casefile: CaseFile, method: SolvedMethod, seed: number): Problem {
+export function readEvidence(casefile: CaseFile, method: Method, seed: number): Problem {
   const list = new InputList();
   const { impact, vehicles, pulse } = casefile;
   const known = method === 'restitution';
@@ -22,6 +16,7 @@ export function readEvidence(casefile: CaseFile, method: SolvedMethod, seed: num
   const lasts = casefile.analysis.contact === 'lasting' && duration !== null;
   return {
     method,
+    fit: method === 'fit' ? readFit(list, casefile, seed) : null,
     lasting: lasts ? { lineOn: impact.lineOn ?? 'B', pulse: duration } : null,
     vehicles: { A: readVehicle(list, casefile, method, 'A'), B: readVehicle(list, casefile, method, 'B') },
     pointX: list.si('impact.point.x', impact.point.x),

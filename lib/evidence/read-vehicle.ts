@@ -4,16 +4,17 @@ import type {
   Damage,
   FourWheels,
   LegsDeparture,
+  Method,
   Quantity,
   SpinDeparture,
   VehicleId,
 } from '@/lib/casefile/schema';
 import { YAW_INERTIA_RELATIVE_SD } from '@/lib/mechanics/inertia';
 import { type InputList, inputOf } from './input-list';
-import type { DamageSlots, Input, LegsSlots, SolvedMethod, SpinSlots, VehicleSlots } from './problem';
+import type { DamageSlots, Input, LegsSlots, ObservedSlots, SpinSlots, VehicleSlots } from './problem';
 
 /** What the method uses of one vehicle: itself, its pose, its approach, its travel and its damage. */
-export function readVehicle(list: InputList, casefile: CaseFile, method: SolvedMethod, id: VehicleId): VehicleSlots {
+export function readVehicle(list: InputList, casefile: CaseFile, method: Method, id: VehicleId): VehicleSlots {
   const spec = casefile.vehicles[id];
   const approach = casefile.approach[id];
   const pose = casefile.impact[id];
@@ -31,9 +32,9 @@ export function readVehicle(list: InputList, casefile: CaseFile, method: SolvedM
     y: list.si(`impact.${id}.y`, pose.y),
     heading: list.angle(`impact.${id}.heading`, pose.heading),
     approachDirection: crossing ? list.angleIf(`approach.${id}.direction`, approach.direction) : null,
-    approachYawRate: crossing ? list.angle(`approach.${id}.yawRate`, approach.yawRate) : null,
-    departure: readDeparture(list, casefile, id),
-    damage: readDamage(list, casefile.damage?.[id], `damage.${id}`),
+    approachYawRate: method !== 'restitution' ? list.angle(`approach.${id}.yawRate`, approach.yawRate) : null,
+    departure: readDeparture(list, casefile, method, id),
+    damage: method === 'fit' ? null : readDamage(list, casefile.damage?.[id], `damage.${id}`),
   };
 }
 
@@ -51,24 +52,52 @@ function massCentre(path: string, spec: CaseFile['vehicles']['A']): Input {
   return { ...input, support: { ...input.support, high: spec.wheelbase } };
 }
 
-function readDeparture(list: InputList, casefile: CaseFile, id: VehicleId): LegsSlots | SpinSlots {
+function readDeparture(
+  list: InputList,
+  casefile: CaseFile,
+  method: Method,
+  id: VehicleId,
+): LegsSlots | SpinSlots | ObservedSlots {
   const departure = casefile.departure[id];
-  if (departure?.kind === 'spin') return readSpin(list, casefile, departure, id);
+  if (departure?.kind === 'spin') return readSpin(list, casefile, departure, id, method !== 'fit');
+  if (method === 'fit') return readObserved(list, departure ?? null, id);
   return readLegs(list, departure as LegsDeparture, `departure.${id}`);
+}
+
+/** Friction and share of a vehicle whose travel left no evidence: it rolls freely (contract of the model). */
+const UNKNOWN_TRAVEL = { friction: 0.7, share: 0 };
+
+/** The wheels of a vehicle in a fit while a contact lasts: those of its first leg, at their values. */
+function readObserved(list: InputList, departure: LegsDeparture | null, id: VehicleId): ObservedSlots {
+  const [leg] = departure?.legs ?? [];
+  const at = `departure.${id}.legs.0`;
+  const fixed = (key: 'friction' | 'share') =>
+    list.si(`${at}.${key}`, { value: leg?.[key].value ?? UNKNOWN_TRAVEL[key] });
+  return { kind: 'observed', friction: fixed('friction'), share: fixed('share') };
 }
 
 const WHEELS = ['frontLeft', 'frontRight', 'rearLeft', 'rearRight'] as const;
 
-function readSpin(list: InputList, casefile: CaseFile, spin: SpinDeparture, id: VehicleId): SpinSlots {
+function readSpin(
+  list: InputList,
+  casefile: CaseFile,
+  spin: SpinDeparture,
+  id: VehicleId,
+  backwards: boolean,
+): SpinSlots {
   const at = `departure.${id}`;
   const { rest, wheels } = spin;
   const all = 'all' in wheels ? list.si(`${at}.wheels.all.braking`, wheels.all.braking) : null;
   const each = 'all' in wheels ? null : wheels;
   return {
     kind: 'spin',
-    restX: list.si(`${at}.rest.x`, rest.x as Quantity),
-    restY: list.si(`${at}.rest.y`, rest.y as Quantity),
-    restHeading: list.angle(`${at}.rest.heading`, rest.heading as Quantity),
+    rest: backwards
+      ? {
+          x: list.si(`${at}.rest.x`, rest.x as Quantity),
+          y: list.si(`${at}.rest.y`, rest.y as Quantity),
+          heading: list.angle(`${at}.rest.heading`, rest.heading as Quantity),
+        }
+      : null,
     friction: list.si(`${at}.friction`, spin.friction),
     onset: list.siIf(`${at}.onset`, spin.onset),
     grade: list.siIf(`${at}.slope.grade`, spin.slope?.grade),
@@ -83,7 +112,11 @@ function readSpin(list: InputList, casefile: CaseFile, spin: SpinDeparture, id: 
   };
 }
 
-const readLegs = (list: InputList, { direction, yawRate, endSpeed, legs }: LegsDeparture, at: string): LegsSlots => ({
+export const readLegs = (
+  list: InputList,
+  { direction, yawRate, endSpeed, legs }: LegsDeparture,
+  at: string,
+): LegsSlots => ({
   kind: 'legs',
   direction: list.angle(`${at}.direction`, direction),
   yawRate: list.angleIf(`${at}.yawRate`, yawRate),
@@ -96,9 +129,14 @@ const readLegs = (list: InputList, { direction, yawRate, endSpeed, legs }: LegsD
   })),
 });
 
-/** No residual depth at all bounds the energy from above and gives no estimate: null. */
-function readDamage(list: InputList, damage: Damage | null | undefined, at: string): DamageSlots | null {
-  if (!damage || damage.depths.every(({ value }) => value === 0)) return null;
+/** No residual depth at all bounds the energy from above and gives no estimate: null, unless the bound is asked for. */
+export function readDamage(
+  list: InputList,
+  damage: Damage | null | undefined,
+  at: string,
+  asBound = false,
+): DamageSlots | null {
+  if (!damage || (!asBound && damage.depths.every(({ value }) => value === 0))) return null;
   return {
     depths: damage.depths.map((depth, i) => list.si(`${at}.depths.${i}`, depth)),
     strips: stripShares(damage),

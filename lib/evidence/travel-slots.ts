@@ -7,9 +7,10 @@ export function travelSlots(vehicle: VehicleSlots): Set<Slot> {
     const legs = departure.legs.flatMap((leg) => [leg.distance, leg.friction, leg.share, leg.grade]);
     return present([departure.direction, departure.yawRate, departure.endSpeed, ...legs]);
   }
-  const { restX, restY, restHeading, friction, onset, grade, uphill, braking, steer, surfaces } = departure;
+  if (departure.kind === 'observed') return new Set();
+  const { rest: pose, friction, onset, grade, uphill, braking, steer, surfaces } = departure;
   const { mass, yawInertia, frontAxleToMassCentre, x, y, heading } = vehicle;
-  const rest = [restX, restY, restHeading, friction, onset, grade, uphill];
+  const rest = [pose?.x ?? null, pose?.y ?? null, pose?.heading ?? null, friction, onset, grade, uphill];
   const wheels = [...braking, ...steer, ...surfaces.map((surface) => surface.friction)];
   return present([mass, yawInertia, frontAxleToMassCentre, x, y, heading, ...rest, ...wheels]);
 }

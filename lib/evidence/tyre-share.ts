@@ -14,8 +14,7 @@ export function tyreShareOf(problem: Problem, impulse: number): number | null {
   const pulse = problem.pulse === null ? ASSUMED_PULSE : at(problem.pulse);
   const { A, B } = problem.vehicles;
   const pushed = [A, B].reduce(
-    (sum, v) =>
-      sum + at(v.departure.kind === 'legs' ? v.departure.legs[0].friction : v.departure.friction) * at(v.mass),
+    (sum, v) => sum + at((v.departure.kind === 'legs' ? v.departure.legs[0] : v.departure).friction) * at(v.mass),
     0,
   );
   return (pushed * G * pulse) / impulse;

@@ -35,13 +35,18 @@ export function fillBlock(
   stream: string,
   block: number,
 ): void {
-  const { value, spread } = drawn;
-  if (spread.shape === 'fixed') {
-    out.fill(value, 0, count);
+  if (drawn.spread.shape === 'fixed') {
+    out.fill(drawn.value, 0, count);
     return;
   }
   fillUniforms(seededState(seed, stream, block), out, count);
-  if (spread.shape === 'normal') toNormal(out, count, value, spread.sd, drawn.support);
+  spreadUniforms(out, count, drawn);
+}
+
+/** Puts uniform numbers of (0, 1) in out[0 .. count - 1] through the inverse distribution of an input, in place. */
+export function spreadUniforms(out: Float64Array, count: number, { value, spread, support }: Drawn): void {
+  if (spread.shape === 'fixed') out.fill(value, 0, count);
+  else if (spread.shape === 'normal') toNormal(out, count, value, spread.sd, support);
   else if (spread.shape === 'rectangular') toRectangular(out, count, spread.low, spread.high);
   else toTriangular(out, count, value, spread.low, spread.high);
 }
@@ -88,4 +93,11 @@ export function standardUncertainty(value: number, spread: DrawSpread): number {
   const { low, high } = spread;
   if (spread.shape === 'rectangular') return (high - low) / Math.sqrt(12);
   return Math.sqrt((low * low + high * high + value * value - low * high - low * value - high * value) / 18);
+}
+
+/** Mean of a spread about its value, before any cut to the support. */
+export function meanOf(value: number, spread: DrawSpread): number {
+  if (spread.shape === 'rectangular') return (spread.low + spread.high) / 2;
+  if (spread.shape === 'triangular') return (spread.low + spread.high + value) / 3;
+  return value;
 }

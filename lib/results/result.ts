@@ -43,6 +43,38 @@ const named = z.record(z.string(), number);
 const bands = z.record(z.string(), bandSchema);
 const seatResult = z.strictObject({ name: z.string(), central: named, bands });
 
+/** What the method fit says of itself. */
+const fitSchema = z
+  .strictObject({
+    /** log of the marginal likelihood: SI units, radians, normalised densities. */
+    logEvidence: number,
+    /** Particles that differ from one another. */
+    effectiveSize: number,
+    /** Share of the proposed moves that were taken, and the number of temperatures. */
+    acceptance: number,
+    temperatures: number,
+    /** Observed less predicted at the central state, in standard uncertainties, by path; chi-square is the sum of their squares. */
+    residuals: named,
+    chiSquare: number,
+    degreesOfFreedom: number,
+    /** 1 less the share of its prior variance that is left of each unknown, by path. */
+    contraction: named,
+    /** A second, independent run: its marginal likelihood, and the largest difference of a mean over the standard uncertainty. */
+    secondRun: z.strictObject({ logEvidence: number, disagreement: number }),
+  })
+  .meta({ id: 'Fit' });
+
+/** A rival account: the case with its changes, fitted. Without figures where no state explains it, and then why. */
+const hypothesisSchema = z
+  .strictObject({
+    name: z.string(),
+    central: named,
+    bands,
+    logEvidence: number.optional(),
+    says: z.string().optional(),
+  })
+  .meta({ id: 'Hypothesis' });
+
 export const resultSchema = z
   .strictObject({
     format: z.literal('retrodict-result'),
@@ -58,8 +90,8 @@ export const resultSchema = z
     impossible: z.record(z.string(), number),
     checks: z.array(checkSchema),
     sensitivity: z.record(z.string(), z.record(z.string(), z.strictObject({ first: number, total: number }))),
-    fit: z.null(),
-    hypotheses: z.array(z.never()),
+    fit: fitSchema.nullable(),
+    hypotheses: z.array(hypothesisSchema),
     seats: z.strictObject({ A: z.array(seatResult), B: z.array(seatResult) }),
     more: z.strictObject({
       /** 2-norm condition number of [mA hA, mB hB] (directions). */
@@ -111,5 +143,7 @@ export const resultSchema = z
 export type Result = z.infer<typeof resultSchema>;
 export type Band = z.infer<typeof bandSchema>;
 export type Check = z.infer<typeof checkSchema>;
+export type FitResult = z.infer<typeof fitSchema>;
+export type HypothesisResult = z.infer<typeof hypothesisSchema>;
 export type Level = (typeof LEVELS)[number];
 export type SeatResult = z.infer<typeof seatResult>;

@@ -5,6 +5,7 @@ import type { Shapes } from './bands';
 import { checksOf } from './checks/all';
 import { moreOf } from './more';
 import type { Result } from './result';
+import { fitResult } from './fit';
 import { seatResults } from './seats';
 import { sensitivityOf } from './sensitivity';
 import type { Solution } from '@/lib/solve/solve';
@@ -34,7 +35,7 @@ export function summarise(
     impossible: solution.impossible,
     checks: checksOf({ casefile, solution, central, bands, coverage }),
     sensitivity: sensitivityOf(solution),
-    fit: null,
+    fit: fitResult(solution),
     hypotheses: [],
     seats: { A: seatResults(solution, 'A', coverage), B: seatResults(solution, 'B', coverage) },
     more: moreOf(solution),

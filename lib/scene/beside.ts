@@ -1,5 +1,6 @@
-import type { Vec } from '@/lib/geometry/vector';
+import { type Vec, scale } from '@/lib/geometry/vector';
 import { handlesOf } from './grip';
+import { WHEEL_WORDS, wheelLabelAt } from './labels';
 import { type Scene, type Speeds, approachTip, centreOf, outlineAt, pathOf } from './scene';
 import { type Size, type View, toScreen } from './view';
 
@@ -63,5 +64,16 @@ export function inkOf(scene: Scene, speeds: Speeds, view: View): Vec[] {
       ...(tip ? [tip] : []),
     ];
   });
-  return [...points, ...handlesOf(scene, speeds).map(({ at }) => at)].map((point) => toScreen(view, point));
+  const handles = handlesOf(scene, speeds).map(({ at }) => at);
+  return [...points, ...handles].map((point) => toScreen(view, point)).concat(wheelWords(scene, view));
+}
+
+/** The ends and the middle of the words beside the open wheels, pixels. */
+function wheelWords(scene: Scene, view: View): Vec[] {
+  const { open, wheels } = scene;
+  if (!open) return [];
+  return (wheels[open]?.each ?? []).flatMap((_, k) => {
+    const [x, y] = toScreen(view, wheelLabelAt(scene, open, k, scale(WHEEL_WORDS, 1 / view.scale)));
+    return [-WHEEL_WORDS[0], 0, WHEEL_WORDS[0]].map((aside): Vec => [x + aside, y]);
+  });
 }

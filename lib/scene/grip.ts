@@ -1,4 +1,4 @@
-import { distanceOutside } from '@/lib/geometry/polygon';
+import { distanceOutside, holds } from '@/lib/geometry/polygon';
 import { distanceToSegment } from '@/lib/geometry/segment';
 import { type Vec, add, distance, fromBody, scale, subtract, unit } from '@/lib/geometry/vector';
 import {
@@ -11,7 +11,9 @@ import {
   noseOf,
   outlineAt,
   pathOf,
+  wheelPlaces,
 } from './scene';
+import { surfacePlace } from './labels';
 
 /** What can be taken hold of on the board, and where. */
 export type Grip =
@@ -28,11 +30,20 @@ export type Grip =
   /** A known rest pose. */
   | { part: 'rest'; which: Which }
   | { part: 'restTurn'; which: Which }
-  | { part: 'mark'; index: number };
+  | { part: 'mark'; index: number }
+  /** A wheel of the open vehicle, and the handle that steers it. */
+  | { part: 'wheel'; which: Which; wheel: number }
+  | { part: 'steer'; which: Which; wheel: number }
+  /** A surface as a whole. */
+  | { part: 'surface'; index: number }
+  | { part: 'corner'; index: number; corner: number };
 
 const BOTH = ['A', 'B'] as const;
 /** Beyond the nose, m. */
 const TURN_REACH = 0.9;
+/** From the middle of a wheel to the handle that steers it, and how far around it counts as on it, m. */
+const STEER_REACH = 0.6;
+const WHEEL_REACH = 0.32;
 /** From the contact point to the handle of the plane, m. */
 export const PLANE_REACH = 1.6;
 
@@ -54,7 +65,43 @@ export function handlesOf(scene: Scene, speeds: Speeds): Handle[] {
     { grip: { part: 'point' }, at: scene.point.at },
     { grip: { part: 'plane' }, at: planeHandle(scene) },
     ...BOTH.flatMap((which) => handlesOfVehicle(scene, which, speeds[which])),
+    ...(scene.open ? steerHandles(scene, scene.open) : []),
+    ...scene.surfaces.flatMap((_, index) => handlesOfSurface(scene, index)),
   ];
+}
+
+/** Ahead of each wheel, where they are set one by one. */
+function steerHandles({ vehicles, wheels }: Scene, which: Which): Handle[] {
+  const { pose } = vehicles[which];
+  if (!wheels[which]?.apart) return [];
+  const places = wheelPlaces(vehicles[which]);
+  return wheels[which].each.map(({ steer }, wheel) => ({
+    grip: { part: 'steer', which, wheel },
+    at: add(places[wheel], scale(unit(pose.heading + steer), STEER_REACH)),
+  }));
+}
+
+/** The wheel of the open vehicle under a point. */
+function wheelAt({ vehicles, wheels, open }: Scene, at: Vec): Grip | null {
+  if (!open || !wheels[open]?.apart) return null;
+  const off = wheelPlaces(vehicles[open]).map((centre) => distance(centre, at));
+  const wheel = off.indexOf(Math.min(...off));
+  return off[wheel] <= WHEEL_REACH ? { part: 'wheel', which: open, wheel } : null;
+}
+
+/** A handle at each corner, and one inside that moves the whole. */
+function handlesOfSurface(scene: Scene, index: number): Handle[] {
+  const { outline } = scene.surfaces[index];
+  return [
+    ...outline.map((at, corner): Handle => ({ grip: { part: 'corner', index, corner }, at })),
+    { grip: { part: 'surface', index }, at: surfacePlace(scene, index) },
+  ];
+}
+
+/** The surface under a point; of several the one that counts. */
+export function surfaceAt({ surfaces }: Scene, at: Vec): number | null {
+  const index = surfaces.findLastIndex(({ outline }) => holds(outline, at));
+  return index < 0 ? null : index;
 }
 
 function handlesOfVehicle(scene: Scene, which: Which, speed: number | undefined): Handle[] {
@@ -87,6 +134,8 @@ export function gripAt(scene: Scene, speeds: Speeds, at: Vec, reach: number): Gr
     reach,
   );
   if (near) return near;
+  const wheel = wheelAt(scene, at);
+  if (wheel) return wheel;
   const which = vehicleAt(scene, at);
   if (which) return { part: 'vehicle', which };
   return nearest(
@@ -126,6 +175,10 @@ function linesOf(scene: Scene, speeds: Speeds): Line[] {
       ];
     }),
     ...scene.marks.map(({ points }, index): Line => ({ grip: { part: 'mark', index }, points })),
+    ...scene.surfaces.map(({ outline }, index): Line => ({
+      grip: { part: 'surface', index },
+      points: [...outline, outline[0]],
+    })),
   ];
 }
 

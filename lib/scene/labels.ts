@@ -1,13 +1,14 @@
-import { distanceOutside } from '@/lib/geometry/polygon';
+import { distanceOutside, holds } from '@/lib/geometry/polygon';
 import { type Vec, add, fromBody, scale, unit } from '@/lib/geometry/vector';
-import { type Scene, type Which, centreOf, noseOf, outlineAt, pathOf, restPose } from './scene';
+import { insideOf } from './inside';
+import { type Scene, type Which, centreOf, noseOf, outlineAt, pathOf, restPose, wheelsOf } from './scene';
 
 /**
  * Where words stand so that they cover as little as can be, in world metres. `off`: how far they stand off what they
  * name, m; it depends on the zoom.
  */
 
-/** How far a point is from the nearest vehicle; negative inside one. */
+/** How far a point is from the nearest vehicle at contact; negative inside one. */
 const clearance = (scene: Scene, at: Vec): number =>
   Math.min(...(['A', 'B'] as const).map((which) => distanceOutside(at, outlineAt(scene.vehicles[which]))));
 
@@ -47,6 +48,36 @@ export function legLabelAt(scene: Scene, which: Which, leg: number, off: number)
     return [add(on, scale(across, off)), add(on, scale(across, -off))];
   });
   return clearest(scene, places, off);
+}
+
+/** From a vehicle, at contact and at rest, to the handle and the name of the ground under it, m. */
+const OFF_VEHICLES = 1.6;
+
+/** Inside a surface, off the vehicles and off the surfaces over it where there is room: its handle, and its name below. */
+export function surfacePlace(scene: Scene, index: number): Vec {
+  const over = scene.surfaces.slice(index + 1).map(({ outline }) => outline);
+  const bodies = (['A', 'B'] as const).flatMap((which) => {
+    const rest = restPose(scene, which);
+    return [outlineAt(scene.vehicles[which]), ...(rest ? [outlineAt(scene.vehicles[which], rest)] : [])];
+  });
+  return insideOf(
+    scene.surfaces[index].outline,
+    (at) =>
+      bodies.every((body) => distanceOutside(at, body) > OFF_VEHICLES) && !over.some((outline) => holds(outline, at)),
+  );
+}
+
+/** Half the width and height of the words about a wheel, pixels. */
+export const WHEEL_WORDS: Vec = [40, 14];
+
+/** Outside the vehicle, beside a wheel. `half`: half the width and height of the words, m. */
+export function wheelLabelAt({ vehicles }: Scene, which: Which, wheel: number, half: Vec): Vec {
+  const vehicle = vehicles[which];
+  const [x, y] = wheelsOf(vehicle)[wheel];
+  const side = Math.sign(y);
+  const away = unit(vehicle.pose.heading + (side * Math.PI) / 2);
+  const edge = fromBody([x, (side * vehicle.body.width) / 2], vehicle.pose);
+  return add(edge, [away[0] * half[0], away[1] * half[1]]);
 }
 
 /** On the tail of a vehicle. */

@@ -40,6 +40,19 @@ export interface SceneTravel {
   legs: number[];
 }
 
+/** A stretch of ground with a friction of its own; of overlapping ones the last counts. */
+export interface SceneSurface {
+  name: string;
+  friction: number;
+  outline: Vec[];
+}
+
+export interface SceneWheels {
+  each: { braking: number; steer: number }[];
+  /** Whether each is set for itself. */
+  apart: boolean;
+}
+
 export interface Scene {
   vehicles: Record<Which, SceneVehicle>;
   point: { at: Vec; spread: Vec };
@@ -49,6 +62,11 @@ export interface Scene {
   travel: Record<Which, SceneTravel | null>;
   /** Where a vehicle is known to have come to rest, when its travel is not given by legs. */
   rest: Record<Which, ScenePose | null>;
+  /** How the wheels are set, in the order of `wheelsOf`, where the travel is simulated. */
+  wheels: Record<Which, SceneWheels | null>;
+  /** The vehicle whose wheels can be taken hold of. */
+  open: Which | null;
+  surfaces: SceneSurface[];
   marks: { label: string; points: Vec[] }[];
   north: number;
 }
@@ -76,6 +94,10 @@ export function wheelsOf({ body }: SceneVehicle): Vec[] {
     [rear, -half],
   ];
 }
+
+/** Where the wheels stand in the world. */
+export const wheelPlaces = (vehicle: SceneVehicle): Vec[] =>
+  wheelsOf(vehicle).map((wheel) => fromBody(wheel, vehicle.pose));
 
 export const centreOf = (vehicle: SceneVehicle): Vec => [vehicle.pose.x, vehicle.pose.y];
 

@@ -8,7 +8,8 @@ import {
   VEHICLE_IDS,
   type VehicleId,
 } from '@/lib/casefile/schema';
-import type { NamedEdit } from './thing-edits';
+import { WHEELS } from '@/lib/casefile/wheels';
+import type { NamedEdit } from './named-edit';
 
 /** A thing of the board as an entry of a list that can be walked. */
 export interface BoardItem {
@@ -20,10 +21,11 @@ export interface BoardItem {
   add?: NamedEdit;
 }
 
-/** How numbers are said: lengths in m, angles in deg. */
+/** How numbers are said: lengths in m, angles in deg, and plain ones. */
 export interface Spoken {
   length: (metres: number) => string;
   angle: (degrees: number) => string;
+  ratio: (share: number) => string;
 }
 
 /** Standard uncertainty of what is added from the list, deg. */
@@ -45,6 +47,11 @@ export function boardList(casefile: CaseFile, say: Spoken): BoardItem[] {
     { thing: 'contact.plane', name: 'Plane', says: `Contact plane, direction ${say.angle(impact.plane.value)}` },
     ...VEHICLE_IDS.map((id) => approachItem(casefile, id, say)),
     ...VEHICLE_IDS.flatMap((id) => travelItems(casefile, id, say)),
+    ...(scene?.surfaces ?? []).map(({ name, outline, friction }, k): BoardItem => ({
+      thing: `surface.${k}`,
+      name: name || `Surface ${k + 1}`,
+      says: `Surface ${k + 1}: ${name}, ${outline.length} corners, friction ${say.ratio(friction.value)}`,
+    })),
     ...(scene?.marks ?? []).map(({ kind, label }, k): BoardItem => {
       const name = label || kind || `Mark ${k + 1}`;
       return { thing: `mark.${k}`, name, says: `Mark ${k + 1}: ${name}` };
@@ -67,7 +74,7 @@ function approachItem({ approach, impact }: CaseFile, id: VehicleId, say: Spoken
 
 function travelItems({ departure, impact }: CaseFile, id: VehicleId, say: Spoken): BoardItem[] {
   const travel = departure[id];
-  if (travel?.kind === 'spin') return [restItem(travel, id, say)];
+  if (travel?.kind === 'spin') return [restItem(travel, id, say), ...wheelItems(travel, id, say)];
   if (travel) return statedTravel(travel, id, say);
   const to = defaultDeparture(impact[id].heading.value, STRAIGHT_ON);
   return [
@@ -85,6 +92,19 @@ function restItem({ rest }: SpinDeparture, id: VehicleId, say: Spoken): BoardIte
   const place = x && y ? `mass centre at ${say.length(x.value)}, ${say.length(y.value)}` : 'place not stated';
   const turn = heading ? `heading ${say.angle(heading.value)}` : 'heading not stated';
   return { thing: `rest.${id}`, name: `${id} at rest`, says: `Rest pose of ${id}, ${place}, ${turn}` };
+}
+
+/** Where they are set one by one. */
+function wheelItems({ wheels }: SpinDeparture, id: VehicleId, say: Spoken): BoardItem[] {
+  if ('all' in wheels) return [];
+  return WHEELS.map(({ id: wheel, words }) => {
+    const [braking, steer] = [say.ratio(wheels[wheel].braking.value), say.angle(wheels[wheel].steer.value)];
+    return {
+      thing: `wheel.${id}.${wheel}`,
+      name: `${id} ${words}`,
+      says: `Wheel of ${id}, ${words}, braking share ${braking}, steer ${steer}`,
+    };
+  });
 }
 
 function statedTravel({ direction, legs }: LegsDeparture, id: VehicleId, say: Spoken): BoardItem[] {

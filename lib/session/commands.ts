@@ -1,8 +1,11 @@
 import type { Edit } from '@/lib/casefile/edit';
 import { type ThingId, fieldsOf, labelOf } from '@/lib/casefile/fields';
 import { type CaseFile, type Method, VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
-import { type NamedEdit, deletion, duplication } from './thing-edits';
+import type { NamedEdit } from './named-edit';
+import { deletion, duplication } from './thing-edits';
+import { patchAddition } from './surface-edits';
 import { nameOf } from './thing-names';
+import { wheelsSetApart, wheelsSetTogether } from './wheel-edits';
 import { TOOL_OF } from './tools/all';
 import { TOOLS, type ToolId } from './tools/tool';
 
@@ -62,6 +65,8 @@ export const commandsOf = (casefile: CaseFile, selection: ThingId | null = null)
   ...analysisCommands(casefile),
   ...selectCommands(casefile),
   ...VEHICLE_IDS.map((id) => travelCommand(casefile, id)),
+  ...VEHICLE_IDS.flatMap((id) => wheelsCommand(casefile, id)),
+  surfaceCommand(casefile),
   ...fieldsOf(casefile).map(({ path }): Command => ({
     id: `row.${path}`,
     title: labelOf(casefile, path),
@@ -136,6 +141,19 @@ function travelCommand(casefile: CaseFile, id: VehicleId): Command {
   if (leg) return edits(`leg.${id}`, `Add a leg to the travel of ${id}`, `add a leg of ${id}`, leg.edit);
   const at = `departure.${id}`;
   return { id: `row.${at}`, title: `Enter the travel of ${id}`, group: 'Analysis', does: { do: 'row', path: at } };
+}
+
+/** Wheels set one by one, or one braking for all again: whichever would change something and lose nothing. */
+function wheelsCommand(casefile: CaseFile, id: VehicleId): Command[] {
+  const apart = wheelsSetApart(casefile, id);
+  if (apart) return [edits(`wheels.${id}`, `Set each wheel of ${id}`, apart.label, apart.edit)];
+  const together = wheelsSetTogether(casefile, id);
+  return together ? [edits(`wheels.${id}`, `One braking for all wheels of ${id}`, together.label, together.edit)] : [];
+}
+
+function surfaceCommand(casefile: CaseFile): Command {
+  const { label, edit } = patchAddition(casefile);
+  return edits('surface.add', 'Add a surface, a rectangle about the contact point', label, edit);
 }
 
 /** The commands whose titles hold every word of the query, in any order; those that begin with it first. */

@@ -3,21 +3,18 @@ import type { Edit } from '@/lib/casefile/edit';
 import type { ThingId } from '@/lib/casefile/fields';
 import type { CaseFile, Leg, Quantity } from '@/lib/casefile/schema';
 import { sceneOf } from '@/lib/casefile/scene-of';
+import { WHEELS } from '@/lib/casefile/wheels';
 import { type Vec, angleOf, distance, subtract, toDegrees, unit } from '@/lib/geometry/vector';
 import type { Grip } from '@/lib/scene/grip';
 import { type Scene, type Which, centreOf, pathOf } from '@/lib/scene/scene';
+import { cornerMove, surfaceMove } from './surface-edits';
+import { tenths, wrapped } from './turn';
+import { steerDrag } from './wheel-edits';
 
-/** Drawn figures are kept to the centimetre and the tenth of a degree: finer than anyone draws. */
+/** Drawn figures are kept to the centimetre: finer than anyone draws. */
 const centimetres = (x: number): number => Math.round(x * 100) / 100;
-const tenths = (degrees: number): number => Math.round(degrees * 10) / 10;
 /** Degrees that a turn clings to while Shift is held. */
 const COARSE_TURN = 5;
-
-/** Into (-180, 180]. */
-export const wrapped = (degrees: number): number => {
-  const turned = degrees - 360 * Math.round(degrees / 360);
-  return turned === -180 ? 180 : turned;
-};
 
 const degreesOf = (v: Vec, coarse: boolean): number => {
   const exact = toDegrees(angleOf(v));
@@ -46,6 +43,7 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
   const turn = (about: Vec): number => degreesOf(subtract(to, about), coarse);
   switch (grip.part) {
     case 'vehicle':
+    case 'wheel':
       return moveEdit(`impact.${grip.which}`, impact[grip.which], by);
     case 'turn':
       return value(`impact.${grip.which}.heading`, turn(centre(casefile, grip.which)));
@@ -63,6 +61,12 @@ export function dragEdit(casefile: CaseFile, grip: Grip, from: Vec, to: Vec, coa
       return value(`departure.${grip.which}.direction`, turn(centre(casefile, grip.which)));
     case 'mark':
       return markEdit(casefile, grip.index, by);
+    case 'steer':
+      return steerDrag(casefile, sceneOf(casefile), grip.which, grip.wheel, to, coarse);
+    case 'surface':
+      return surfaceMove(casefile, grip.index, [centimetres(by[0]), centimetres(by[1])]);
+    case 'corner':
+      return cornerMove(casefile, grip.index, grip.corner, [centimetres(to[0]), centimetres(to[1])]);
     case 'rest':
     case 'restTurn':
       return restEdit(casefile, grip, by, to, coarse);
@@ -196,8 +200,14 @@ export function thingOf(grip: Grip, scene: Scene): ThingId {
     case 'rest':
     case 'restTurn':
       return `rest.${grip.which}`;
+    case 'wheel':
+    case 'steer':
+      return `wheel.${grip.which}.${WHEELS[grip.wheel].id}`;
     case 'mark':
       return `mark.${grip.index}`;
+    case 'surface':
+    case 'corner':
+      return `surface.${grip.index}`;
     case 'end':
       return `departure.${grip.which}`;
   }
@@ -207,6 +217,7 @@ export function thingOf(grip: Grip, scene: Scene): ThingId {
 export function labelOfGrip(grip: Grip): string {
   switch (grip.part) {
     case 'vehicle':
+    case 'wheel':
       return `move ${grip.which}`;
     case 'turn':
       return `turn ${grip.which}`;
@@ -224,8 +235,14 @@ export function labelOfGrip(grip: Grip): string {
       return `move ${grip.which} at rest`;
     case 'restTurn':
       return `turn ${grip.which} at rest`;
+    case 'steer':
+      return `steer the ${WHEELS[grip.wheel].words} wheel of ${grip.which}`;
     case 'mark':
       return 'move a mark';
+    case 'surface':
+      return `move surface ${grip.index + 1}`;
+    case 'corner':
+      return `shape surface ${grip.index + 1}`;
     case 'end':
       return `travel of ${grip.which}`;
   }

@@ -1,8 +1,12 @@
 import type { Edit } from '@/lib/casefile/edit';
 import type { ThingId } from '@/lib/casefile/fields';
 import type { CaseFile, Quantity, VehicleId } from '@/lib/casefile/schema';
+import type { WheelId } from '@/lib/casefile/wheels';
 import type { Vec } from '@/lib/geometry/vector';
-import { asLine, markEdit, wrapped } from './drag';
+import { asLine, markEdit } from './drag';
+import { surfaceMove } from './surface-edits';
+import { wrapped } from './turn';
+import { wheelNudge } from './wheel-edits';
 
 /** A step in the world (m) and a turn (deg, counter-clockwise). */
 interface Nudge {
@@ -43,6 +47,12 @@ function nudges(casefile: CaseFile, thing: ThingId, by: Nudge): Edit[] {
     }
     case 'rest':
       return restNudge(casefile, which, by);
+    case 'wheel':
+      return wheelNudge(casefile, which, k as WheelId, by.step, by.turn);
+    case 'surface':
+      return by.step[0] === 0 && by.step[1] === 0 && by.turn === 0
+        ? []
+        : [surfaceMove(casefile, Number(which), by.step, by.turn)];
     case 'mark':
       return by.step[0] === 0 && by.step[1] === 0 ? [] : [markEdit(casefile, Number(which), by.step)];
     default:

@@ -1,12 +1,7 @@
-import type { Edit } from '@/lib/casefile/edit';
 import type { ThingId } from '@/lib/casefile/fields';
 import type { CaseFile, VehicleId } from '@/lib/casefile/schema';
-
-/** A finished edit with the name that undo gives it. */
-export interface NamedEdit {
-  label: string;
-  edit: Edit;
-}
+import { surfaceCopy, surfaceRemoval } from './surface-edits';
+import type { NamedEdit } from './named-edit';
 
 /** How far a copy of a mark stands off, m. */
 const BESIDE = 0.5;
@@ -16,6 +11,7 @@ export function deletion(casefile: CaseFile, thing: ThingId): NamedEdit | null {
   const [kind, which = '', k = ''] = thing.split('.');
   if (kind === 'mark')
     return { label: 'delete a mark', edit: { do: 'remove', path: 'scene.marks', index: Number(which) } };
+  if (kind === 'surface') return surfaceRemoval(casefile, Number(which));
   if (kind === 'approach' && casefile.approach[which as VehicleId].direction)
     return { label: `delete the approach of ${which}`, edit: { do: 'set', path: `${thing}.direction`, to: null } };
   const departure = casefile.departure[which as VehicleId];
@@ -36,12 +32,14 @@ export function deletion(casefile: CaseFile, thing: ThingId): NamedEdit | null {
 /** Why Delete does nothing, for what every case has. */
 export function whyKept(thing: ThingId): string | null {
   if (thing.startsWith('vehicle.')) return 'A case has two vehicles: they can be moved and changed, not deleted';
+  if (thing.startsWith('wheel.')) return 'A vehicle has four wheels: they can be set, not deleted';
   return thing.startsWith('contact.') ? 'Every contact has a point and a plane: they can be moved, not deleted' : null;
 }
 
-/** What Duplicate copies: a leg, behind itself, or a mark, beside itself. */
+/** What Duplicate copies: a leg, behind itself, or a mark or a surface, beside itself. */
 export function duplication(casefile: CaseFile, thing: ThingId): NamedEdit | null {
   const [kind, which = '', k = ''] = thing.split('.');
+  if (kind === 'surface') return surfaceCopy(casefile, Number(which));
   if (kind === 'mark') return markCopy(casefile, Number(which));
   const departure = casefile.departure[which as VehicleId];
   if ((kind !== 'leg' && kind !== 'departure') || departure?.kind !== 'legs') return null;

@@ -28,6 +28,11 @@ export interface Central {
 /** Solves every input at its value, and first looks for the separations of simulated travel. */
 export function solveCentral(asked: Problem): Central {
   const { problem, spins } = findSpins(asked);
+  return solvedAt(problem, spins);
+}
+
+/** Solves every input at its value. */
+export function solvedAt(problem: Problem, spins: SpinsFound): Central {
   const kernel = new Kernel(problem, CENTRAL_STEPS);
   const reason = kernel.solveCentral();
   const figures = Object.fromEntries(

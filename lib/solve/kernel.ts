@@ -18,6 +18,7 @@ import { closingSpeedFromWork, obliqueFactor, stripWork } from '@/lib/mechanics/
 import { estimatedYawInertia } from '@/lib/mechanics/inertia';
 import { meanAcceleration } from '@/lib/mechanics/pulse';
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
+import { Forward } from './forward';
 import { LastingDirections } from './lasting-directions';
 import {
   type Departing,
@@ -79,12 +80,16 @@ export class Kernel {
   /** The contact that lasts, where the problem has one: the records of the draw solved last. */
   readonly lasting: LastingDirections | null;
 
+  /** The forward model, where the problem is a fit. */
+  readonly forward: Forward | null;
+
   /** `steps`: of a contact that lasts, at least. */
   constructor(
     readonly problem: Problem,
     steps = DRAW_STEPS,
   ) {
-    this.lasting = problem.lasting && new LastingDirections(problem, problem.lasting, steps);
+    this.forward = problem.fit && new Forward(problem, problem.fit);
+    this.lasting = problem.lasting && !problem.fit ? new LastingDirections(problem, problem.lasting, steps) : null;
     this.inputs = problem.inputs.map((input) => new Float64Array(BLOCK).fill(input.value));
     this.columns = makeColumns(BLOCK);
   }
@@ -147,6 +152,7 @@ export class Kernel {
 
   private solveContact(k: number): Reason | null {
     const { problem, state, answer, inputs } = this;
+    if (this.forward) return this.forward.solve(inputs, k, state, answer);
     if (problem.restitution !== null && problem.impulseRatio !== null) {
       state.e = inputs[problem.restitution][k];
       state.mu = inputs[problem.impulseRatio][k];
@@ -198,6 +204,7 @@ export class Kernel {
       vehicle.hy = sin(direction);
     }
     vehicle.wBefore = slots.approachYawRate === null ? 0 : inputs[slots.approachYawRate][k];
+    if (this.forward) return 0;
     const travelled = this.travelled[id];
     if (!this.kept[id]) this.findTravel(k, id, vehicle, travelled);
     vehicle.vx = travelled.vx[k];
@@ -209,7 +216,7 @@ export class Kernel {
   private findTravel(k: number, id: VehicleId, vehicle: VehicleState, to: Travelled): void {
     const slots = this.problem.vehicles[id];
     if (slots.departure.kind === 'legs') to.lost[k] = this.loadLegs(k, slots.departure, vehicle);
-    else {
+    else if (slots.departure.kind === 'spin') {
       const departing = this.departing(k, slots);
       to.lost[k] = this.separate(k, id, departing) ? 0 : NO_REST;
     }
@@ -256,7 +263,8 @@ export class Kernel {
 
   private write(k: number): void {
     const { answer, columns, problem, state, inputs } = this;
-    const pulse = problem.pulse === null ? NaN : inputs[problem.pulse][k];
+    const stated = problem.pulse === null ? NaN : inputs[problem.pulse][k];
+    const pulse = this.forward?.contact?.duration ?? stated;
     const { A, B } = problem.vehicles;
     this.writeVehicle(k, columns.A, A, state.A, answer.A, pulse);
     this.writeVehicle(k, columns.B, B, state.B, answer.B, pulse);
@@ -264,7 +272,7 @@ export class Kernel {
     columns.slidingSpeed[k] = answer.ut;
     columns.restitution[k] = answer.e;
     columns.impulseRatio[k] = answer.mu;
-    columns.impulse[k] = hypot(answer.Jn, answer.Jt);
+    columns.impulse[k] = this.forward ? this.forward.impulse(answer) : hypot(answer.Jn, answer.Jt);
     columns.energyLost[k] = answer.energyLost;
     if (A.damage !== null || B.damage !== null) this.writeDamage(k);
   }

@@ -1,4 +1,4 @@
-import type { LegsSlots, SpinSlots, VehicleSlots } from '@/lib/evidence/problem';
+import type { SpinSlots, VehicleSlots } from '@/lib/evidence/problem';
 import { holds } from '@/lib/geometry/polygon';
 import type { VehicleState } from '@/lib/mechanics/impact-backwards';
 import { type Ground, TyreMotion, fourWheels } from '@/lib/mechanics/spin';
@@ -16,30 +16,24 @@ export function roadUnder(
   body: VehicleState,
   elapsed: number,
 ): TyreMotion {
-  const { departure } = slots;
-  const at = (slot: number | null): number => (slot === null ? 0 : inputs[slot][k]);
-  const simulated = departure.kind === 'spin';
-  const wheels = fourWheels(
-    {
-      m: body.m,
-      wheelbase: slots.wheelbase,
-      track: slots.track,
-      frontAxleToMassCentre: at(slots.frontAxleToMassCentre),
-    },
-    simulated ? ownWheels(at, departure) : firstLegWheels(at, departure),
-  );
-  const ground = simulated ? groundOf(inputs, k, departure) : levelGround(at(departure.legs[0].friction));
-  const onset = simulated ? Math.max(0, at(departure.onset) - elapsed) : 0;
-  return new TyreMotion({ m: body.m, I: body.I, wheels }, ground, onset);
+  const { departure, wheelbase, track } = slots;
+  const frontAxleToMassCentre = inputs[slots.frontAxleToMassCentre][k];
+  const dimensions = { m: body.m, wheelbase, track, frontAxleToMassCentre };
+  const on = (settings: { braking: number; steer: number }[], ground: Ground, onset: number): TyreMotion =>
+    new TyreMotion({ m: body.m, I: body.I, wheels: fourWheels(dimensions, settings) }, ground, onset);
+  if (departure.kind === 'spin') {
+    const onset = departure.onset === null ? 0 : inputs[departure.onset][k];
+    return on(ownWheels(inputs, k, departure), groundOf(inputs, k, departure), Math.max(0, onset - elapsed));
+  }
+  const { friction, share } = departure.kind === 'legs' ? departure.legs[0] : departure;
+  const wheel = { braking: inputs[share][k], steer: 0 };
+  return on([wheel, wheel, wheel, wheel], levelGround(inputs[friction][k]), 0);
 }
 
-type At = (slot: number | null) => number;
-
-const ownWheels = (at: At, { braking, steer }: SpinSlots) =>
-  braking.map((slot, i) => ({ braking: at(slot), steer: at(steer[i]) }));
-
-const firstLegWheels = (at: At, { legs }: LegsSlots) =>
-  [0, 1, 2, 3].map(() => ({ braking: at(legs[0].share), steer: 0 }));
+function ownWheels(inputs: Inputs, k: number, { braking, steer }: SpinSlots) {
+  const at = (slot: number | null): number => (slot === null ? 0 : inputs[slot][k]);
+  return braking.map((slot, i) => ({ braking: at(slot), steer: at(steer[i]) }));
+}
 
 const levelGround = (friction: number): Ground => ({ friction, frictionAt: null, grade: 0, uphill: 0 });
 

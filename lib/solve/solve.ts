@@ -1,6 +1,7 @@
 import type { Problem } from '@/lib/evidence/problem';
 import type { FigureName } from './columns';
 import type { Central } from './central';
+import type { FitFound } from './fit';
 import { BLOCK } from './kernel';
 import type { SobolIndices } from './sobol';
 import { MOST_BATCHES, batchSize, isSettled } from './adaptive';
@@ -33,6 +34,8 @@ export interface Solution {
   impossible: Record<string, number>;
   traced: FigureName[];
   sobol: SobolIndices[];
+  /** Of the method fit. */
+  fit: FitFound | null;
 }
 
 /** Solves a problem over its draws and, where asked, traces the spread of its figures back to the inputs. */
@@ -63,6 +66,7 @@ export async function solve(
     impossible: counted(draws),
     traced: settings.traced,
     sobol: traced.filter((d) => d.kind === 'sobol').flatMap((d) => d.indices),
+    fit: null,
   };
 }
 
@@ -111,7 +115,8 @@ function sobolTasks(problem: Problem, figures: FigureName[]): Task[] {
   return tasks;
 }
 
-function joined(parts: DrawsDone[]): Solution['values'] {
+/** The values of all parts, one after another. */
+export function joined(parts: DrawsDone[]): Solution['values'] {
   const names = Object.keys(parts[0].values) as FigureName[];
   return Object.fromEntries(
     names.map((name) => {
@@ -126,7 +131,8 @@ function joined(parts: DrawsDone[]): Solution['values'] {
   ) as Solution['values'];
 }
 
-function counted(parts: DrawsDone[]): Solution['impossible'] {
+/** The counts of all parts together. */
+export function counted(parts: DrawsDone[]): Solution['impossible'] {
   const counts: Record<string, number> = {};
   for (const part of parts)
     for (const [reason, count] of Object.entries(part.impossible)) counts[reason] = (counts[reason] ?? 0) + count;

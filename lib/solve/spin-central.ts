@@ -94,7 +94,7 @@ function searched(problem: Problem, carried: Carried): { problem: Problem; spins
   for (const id of VEHICLE_IDS) {
     const slots = problem.vehicles[id];
     const spin = slots.departure;
-    if (spin.kind !== 'spin') continue;
+    if (spin.kind !== 'spin' || !spin.rest) continue;
     const body = kernel.loadBody(0, slots, kernel.state[id]);
     const touch = { x: body.x, y: body.y, heading: kernel.inputs[slots.heading][0] };
     const elapsed = problem.lasting ? kernel.inputs[problem.lasting.pulse][0] : 0;

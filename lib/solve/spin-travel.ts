@@ -29,10 +29,12 @@ export function targetOf(
   { from, elapsed }: Departing,
   error: number,
 ): Target {
+  const { rest } = spin;
+  if (!rest) throw new Error('only a measured rest pose can be worked backwards');
   return {
     motion: roadUnder(inputs, k, slots, body, elapsed),
     from,
-    to: { x: inputs[spin.restX][k], y: inputs[spin.restY][k], heading: inputs[spin.restHeading][k] },
+    to: { x: inputs[rest.x][k], y: inputs[rest.y][k], heading: inputs[rest.heading][k] },
     error,
   };
 }

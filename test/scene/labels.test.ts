@@ -4,7 +4,7 @@ import { sceneOf } from '@/lib/casefile/scene-of';
 import { distanceOutside } from '@/lib/geometry/polygon';
 import type { Vec } from '@/lib/geometry/vector';
 import { inkOf, placeBeside } from '@/lib/scene/beside';
-import { legLabelAt, letterAt, restLabelAt } from '@/lib/scene/labels';
+import { legLabelAt, letterAt, restLabelAt, wheelLabelAt } from '@/lib/scene/labels';
 import { outlineAt, restPose } from '@/lib/scene/scene';
 
 const base = emptyCase();
@@ -74,5 +74,21 @@ describe('the card of numbers', () => {
     const has = ([x, y]: Vec): boolean => ink.some((p) => Math.hypot(p[0] - x, p[1] - y) < 1e-6);
     expect(has([500 - 2.2 * 40, 300 - 6 * 40])).toBe(true);
     expect(has([500, 300])).toBe(true);
+  });
+});
+
+test('the words about a wheel stand outside its vehicle, each on its own side', () => {
+  const scene = sceneOf(base);
+  const places = [0, 1, 2, 3].map((wheel) => wheelLabelAt(scene, 'A', wheel, [1, 0.4]));
+  // A looks along +x from (-2.2, 0), 1.8 m wide, axles 1.15 m ahead and 1.45 m behind.
+  const expected = [
+    [-1.05, 1.3],
+    [-1.05, -1.3],
+    [-3.65, 1.3],
+    [-3.65, -1.3],
+  ];
+  places.forEach(([x, y], k) => {
+    expect(x).toBeCloseTo(expected[k][0], 12);
+    expect(y).toBeCloseTo(expected[k][1], 12);
   });
 });

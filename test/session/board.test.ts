@@ -7,9 +7,14 @@ import type { CaseFile } from '@/lib/casefile/schema';
 import { boardList, standsFor } from '@/lib/session/board-list';
 import { nextStep } from '@/lib/session/next-step';
 import { nudgeEdit } from '@/lib/session/nudge';
-import { type NamedEdit, deletion, duplication, whyKept } from '@/lib/session/thing-edits';
+import type { NamedEdit } from '@/lib/session/named-edit';
+import { deletion, duplication, whyKept } from '@/lib/session/thing-edits';
 
-const say = { length: (m: number) => `${m.toFixed(2)} m`, angle: (d: number) => `${d.toFixed(1)}°` };
+const say = {
+  length: (m: number) => `${m.toFixed(2)} m`,
+  angle: (d: number) => `${d.toFixed(1)}°`,
+  ratio: (x: number) => x.toFixed(2),
+};
 
 function after(casefile: CaseFile, change: NamedEdit | null): CaseFile {
   const edited = change && applyEdit(casefile, change.edit);

@@ -1,6 +1,6 @@
 import { type VehicleId, VEHICLE_IDS } from '@/lib/casefile/schema';
-import { atan2 } from '@/lib/numerics/elementary';
-import { pathLengthOf } from '@/lib/solve/path-length';
+import { atan2, hypot } from '@/lib/numerics/elementary';
+import type { Moment } from '@/lib/solve/travel-path';
 import type { CheckContext, CheckRule } from './check';
 import { spoken } from './words';
 
@@ -21,10 +21,14 @@ function offPath({ casefile }: CheckContext, id: VehicleId): number {
   return Math.abs(off - 180 * Math.round(off / 180));
 }
 
+const wayBetween = (from: Moment, to: Moment): number => hypot(to.x - from.x, to.y - from.y);
+
 function travelOf(context: CheckContext, id: VehicleId) {
-  const found = pathLengthOf(context.solution.central, id);
-  if (!found || !(found.chord > 0)) return [];
-  const { path, chord } = found;
+  const moments = context.solution.central.spins[id]?.path ?? [];
+  if (moments.length === 0) return [];
+  const path = moments.slice(1).reduce((sum, to, i) => sum + wayBetween(moments[i], to), 0);
+  const chord = wayBetween(moments[0], moments[moments.length - 1]);
+  if (chord === 0) return [];
   const off = offPath(context, id);
   const aligned = path > LONG && off < ALIGNED;
   return [{ id, path, chord, off, aligned, ratio: path / chord, bad: aligned || path / chord > RATIO }];

@@ -1,5 +1,6 @@
 import { type Vec, add, distance, subtract } from '@/lib/geometry/vector';
-import { type Grip, gripAt, handlesOf, isSameGrip } from '@/lib/scene/grip';
+import type { ThingId } from '@/lib/casefile/fields';
+import { type Grip, gripAt, handlesOf, isSameGrip, surfaceAt } from '@/lib/scene/grip';
 import { dragEdit, labelOfGrip, thingOf } from '../drag';
 import type { Tool, ToolContext } from './tool';
 
@@ -21,6 +22,12 @@ function take(grip: Grip, at: Vec, { scene, speeds, reach }: ToolContext): Held 
   return { grip, from: at, off: handle ? subtract(handle.at, at) : [0, 0], slack: reach * SLACK, moved: false };
 }
 
+/** Ground is selected by a press anywhere on it, and still moves the sheet: it may cover all of the board. */
+function thingUnder(at: Vec, { scene }: ToolContext): ThingId | null {
+  const surface = surfaceAt(scene, at);
+  return surface === null ? null : `surface.${surface}`;
+}
+
 /** Selects, moves and turns whatever lies under the pointer; on nothing it moves the sheet. */
 export const selectTool: Tool<Held> = {
   id: 'select',
@@ -29,7 +36,7 @@ export const selectTool: Tool<Held> = {
     const { casefile, scene, speeds, reach } = context;
     if (event.type === 'down') {
       const grip = gripAt(scene, speeds, event.at, reach);
-      if (!grip) return { state: null, acts: [{ do: 'select', thing: null }, { do: 'pan' }] };
+      if (!grip) return { state: null, acts: [{ do: 'select', thing: thingUnder(event.at, context) }, { do: 'pan' }] };
       return {
         state: take(grip, event.at, context),
         acts: [

@@ -5,7 +5,7 @@ import type { Vec } from '@/lib/geometry/vector';
 import type { Scene, Speeds } from '@/lib/scene/scene';
 
 /** The tools at the edge of the board. Each is a small state machine in a file of its own. */
-export const TOOLS = ['select', 'approach', 'travel', 'plane', 'measure'] as const;
+export const TOOLS = ['select', 'approach', 'travel', 'plane', 'surface', 'measure'] as const;
 export type ToolId = (typeof TOOLS)[number];
 
 /** A pointer on the board, in the world, m. */
@@ -15,6 +15,8 @@ export interface PointerEvent {
   /** Directions cling to whole steps. */
   coarse: boolean;
 }
+
+export type ToolKey = 'finish' | 'back';
 
 /** What a tool may look at. */
 export interface ToolContext {
@@ -43,4 +45,8 @@ export interface Tool<State> {
   /** What to do with it, in a line. */
   hint: string;
   step(state: State | null, event: PointerEvent, context: ToolContext): { state: State | null; acts: Act[] };
+  /** Whether it is told of a pointer that moves without being pressed. */
+  follows?: boolean;
+  /** A key while it is in the middle of something: finishes that, or takes back its last part. Null: not its affair. */
+  key?(state: State | null, key: ToolKey, context: ToolContext): { state: State | null; acts: Act[] } | null;
 }

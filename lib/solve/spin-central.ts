@@ -25,6 +25,8 @@ const FULL_TURN = 2 * Math.PI;
 
 /** What was found for one vehicle whose travel is simulated. */
 export interface SpinFound {
+  /** What was to be met, and under what. */
+  target: Target;
   /** Separations that meet the rest pose with the turn as written, the least kinetic energy first. */
   separations: Inversion[];
   /** Those that meet it with one full turn more or less. */
@@ -69,7 +71,7 @@ function findSeparations(target: Target, body: VehicleState): SpinFound {
   const byEnergy = (a: Inversion, b: Inversion): number => energyOf(body, a.separation) - energyOf(body, b.separation);
   const met = (found: Inversion[]): Inversion[] => distinct(found.filter((inversion) => inversion.met).sort(byEnergy));
   const nearest = all.filter(({ miss }) => Number.isFinite(miss)).sort((a, b) => a.miss - b.miss)[0] ?? null;
-  return { separations: met(all), otherTurns: met(turns), nearest };
+  return { target, separations: met(all), otherTurns: met(turns), nearest };
 }
 
 function distinct(found: Inversion[]): Inversion[] {

@@ -4,6 +4,7 @@ import { Stage } from 'react-konva/lib/ReactKonvaCore';
 import './shapes';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
 import { sceneOf } from '@/lib/casefile/scene-of';
+import { endOf } from '@/lib/geometry/timed-path';
 import { METRES_PER } from '@/lib/scene/grid';
 import type { Dimension } from '@/lib/units/dimension';
 import { formatWithUnit } from '@/lib/units/format';
@@ -16,6 +17,9 @@ import { OverlayLayer } from './overlay-layer';
 import type { Shown } from './scene-labels';
 import { SceneLayer } from './scene-layer';
 import { useTheme } from './theme';
+import { createTravelClock } from './travel-clock';
+import { TravelLayer } from './travel-layer';
+import { TravelScrubber } from './travel-scrubber';
 import { ThingStrip } from './thing-strip';
 import { Toolbar } from './toolbar';
 import { useBoardKeys } from './use-board-keys';
@@ -36,7 +40,9 @@ export function Board() {
   const theme = useTheme();
   const units = casefile.display?.units ?? 'metric';
   const answer = useAnswerDrawn(units);
-  const { speeds } = answer;
+  const { speeds, travels } = answer;
+  const [clock] = useState(createTravelClock);
+  const isSimulated = endOf(travels) > 0;
   const scene = useMemo(() => sceneOf(casefile), [casefile]);
   const { size, view, setView, touch, fitAll, zoom } = useView(frame, scene);
   const { hovered, measured, panning, cancel, handlers } = useTool({ frame, view, setView, speeds });
@@ -83,7 +89,8 @@ export function Board() {
           <Stage width={size.width} height={size.height} listening={false}>
             <GridLayer view={view} size={size} unit={METRES_PER[units]} theme={theme} />
             <SceneLayer {...drawn} answer={answer} />
-            <OverlayLayer {...drawn} speeds={speeds} hovered={hovered} measured={measured} />
+            {isSimulated && <TravelLayer scene={scene} view={view} theme={theme} travels={travels} clock={clock} />}
+            <OverlayLayer {...drawn} speeds={speeds} hovered={hovered} measured={measured} misses={answer.misses} />
           </Stage>
         )}
       </div>
@@ -93,6 +100,7 @@ export function Board() {
         <NumberCard thing={selection} view={view} size={size} speeds={speeds} />
       )}
       <MapMarks view={view} units={units} north={scene.north} />
+      {isSimulated && <TravelScrubber travels={travels} clock={clock} />}
       <ThingStrip />
     </div>
   );

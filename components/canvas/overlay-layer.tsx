@@ -7,8 +7,10 @@ import { type Scene, type Speeds, noseOf } from '@/lib/scene/scene';
 import { type View, toScreen } from '@/lib/scene/view';
 import { thingOf } from '@/lib/session/drag';
 import type { Measured } from '@/lib/session/tools/measure';
+import type { RestMiss } from '@/lib/solve-case';
 import { BoardLabel } from './board-label';
 import { flat } from './ink';
+import { MissShapes } from './miss-shapes';
 import type { Shown } from './scene-labels';
 import type { Theme } from './theme';
 
@@ -20,15 +22,16 @@ interface Props {
   selection: ThingId | null;
   hovered: Grip | null;
   measured: Measured | null;
+  misses: readonly RestMiss[];
   shown: Shown;
 }
 
 /** Radius of a handle, pixels: at rest, of what is selected, under the pointer. */
 const RADIUS = { quiet: 3.5, own: 5.5, over: 7.5 };
 
-/** The handles, and the line of the measuring tool. */
+/** The handles, the rest poses that were missed, and the line of the measuring tool. */
 export const OverlayLayer = memo(function OverlayLayer(props: Props) {
-  const { scene, view, theme, speeds, selection, hovered, measured, shown } = props;
+  const { scene, view, theme, speeds, selection, hovered, measured, misses, shown } = props;
   return (
     <Layer listening={false}>
       {handlesOf(scene, speeds)
@@ -44,6 +47,7 @@ export const OverlayLayer = memo(function OverlayLayer(props: Props) {
             own={belongsTo(handle.grip, scene, selection)}
           />
         ))}
+      <MissShapes misses={misses} scene={scene} view={view} theme={theme} shown={shown} />
       {hovered?.part === 'point' && <PointRing at={toScreen(view, scene.point.at)} theme={theme} />}
       {measured && <MeasureLine measured={measured} view={view} theme={theme} shown={shown} />}
     </Layer>

@@ -25,6 +25,7 @@ interface Expected {
   impossibleShare?: Figure;
   reasons?: Record<string, Figure>;
   checks?: Record<string, string[]>;
+  logEvidence?: Figure;
   sensitivity?: { tol: number; values: Record<string, Record<string, { first: number; total: number }>> };
 }
 
@@ -69,6 +70,7 @@ function misses(expected: Expected, result: Result): string[] {
     const count = names.split('+').reduce((sum, reason) => sum + (result.impossible[reason] ?? 0), 0);
     hold(`impossible by ${names}`, '', count / result.draws, figure);
   }
+  if (expected.logEvidence) hold('log evidence', '', result.fit?.logEvidence, expected.logEvidence);
   for (const [id, levels] of Object.entries(expected.checks ?? {})) {
     const level = result.checks.find((check) => check.id === id)?.level;
     if (!level || !levels.includes(level)) found.push(`check ${id}: ${level}, want ${levels.join(' or ')}`);

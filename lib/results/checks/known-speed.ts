@@ -7,7 +7,9 @@ import { figure, spoken } from './words';
 export const knownSpeed: CheckRule = {
   id: 'knownSpeed',
   source: 'screening value: 2 and 3 combined standard uncertainties (JCGM 100:2008, 5.1.2)',
-  find({ casefile, central, bands }) {
+  find({ casefile, central, bands, solution }) {
+    // A fit has weighed it already: to hold it against the answer would count it twice.
+    if (solution.fit) return null;
     const found = leastAgreeing(
       VEHICLE_IDS.flatMap((id) => {
         const quantity = casefile.approach[id].speed;

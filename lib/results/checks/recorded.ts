@@ -7,7 +7,9 @@ export const recorded: CheckRule = {
   id: 'recorded',
   source:
     'screening value: 2 and 3 combined standard uncertainties; where none is stated ±0.5 km/h and ±10 % (49 CFR 563.8, table III)',
-  find({ casefile, central, bands }) {
+  find({ casefile, central, bands, solution }) {
+    // A fit has weighed it already: to hold it against the answer would count it twice.
+    if (solution.fit) return null;
     const found = leastAgreeing(
       recordedGiven(casefile).flatMap(({ id, key, path, quantity, name }) => {
         const result = key === 'forward' ? (`${id}.deltaVForward` as const) : (`${id}.deltaVLeft` as const);

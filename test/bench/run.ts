@@ -8,7 +8,7 @@ import { plainMonteCarlo } from '../support/plain-monte-carlo';
 import { plainSummary } from '../support/plain-summary';
 import { benchCase, benchProblem, plainDraws } from './cases';
 import { type Line, compare, medianTime, times } from './measure';
-import { travel } from './travel';
+import { simulatedTravel } from './travel';
 import { mathjsMonteCarlo } from './with-mathjs';
 
 /**
@@ -152,6 +152,6 @@ async function sensitivity(): Promise<Line> {
 process.stdout.write(
   `${await seenToAgree()}\nNode ${process.version}, ${cpus().length} x ${cpus()[0]?.model ?? 'unknown processor'}\n\n`,
 );
-for (const bench of [monteCarlo, againstLibrary, statistics, throughWorker, growth, sensitivity, travel])
+for (const bench of [monteCarlo, againstLibrary, statistics, throughWorker, growth, sensitivity, simulatedTravel])
   for (const { id, what, goal, found } of [await bench()].flat())
     process.stdout.write(`${id.padEnd(4)} ${what}\n     ${found}   (goal ${goal})\n`);

@@ -119,7 +119,7 @@ async function perInversion(): Promise<Line> {
   };
 }
 
-export async function travel(): Promise<Line[]> {
+export async function simulatedTravel(): Promise<Line[]> {
   const all = KINDS.map(checked);
   const braked = all.filter(({ kind }) => kind !== 'free rolling');
   return [

@@ -24,14 +24,14 @@ export async function fitCase(casefile: CaseFile, problem: Problem, options: Sol
   const rivals = casefile.hypotheses ?? [];
   const share = 1 / (1 + rivals.length);
   const fitted = await solveFit(problem, draws, run, (done) => options.onProgress?.(share * done));
-  if (fitted.kind === 'refused') return { kind: 'unsolved', reason: fitted.reason };
+  if (fitted.kind === 'refused') return { kind: 'unsolved', reason: fitted.reason, misses: [] };
   const { result, shapes } = summarise(casefile, fitted.solution, coverage);
   const hypotheses: HypothesisResult[] = [];
   for (const rival of rivals) {
     hypotheses.push(await rivalResult(casefile, rival, options, draws, coverage));
     options.onProgress?.(share * (1 + hypotheses.length));
   }
-  return { kind: 'solved', result: { ...result, hypotheses }, shapes };
+  return { kind: 'solved', result: { ...result, hypotheses }, shapes, travels: fitted.solution.central.travels };
 }
 
 /** The case with the changes of a rival account, fitted; where it cannot be, why. */

@@ -11,10 +11,13 @@ import { summarise } from '@/lib/results/summarise';
 import { solveCentral } from '@/lib/solve/central';
 import { refusalOf } from '@/lib/solve/refusal';
 import { here, runOn } from '@/lib/solve/lanes';
+import { type RestMiss, restMisses } from '@/lib/solve/rest-miss';
 import { solve } from '@/lib/solve/solve';
 import type { RunTasks } from '@/lib/solve/task';
+import type { Travels } from '@/lib/geometry/timed-path';
 
 export type { Shapes } from '@/lib/results/bands';
+export type { RestMiss } from '@/lib/solve/rest-miss';
 
 /** Which of the case's settings to override, and how to run. */
 export interface SolveOptions {
@@ -31,11 +34,12 @@ export interface SolveOptions {
 
 /** What became of a case. */
 export type Outcome =
-  | { kind: 'solved'; result: Result; shapes: Shapes }
+  /** `travels`: the motions that were simulated, with every input at its value; like the shapes, only for pictures. */
+  | { kind: 'solved'; result: Result; shapes: Shapes; travels: Travels }
   /** The case lacks what its method needs, or is invalid. */
   | { kind: 'invalid'; issues: Issue[] }
-  /** Valid, but nothing can be computed: the reason, with the path it hangs on. */
-  | { kind: 'unsolved'; reason: Issue };
+  /** Valid, but nothing can be computed: the reason, with the path it hangs on, and the rest poses that were missed. */
+  | { kind: 'unsolved'; reason: Issue; misses: RestMiss[] };
 
 /**
  * The whole computation: a valid case to its result. Never throws for a case, whatever stands in it; rejects only when
@@ -51,7 +55,7 @@ export async function solveCase(casefile: CaseFile, options: SolveOptions = {}):
   if (method === 'fit') return fitCase(casefile, asked, options);
   const central = solveCentral(asked);
   const refusal = refusalOf(central);
-  if (refusal) return { kind: 'unsolved', reason: refusal };
+  if (refusal) return { kind: 'unsolved', reason: refusal, misses: restMisses(central.spins) };
 
   const settings = {
     draws: options.draws ?? analysis.draws ?? DEFAULT_DRAWS,
@@ -59,5 +63,5 @@ export async function solveCase(casefile: CaseFile, options: SolveOptions = {}):
     traced: options.sensitivity === false ? [] : [...HEADLINES],
   };
   const solution = await solve(central, settings, options.run ?? runOn([here]), options.onProgress);
-  return { kind: 'solved', ...summarise(casefile, solution, settings.coverage) };
+  return { kind: 'solved', ...summarise(casefile, solution, settings.coverage), travels: central.travels };
 }

@@ -3,6 +3,7 @@ import { useMemo, useRef, useState } from 'react';
 import { Stage } from 'react-konva/lib/ReactKonvaCore';
 import './shapes';
 import { useSession, useSessionStore } from '@/components/hooks/use-session';
+import { endOf } from '@/lib/geometry/timed-path';
 import { METRES_PER } from '@/lib/scene/grid';
 import { shownScene } from '@/lib/session/shown-scene';
 import type { Dimension } from '@/lib/units/dimension';
@@ -17,6 +18,9 @@ import type { Shown } from './scene-labels';
 import { SceneLayer } from './scene-layer';
 import { SurfaceLayer } from './surface-shape';
 import { useTheme } from './theme';
+import { createTravelClock } from './travel-clock';
+import { TravelLayer } from './travel-layer';
+import { TravelScrubber } from './travel-scrubber';
 import { ThingStrip } from './thing-strip';
 import { Toolbar } from './toolbar';
 import { useBoardKeys } from './use-board-keys';
@@ -37,7 +41,9 @@ export function Board() {
   const theme = useTheme();
   const units = casefile.display?.units ?? 'metric';
   const answer = useAnswerDrawn(units);
-  const { speeds } = answer;
+  const { speeds, travels } = answer;
+  const [clock] = useState(createTravelClock);
+  const isSimulated = endOf(travels) > 0;
   const scene = useMemo(() => shownScene(casefile, selection), [casefile, selection]);
   const { size, view, setView, touch, fitAll, zoom } = useView(frame, scene);
   const { hovered, drawing, panning, cancel, key, handlers } = useTool({ frame, view, setView, speeds });
@@ -85,7 +91,8 @@ export function Board() {
             <GridLayer view={view} size={size} unit={METRES_PER[units]} theme={theme} />
             <SurfaceLayer {...drawn} />
             <SceneLayer {...drawn} answer={answer} />
-            <OverlayLayer {...drawn} speeds={speeds} hovered={hovered} drawing={drawing} />
+            {isSimulated && <TravelLayer scene={scene} view={view} theme={theme} travels={travels} clock={clock} />}
+            <OverlayLayer {...drawn} speeds={speeds} hovered={hovered} drawing={drawing} misses={answer.misses} />
           </Stage>
         )}
       </div>
@@ -95,6 +102,7 @@ export function Board() {
         <NumberCard thing={selection} view={view} size={size} speeds={speeds} />
       )}
       <MapMarks view={view} units={units} north={scene.north} />
+      {isSimulated && <TravelScrubber travels={travels} clock={clock} />}
       <ThingStrip />
     </div>
   );

@@ -7,8 +7,10 @@ import { type Scene, type Speeds, noseOf, wheelPlaces } from '@/lib/scene/scene'
 import { type View, toScreen } from '@/lib/scene/view';
 import { thingOf } from '@/lib/session/drag';
 import type { Measured } from '@/lib/session/tools/measure';
+import type { RestMiss } from '@/lib/solve-case';
 import { BoardLabel } from './board-label';
 import { flat } from './ink';
+import { MissShapes } from './miss-shapes';
 import type { Shown } from './scene-labels';
 import { OutlineInHand } from './surface-shape';
 import type { Theme } from './theme';
@@ -22,15 +24,16 @@ interface Props {
   selection: ThingId | null;
   hovered: Grip | null;
   drawing: InHand;
+  misses: readonly RestMiss[];
   shown: Shown;
 }
 
 /** Radius of a handle, pixels: at rest, of what is selected, under the pointer. */
 const RADIUS = { quiet: 3.5, own: 5.5, over: 7.5 };
 
-/** The handles, and what a tool has drawn that is not in the case. */
+/** The handles, the rest poses that were missed, and what a tool has drawn that is not in the case. */
 export const OverlayLayer = memo(function OverlayLayer(props: Props) {
-  const { scene, view, theme, speeds, selection, hovered, drawing, shown } = props;
+  const { scene, view, theme, speeds, selection, hovered, drawing, misses, shown } = props;
   const { measured, outlining } = drawing;
   return (
     <Layer listening={false}>
@@ -47,6 +50,7 @@ export const OverlayLayer = memo(function OverlayLayer(props: Props) {
             own={belongsTo(handle.grip, scene, selection)}
           />
         ))}
+      <MissShapes misses={misses} scene={scene} view={view} theme={theme} shown={shown} />
       {hovered?.part === 'point' && <PointRing at={toScreen(view, scene.point.at)} theme={theme} />}
       {outlining && <OutlineInHand drawn={outlining} view={view} theme={theme} />}
       {measured && <MeasureLine measured={measured} view={view} theme={theme} shown={shown} />}

@@ -57,29 +57,41 @@ export function GhostShape({
   theme,
   dash,
   opacity,
+  tinted = false,
 }: {
   vehicle: SceneVehicle;
   pose: ScenePose;
   theme: Theme;
   dash: number[];
   opacity: number;
+  tinted?: boolean;
 }) {
-  const { length, width } = vehicle.body;
+  const { which, body } = vehicle;
+  const trace = (context: Context): void => tracePath(context, noseOf(vehicle), body.length, body.width);
+  const soft = which === 'A' ? theme.ASoft : theme.BSoft;
   return (
-    <Shape
-      x={pose.x}
-      y={pose.y}
-      rotation={toDegrees(pose.heading)}
-      sceneFunc={(context, shape) => {
-        tracePath(context, noseOf(vehicle), length, width);
-        context.strokeShape(shape);
-      }}
-      stroke={theme[vehicle.which]}
-      strokeWidth={1.25}
-      strokeScaleEnabled={false}
-      dash={dash}
-      opacity={opacity}
-    />
+    <Group x={pose.x} y={pose.y} rotation={toDegrees(pose.heading)} opacity={opacity}>
+      {tinted && (
+        <Shape
+          sceneFunc={(context, shape) => {
+            trace(context);
+            context.fillShape(shape);
+          }}
+          fill={soft}
+          opacity={0.5}
+        />
+      )}
+      <Shape
+        sceneFunc={(context, shape) => {
+          trace(context);
+          context.strokeShape(shape);
+        }}
+        stroke={theme[which]}
+        strokeWidth={1.25}
+        strokeScaleEnabled={false}
+        dash={dash}
+      />
+    </Group>
   );
 }
 

@@ -18,6 +18,8 @@ export const NO_ANSWER: Answer = {
   status: 'working',
   result: null,
   shapes: {},
+  travels: {},
+  misses: [],
   of: null,
   stale: true,
   issues: [],
@@ -51,6 +53,8 @@ export function startAnswering(session: Session, pool: WorkerPool, show: (answer
         status,
         result: outcome.result,
         shapes: outcome.shapes,
+        travels: outcome.travels,
+        misses: [],
         of,
         stale: of !== current(),
         issues: [],
@@ -58,8 +62,9 @@ export function startAnswering(session: Session, pool: WorkerPool, show: (answer
       });
     else {
       const issues = outcome.kind === 'invalid' ? outcome.issues : [outcome.reason];
-      const nothing = { result: null, shapes: {}, of: null, stale: false, progress: null };
-      update({ ...nothing, status: outcome.kind === 'invalid' ? 'refused' : 'unsolved', issues });
+      const misses = outcome.kind === 'unsolved' ? outcome.misses : [];
+      const nothing = { result: null, shapes: {}, travels: {}, of: null, stale: false, progress: null };
+      update({ ...nothing, misses, status: outcome.kind === 'invalid' ? 'refused' : 'unsolved', issues });
     }
   }
 

@@ -1,7 +1,8 @@
 import type { Issue } from '@/lib/casefile/issue';
 import type { CaseFile } from '@/lib/casefile/schema';
 import type { Result } from '@/lib/results/result';
-import type { Shapes } from '@/lib/solve-case';
+import type { Travels } from '@/lib/geometry/timed-path';
+import type { RestMiss, Shapes } from '@/lib/solve-case';
 
 /**
  * The answer to the case as it stands now.
@@ -14,6 +15,10 @@ export interface Answer {
   /** The newest result, which may be older than the inputs. */
   result: Result | null;
   shapes: Shapes;
+  /** The simulated travel of the newest result. */
+  travels: Travels;
+  /** Rest poses that no simulated travel met, where there is no result for that. */
+  misses: readonly RestMiss[];
   /** The case that the result is of. */
   of: CaseFile | null;
   /** Whether the result is older than the inputs. */

@@ -16,5 +16,5 @@ export async function reportOn(kept: Revision, paper: unknown): Promise<ReportOu
   if (outcome.kind === 'unsolved') return { kind: 'refused', issues: [outcome.reason] };
   const chosen: Paper | undefined = paper === 'A4' || paper === 'Letter' ? paper : undefined;
   const issue = { revision: kept.revision, saved: kept.created, paper: chosen };
-  return { kind: 'written', report: writeReport(kept.case, outcome.result, outcome.shapes, issue) };
+  return { kind: 'written', report: writeReport(kept.case, outcome.result, outcome.shapes, issue, outcome.travels) };
 }

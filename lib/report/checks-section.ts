@@ -31,6 +31,8 @@ export const CHECK_TITLES: Record<string, string> = {
   seatDeltaV: 'Delta-V at the seats',
   speedRange: 'Closing speed within the range of the model',
   misfit: 'The pieces of evidence agree',
+  converged: 'Two runs of the fit agree',
+  priorDriven: 'The evidence narrows the speeds',
   knownSpeed: 'Stated approach speeds agree',
   recorded: 'Recorded delta-V agrees',
   recorderPulse: 'The contact is short enough for a recorder',

@@ -1,6 +1,7 @@
 import type { CaseFile, VehicleId } from '@/lib/casefile/schema';
 import { VEHICLE_IDS } from '@/lib/casefile/schema';
 import { sceneOf } from '@/lib/casefile/scene-of';
+import type { Travels } from '@/lib/geometry/timed-path';
 import type { Result } from '@/lib/results/result';
 import { type Scene, type SceneVehicle, centreOf, noseOf, outlineAt, pathOf, wheelsOf } from '@/lib/scene/scene';
 import type { UnitSystem } from '@/lib/units/dimension';
@@ -22,7 +23,7 @@ const BESIDE = 0.3;
 const SLOW = 0.3;
 
 /** What the plan shows of a case, in world metres, y up; drawn in this order. */
-export function planItems(casefile: CaseFile, result: Result): Item[] {
+export function planItems(casefile: CaseFile, result: Result, travels: Travels): Item[] {
   const scene = sceneOf(casefile);
   const marks = scene.marks.map(({ points, label }): Item => ({ kind: 'line', role: 'mark', points, label }));
   return [
@@ -31,6 +32,7 @@ export function planItems(casefile: CaseFile, result: Result): Item[] {
     ...VEHICLE_IDS.map((id) => letterItem(scene, id)),
     ...VEHICLE_IDS.flatMap((id) => restItems(scene, id)),
     ...VEHICLE_IDS.flatMap((id) => travelItems(scene, id, unitsOf(casefile))),
+    ...VEHICLE_IDS.flatMap((id) => courseItems(travels, id)),
     ...VEHICLE_IDS.flatMap((id) => approachItems(scene, result, id)),
     ...contactItems(scene),
   ];
@@ -94,6 +96,12 @@ function restItems(scene: Scene, id: VehicleId): Item[] {
       text: `${id} at rest`,
     },
   ];
+}
+
+/** The simulated path of the mass centre. */
+function courseItems(travels: Travels, id: VehicleId): Item[] {
+  const points = travels[id]?.poses.map(({ x, y }): Point => [x, y]) ?? [];
+  return points.length > 1 ? [{ kind: 'line', role: `travel.${id}`, points }] : [];
 }
 
 function travelItems(scene: Scene, id: VehicleId, units: UnitSystem): Item[] {

@@ -1,5 +1,6 @@
 import type { CaseFile } from '@/lib/casefile/schema';
 import { VEHICLE_IDS } from '@/lib/casefile/schema';
+import type { Travels } from '@/lib/geometry/timed-path';
 import type { Result } from '@/lib/results/result';
 import { type Bounds, boundsOf } from '@/lib/scene/view';
 import { markLabelAt } from './mark-label';
@@ -12,8 +13,8 @@ import type { Paper, Section } from './report';
 const AROUND = 0.6;
 
 /** The plan at true scale on a page of its own. */
-export function planSection(casefile: CaseFile, result: Result, paper: Paper): Section {
-  const drawing = drawPlan(casefile, planItems(casefile, result), paper);
+export function planSection(casefile: CaseFile, result: Result, paper: Paper, travels: Travels): Section {
+  const drawing = drawPlan(casefile, planItems(casefile, result, travels), paper);
   return {
     id: 'plan',
     title: 'Plan',

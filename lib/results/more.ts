@@ -41,23 +41,23 @@ export function moreOf(solution: Solution): Result['more'] {
 }
 
 /** What a contact that lasts was like. */
-function lastingFigures({ central: { lasting, state, figures } }: Solution): Result['more'] {
-  if (!lasting?.pushed) return {};
-  const { pushed, duration } = lasting;
+function lastingFigures({ problem, central: { contact, state, figures } }: Solution): Result['more'] {
+  if (!contact) return {};
+  const { y, duration, penetration, slide } = contact;
   const of = (id: VehicleId, at: number): [string, number | [number, number]][] => {
-    const tyres = hypot(pushed.y[at], pushed.y[at + 1]);
+    const tyres = hypot(y[at], y[at + 1]);
     const { roadX, roadY, roadW } = state[id];
     return [
       [`${id}.tyreImpulse`, tyres],
       [`${id}.tyreShare`, tyres / figures.impulse],
-      [`${id}.roadImpulse`, [roadX, roadY]],
-      [`${id}.roadYawRate`, roadW * DEGREES_PER_RADIAN],
+      ...(problem.fit ? [] : [[`${id}.roadImpulse`, [roadX, roadY]] as [string, [number, number]]]),
+      ...(problem.fit ? [] : [[`${id}.roadYawRate`, roadW * DEGREES_PER_RADIAN] as [string, number]]),
     ];
   };
   return {
     contactDuration: duration,
-    penetration: pushed.penetration,
-    slide: pushed.slide,
+    penetration,
+    slide,
     ...Object.fromEntries([...of('A', PAIR.tyresA), ...of('B', PAIR.tyresB)]),
   };
 }

@@ -4,7 +4,8 @@ import type { ImpactAnswer, ImpactState, Reason } from '@/lib/mechanics/impact-b
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
 import { type FigureName, columnOf, figuresOf } from './columns';
 import { CENTRAL_STEPS, Kernel } from './kernel';
-import type { LastingDirections } from './lasting-directions';
+import type { Travels } from '@/lib/geometry/timed-path';
+import { travelsOf } from './travel-path';
 import { type SpinsFound, findSpins } from './spin-central';
 
 /** The answer with every input at its value. */
@@ -22,7 +23,9 @@ export interface Central {
   state: ImpactState;
   answer: ImpactAnswer;
   /** The contact that lasts, where the case asks for one. */
-  lasting: LastingDirections | null;
+  contact: ContactThatLasted | null;
+  /** The motions that were simulated. */
+  travels: Travels;
 }
 
 /** Solves every input at its value, and first looks for the separations of simulated travel. */
@@ -46,8 +49,22 @@ export function solvedAt(problem: Problem, spins: SpinsFound): Central {
     figures,
     state: kernel.state,
     answer: kernel.answer,
-    lasting: kernel.lasting,
+    contact: contactOf(kernel),
+    travels: problem.fit ? kernel.forwardTravels() : travelsOf(spins),
   };
+}
+
+/** What a contact that lasts was like: the pair at its end (PAIR), s and m. */
+export interface ContactThatLasted {
+  y: Float64Array;
+  duration: number;
+  penetration: number;
+  slide: number;
+}
+
+function contactOf({ lasting, forward }: Kernel): ContactThatLasted | null {
+  if (forward) return forward.contact;
+  return lasting?.pushed ? { ...lasting.pushed, duration: lasting.duration } : null;
 }
 
 /** The first leg, going back from rest, whose start has no real speed: A before B. */

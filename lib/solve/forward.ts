@@ -1,3 +1,4 @@
+import type { Travels } from '@/lib/geometry/timed-path';
 import { VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
 import type { FitSlots, Problem } from '@/lib/evidence/problem';
 import { type ImpactAfter, type ImpactBefore, emptyAfter, solveImpact } from '@/lib/mechanics/impact';
@@ -8,6 +9,7 @@ import { type Rest, travelToRest } from '@/lib/mechanics/spin';
 import type { Pose } from '@/lib/mechanics/spin-backwards';
 import { cos, hypot, sin } from '@/lib/numerics/elementary';
 import { roadUnder } from './road';
+import { travelPath } from './travel-path';
 import { DRAW_ERROR } from './spin-travel';
 
 /** Error of the velocities that a step through a contact may make, m/s. */
@@ -124,6 +126,21 @@ export class Forward {
       this.rest[id] = rest;
       return rest.outcome === 'rest';
     });
+  }
+
+  /** The simulated travels of the central values (row 0), which were solved last, for pictures and checks. */
+  travels(inputs: readonly Float64Array[], state: ImpactState): Travels {
+    const travels: Travels = {};
+    const time = this.contact?.duration ?? 0;
+    for (const id of VEHICLE_IDS) {
+      const slots = this.problem.vehicles[id];
+      if (slots.departure.kind !== 'spin' || this.rest[id]?.outcome !== 'rest') continue;
+      const { vx, vy, wMeasured: w } = state[id];
+      const from = this.leaving(inputs, 0, state, id);
+      const road = roadUnder(inputs, 0, slots, state[id], time);
+      travels[id] = travelPath(road, { time, from, separation: { vx, vy, w } }, DRAW_ERROR);
+    }
+    return travels;
   }
 
   /** Where a travel begins: at contact, or where a contact that lasts has left the vehicle. */

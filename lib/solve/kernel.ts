@@ -18,6 +18,7 @@ import { closingSpeedFromWork, obliqueFactor, stripWork } from '@/lib/mechanics/
 import { estimatedYawInertia } from '@/lib/mechanics/inertia';
 import { meanAcceleration } from '@/lib/mechanics/pulse';
 import { legStartSpeedSquared } from '@/lib/mechanics/legs';
+import type { Travels } from '@/lib/geometry/timed-path';
 import { Forward } from './forward';
 import { LastingDirections } from './lasting-directions';
 import {
@@ -132,6 +133,11 @@ export class Kernel {
 
   reasonOf(k: number): Reason | null {
     return this.reasons[k] === 0 ? null : REASONS[this.reasons[k] - 1];
+  }
+
+  /** The simulated travels of the draw solved last, by the forward model. */
+  forwardTravels(): Travels {
+    return this.forward?.travels(this.inputs, this.state) ?? {};
   }
 
   private solveDraw(k: number): void {

@@ -15,7 +15,6 @@ import { PAIR } from '@/lib/mechanics/pair-motion';
 import { TyreMotion } from '@/lib/mechanics/spin';
 import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
 import { CENTRAL_STEPS, Kernel } from './kernel';
-import { type Moment, travelPath } from './travel-path';
 import { carriedOn, meanBraking, targetOf, wayBetween } from './spin-travel';
 
 /** Position error, m, that a simulation of the central answer aims at, and how near it must come, m and rad. */
@@ -27,14 +26,16 @@ const FULL_TURN = 2 * Math.PI;
 
 /** What was found for one vehicle whose travel is simulated. */
 export interface SpinFound {
+  /** What was to be met, and under what. */
+  target: Target;
   /** Separations that meet the rest pose with the turn as written, the least kinetic energy first. */
   separations: Inversion[];
   /** Those that meet it with one full turn more or less. */
   otherTurns: Inversion[];
   /** What came nearest, where none meets it. */
   nearest: Inversion | null;
-  /** The travel of the separation that is answered, or else of the nearest; empty where there is none. */
-  path: Moment[];
+  /** When the travel begins, s after first touch. */
+  elapsed: number;
 }
 
 export type SpinsFound = Record<VehicleId, SpinFound | null>;
@@ -102,8 +103,7 @@ function searched(problem: Problem, carried: Carried): { problem: Problem; spins
     const target = targetOf(kernel.inputs, 0, slots, spin, body, departing, ERROR);
     const found = findSeparations(target, body);
     const best = found.separations[0];
-    const shown = best ?? found.nearest;
-    spins[id] = { ...found, path: shown ? travelPath(target, shown.separation, elapsed) : [] };
+    spins[id] = { ...found, elapsed };
     if (best) {
       const start = { ...startOf(target, best.separation), carried: carried[id] };
       vehicles[id] = { ...slots, departure: { ...spin, start } satisfies SpinSlots };
@@ -115,7 +115,7 @@ function searched(problem: Problem, carried: Carried): { problem: Problem; spins
 const energyOf = ({ m, I }: VehicleState, { vx, vy, w }: Separation): number =>
   (m * (vx * vx + vy * vy) + I * w * w) / 2;
 
-function findSeparations(target: Target, body: VehicleState): Omit<SpinFound, 'path'> {
+function findSeparations(target: Target, body: VehicleState): Omit<SpinFound, 'elapsed'> {
   const all = guesses(target).map((guess) => invertFrom(target, guess, MET));
   const turns = [FULL_TURN, -FULL_TURN].flatMap((turn) => {
     const other = { ...target, to: { ...target.to, heading: target.to.heading + turn } };
@@ -124,7 +124,7 @@ function findSeparations(target: Target, body: VehicleState): Omit<SpinFound, 'p
   const byEnergy = (a: Inversion, b: Inversion): number => energyOf(body, a.separation) - energyOf(body, b.separation);
   const met = (found: Inversion[]): Inversion[] => distinct(found.filter((inversion) => inversion.met).sort(byEnergy));
   const nearest = all.filter(({ miss }) => Number.isFinite(miss)).sort((a, b) => a.miss - b.miss)[0] ?? null;
-  return { separations: met(all), otherTurns: met(turns), nearest };
+  return { target, separations: met(all), otherTurns: met(turns), nearest };
 }
 
 function distinct(found: Inversion[]): Inversion[] {

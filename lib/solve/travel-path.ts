@@ -1,52 +1,102 @@
-import { travelToRest } from '@/lib/mechanics/spin';
-import type { Separation, Target } from '@/lib/mechanics/spin-backwards';
+import { VEHICLE_IDS } from '@/lib/casefile/schema';
+import type { TimedPath, TimedPose, Travels } from '@/lib/geometry/timed-path';
+import type { Vec } from '@/lib/geometry/vector';
+import { slidingWheels } from '@/lib/mechanics/sliding';
+import { type TyreMotion, travelToRest } from '@/lib/mechanics/spin';
+import type { Pose, Separation } from '@/lib/mechanics/spin-backwards';
+import { cos, sin } from '@/lib/numerics/elementary';
+import type { SpinsFound } from './spin-central';
 
-/** A moment of simulated travel: s since first touch, mass centre m, heading rad (not wrapped), velocity m/s, yaw rate rad/s. */
-export interface Moment {
+export type { Travels } from '@/lib/geometry/timed-path';
+
+/** Equal stretches of time that a travel is sampled by. */
+const STRETCHES = 120;
+
+/** Where a travel begins: s after first contact, pose, and what the vehicle moves at. */
+export interface TravelStart {
+  time: number;
+  from: Pose;
+  separation: Separation;
+}
+
+/** An accepted state of the simulation: s after the start; x, y, heading, vx, vy, yaw rate. */
+interface State {
   t: number;
-  x: number;
-  y: number;
-  heading: number;
-  vx: number;
-  vy: number;
-  w: number;
+  y: Float64Array;
 }
 
-/** Parts that the travel is cut into, of equal time. */
-const PARTS = 120;
+/** The central travel of every vehicle whose travel is simulated and was found. */
+export function travelsOf(spins: SpinsFound): Travels {
+  const travels: Travels = {};
+  for (const id of VEHICLE_IDS) {
+    const spin = spins[id];
+    const best = spin?.separations[0];
+    if (!spin || !best) continue;
+    const { motion, from, error } = spin.target;
+    travels[id] = travelPath(motion, { time: spin.elapsed, from, separation: best.separation }, error);
+  }
+  return travels;
+}
 
-/** The travel from a separation to rest at equal intervals of time, its beginning and its end included. */
-export function travelPath(target: Target, { vx, vy, w }: Separation, elapsed: number): Moment[] {
-  const states: Moment[] = [];
-  const { from } = target;
-  travelToRest(target.motion, [from.x, from.y, from.heading, vx, vy, w], target.error, (t, y) =>
-    states.push({ t, x: y[0], y: y[1], heading: y[2], vx: y[3], vy: y[4], w: y[5] }),
-  );
+/** A travel from its start to rest, sampled evenly in time. `error` as in travelToRest. */
+export function travelPath(motion: TyreMotion, start: TravelStart, error: number): TimedPath {
+  const states = simulated(motion, start, error);
   const end = states[states.length - 1].t;
-  let next = 1;
-  return Array.from({ length: PARTS + 1 }, (_, i) => {
-    const t = (end * i) / PARTS;
-    while (next < states.length - 1 && states[next].t < t) next++;
-    const moment = states.length > 1 ? between(states[next - 1], states[next], t) : states[0];
-    return { ...moment, t: t + elapsed };
-  });
+  const stateAt = between(motion, states);
+  const poses: TimedPose[] = [];
+  const wheels: TimedPath['wheels'] = motion.vehicle.wheels.map(() => ({ points: [], sliding: [] }));
+  const take = (t: number): void => {
+    const y = stateAt(t);
+    poses.push(poseOf(start.time + t, y));
+    wheelPoints(motion, y).forEach((point, i) => wheels[i].points.push(point));
+  };
+  take(0);
+  for (let k = 1; k <= STRETCHES && end > 0; k++) {
+    const middle = (end * (k - 0.5)) / STRETCHES;
+    slidingWheels(motion, middle, stateAt(middle)).forEach((slides, i) => wheels[i].sliding.push(slides));
+    take((end * k) / STRETCHES);
+  }
+  return { poses, wheels };
 }
 
-/** Cubic Hermite between two states for the pose, straight lines for the velocities. */
-function between(a: Moment, b: Moment, t: number): Moment {
-  const h = b.t - a.t;
-  const s = h > 0 ? (t - a.t) / h : 0;
-  const [rise, bow] = [s * s * (3 - 2 * s), h * s * (1 - s)];
-  const pose = (p: number, q: number, dp: number, dq: number): number =>
-    p + rise * (q - p) + bow * ((1 - s) * dp - s * dq);
-  const line = (p: number, q: number): number => p + s * (q - p);
-  return {
-    t,
-    x: pose(a.x, b.x, a.vx, b.vx),
-    y: pose(a.y, b.y, a.vy, b.vy),
-    heading: pose(a.heading, b.heading, a.w, b.w),
-    vx: line(a.vx, b.vx),
-    vy: line(a.vy, b.vy),
-    w: line(a.w, b.w),
+function simulated(motion: TyreMotion, { from, separation }: TravelStart, error: number): State[] {
+  const states: State[] = [];
+  const { vx, vy, w } = separation;
+  travelToRest(motion, [from.x, from.y, from.heading, vx, vy, w], error, (t, y) =>
+    states.push({ t, y: Float64Array.from(y) }),
+  );
+  return states;
+}
+
+/**
+ * The state at a time, for times that never fall: cubic Hermite within the step. Braking sets in at the end of a step, so
+ * both derivatives are taken as before the end.
+ */
+function between(motion: TyreMotion, states: readonly State[]): (t: number) => Float64Array {
+  let k = 1;
+  const [slopes, slopesThen] = [new Float64Array(6), new Float64Array(6)];
+  return (t) => {
+    if (states.length === 1) return states[0].y;
+    while (k < states.length - 1 && states[k].t < t) k++;
+    const [from, to] = [states[k - 1], states[k]];
+    const h = to.t - from.t;
+    const s = (t - from.t) / h;
+    motion.derivative(from.t, from.y, slopes);
+    motion.derivative(from.t, to.y, slopesThen);
+    const [a, b] = [s * s * (3 - 2 * s), s * (1 - s)];
+    return from.y.map((y, i) => y + a * (to.y[i] - y) + b * h * ((1 - s) * slopes[i] - s * slopesThen[i]));
   };
+}
+
+const poseOf = (time: number, y: Float64Array): TimedPose => ({
+  time,
+  x: y[0],
+  y: y[1],
+  heading: y[2],
+  speed: Math.sqrt(y[3] * y[3] + y[4] * y[4]),
+});
+
+function wheelPoints({ vehicle }: TyreMotion, y: Float64Array): Vec[] {
+  const [c, s] = [cos(y[2]), sin(y[2])];
+  return vehicle.wheels.map((wheel) => [y[0] + c * wheel.x - s * wheel.y, y[1] + s * wheel.x + c * wheel.y]);
 }

@@ -166,12 +166,15 @@ describe('directions with a contact that lasts', () => {
 
 describe('secondContact', () => {
   const casefile = edited(NUDGE);
-  const moment = (t: number, x: number) => ({ t, x, y: 0, heading: 0, vx: 0, vy: 0, w: 0 });
+  const pathOf = (xs: number[]) => ({
+    poses: xs.map((x, time) => ({ time, x, y: 0, heading: 0, speed: 0 })),
+    wheels: [],
+  });
   const context = (A: number[], B: number[]): CheckContext =>
     ({
       casefile,
       solution: {
-        central: { spins: { A: { path: A.map((x, i) => moment(i, x)) }, B: { path: B.map((x, i) => moment(i, x)) } } },
+        central: { travels: { A: pathOf(A), B: pathOf(B) } },
       },
     }) as unknown as CheckContext;
 
@@ -181,8 +184,6 @@ describe('secondContact', () => {
   });
 
   test('is silent where travel is not simulated', () => {
-    expect(
-      secondContact.find({ casefile, solution: { central: { spins: { A: null, B: null } } } } as CheckContext),
-    ).toBeNull();
+    expect(secondContact.find({ casefile, solution: { central: { travels: {} } } } as CheckContext)).toBeNull();
   });
 });

@@ -13,7 +13,7 @@ test('a rest pose that no search met is refused with its path and the nearest mi
   const found = central.spins.B;
   const nearest = found?.separations[0];
   if (!found || !nearest) throw new Error('nothing was found');
-  const missed = { separations: [], otherTurns: [], path: [], nearest: { ...nearest, met: false, miss: 0.42 } };
+  const missed = { ...found, separations: [], otherTurns: [], nearest: { ...nearest, met: false, miss: 0.42 } };
   const refusal = refusalOf({ ...central, spins: { ...central.spins, B: missed } });
   expect(refusal?.path).toBe('departure.B.rest');
   expect(refusal?.says).toMatch(/nearest that was found misses it by 0\.42/);

@@ -17,6 +17,7 @@ import { sideSlip } from './side-slip';
 import { slidingReversal } from './sliding-reversal';
 import { speedRange } from './speed-range';
 import { tyreImpulse } from './tyre-impulse';
+import { converged } from './converged';
 import { correlated } from './correlated';
 import { heavyHeading } from './heavy-heading';
 import { planeShare } from './plane-share';
@@ -36,6 +37,7 @@ import { oneVehicle } from './one-vehicle';
 import { coasting } from './coasting';
 import { gradeAgainstDrag } from './grade-against-drag';
 import { driverControlled } from './driver-controlled';
+import { priorDriven } from './prior-driven';
 import { recorded } from './recorded';
 import { knownSpeed } from './known-speed';
 import { recorderPulse } from './recorder-pulse';
@@ -84,6 +86,8 @@ export const CHECKS: readonly CheckRule[] = [
   oneVehicle,
   speedRange,
   misfit,
+  converged,
+  priorDriven,
   knownSpeed,
   recorded,
   recorderPulse,

@@ -1,6 +1,6 @@
 import { type VehicleId, VEHICLE_IDS } from '@/lib/casefile/schema';
 import { atan2, hypot } from '@/lib/numerics/elementary';
-import type { Moment } from '@/lib/solve/travel-path';
+import type { TimedPose } from '@/lib/geometry/timed-path';
 import type { CheckContext, CheckRule } from './check';
 import { spoken } from './words';
 
@@ -21,10 +21,10 @@ function offPath({ casefile }: CheckContext, id: VehicleId): number {
   return Math.abs(off - 180 * Math.round(off / 180));
 }
 
-const wayBetween = (from: Moment, to: Moment): number => hypot(to.x - from.x, to.y - from.y);
+const wayBetween = (from: TimedPose, to: TimedPose): number => hypot(to.x - from.x, to.y - from.y);
 
 function travelOf(context: CheckContext, id: VehicleId) {
-  const moments = context.solution.central.spins[id]?.path ?? [];
+  const moments = context.solution.central.travels[id]?.poses ?? [];
   if (moments.length === 0) return [];
   const path = moments.slice(1).reduce((sum, to, i) => sum + wayBetween(moments[i], to), 0);
   const chord = wayBetween(moments[0], moments[moments.length - 1]);

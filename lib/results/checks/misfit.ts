@@ -7,6 +7,12 @@ import type { CheckContext, CheckRule } from './check';
 /** 95 % quantiles of chi-square for 1 to 4 degrees of freedom (NIST/SEMATECH e-Handbook of Statistical Methods, 1.3.6.7.4). */
 const CHI_SQUARE_95 = [3.841, 5.991, 7.815, 9.488];
 
+/** The same for any number, by the cube-root rule (Wilson & Hilferty 1931), within 0.1 from 3 on. */
+function chiSquare95(degrees: number): number {
+  const spread = 2 / (9 * degrees);
+  return CHI_SQUARE_95[degrees - 1] ?? degrees * (1 - spread + 1.644854 * Math.sqrt(spread)) ** 3;
+}
+
 interface Held {
   path: string;
   residual: number;
@@ -43,10 +49,13 @@ export const misfit: CheckRule = {
   id: 'misfit',
   source: '95 % point of chi-square (NIST/SEMATECH e-Handbook of Statistical Methods, 1.3.6.7.4)',
   find(context) {
-    const all = [...heldOf(context, 'A'), ...heldOf(context, 'B')];
+    const { fit } = context.solution;
+    const all = fit
+      ? Object.entries(fit.residuals).map(([path, residual]) => ({ path, residual }))
+      : [...heldOf(context, 'A'), ...heldOf(context, 'B')];
     if (all.length === 0) return null;
     const value = all.reduce((sum, { residual }) => sum + residual ** 2, 0);
-    const limit = CHI_SQUARE_95[all.length - 1];
+    const limit = chiSquare95(all.length);
     const bad = value > limit;
     const listed = all
       .map(({ path, residual }) => `${labelOf(context.casefile, path)} by ${Math.abs(residual).toFixed(1)}`)
@@ -55,9 +64,9 @@ export const misfit: CheckRule = {
       level: bad ? 'caution' : 'pass',
       value,
       limit,
-      says: `What is stated and not used differs from the answer, in standard uncertainties: ${listed} (chi-square ${value.toFixed(1)} for ${all.length}).`,
+      says: `${fit ? 'What was observed differs from what the answer predicts' : 'What is stated and not used differs from the answer'}, in standard uncertainties: ${listed} (chi-square ${value.toFixed(1)} for ${all.length}).`,
       advice: bad
-        ? 'Statement and physical evidence do not agree: find out which is wrong before relying on either.'
+        ? 'The pieces of evidence do not agree with each other: find out which is wrong before relying on any; they are not averaged away.'
         : undefined,
       paths: all.map(({ path }) => path),
     };

@@ -1,7 +1,7 @@
 import type { VehicleId } from '@/lib/casefile/schema';
 import { type Point, outlineOf, overlapDepth } from '@/lib/geometry/polygon';
+import { type TimedPath, poseAt } from '@/lib/geometry/timed-path';
 import { cos, sin } from '@/lib/numerics/elementary';
-import type { Moment } from '@/lib/solve/travel-path';
 import type { CheckContext, CheckRule } from './check';
 import { spoken } from './words';
 
@@ -9,8 +9,8 @@ import { spoken } from './words';
 const DEEPER = 0.02;
 
 /** The outline of a vehicle at a time, s, of its simulated travel; after its end it stands. */
-function outlineAt({ casefile }: CheckContext, id: VehicleId, path: readonly Moment[], t: number): Point[] {
-  const { x, y, heading } = path.find((moment) => moment.t >= t) ?? path[path.length - 1];
+function outlineAt({ casefile }: CheckContext, id: VehicleId, path: TimedPath, t: number): Point[] {
+  const { x, y, heading } = poseAt(path, t);
   const vehicle = casefile.vehicles[id];
   const front = vehicle.frontAxleToMassCentre.value;
   return outlineOf({ ...vehicle, frontAxleToMassCentre: front }, [x, y], [cos(heading), sin(heading)]);
@@ -21,11 +21,10 @@ export const secondContact: CheckRule = {
   id: 'secondContact',
   source: 'screening value: outlines 0.02 m deeper in each other than at separation',
   find(context) {
-    const { spins } = context.solution.central;
-    const [A, B] = [spins.A?.path ?? [], spins.B?.path ?? []];
-    if (A.length === 0 || B.length === 0) return null;
+    const { A, B } = context.solution.central.travels;
+    if (!A || !B) return null;
     const depthAt = (t: number): number => overlapDepth(outlineAt(context, 'A', A, t), outlineAt(context, 'B', B, t));
-    const times = [...A, ...B].map(({ t }) => t).sort((p, q) => p - q);
+    const times = [...A.poses, ...B.poses].map(({ time }) => time).sort((p, q) => p - q);
     const atFirst = Math.max(0, depthAt(times[0]));
     const depths = times.map((t) => ({ t, deeper: depthAt(t) - atFirst }));
     const { t, deeper } = depths.reduce((most, one) => (one.deeper > most.deeper ? one : most));

@@ -36,9 +36,9 @@ function leftOut({ solution: { problem, central } }: CheckContext): Finding | nu
 
 /** A contact that lasts has them in: what they gave is said, not held against the answer. */
 function included({ solution: { central } }: CheckContext): Finding | null {
-  const { lasting, figures } = central;
-  if (!lasting?.pushed) return null;
-  const { y } = lasting.pushed;
+  const { contact, figures } = central;
+  if (!contact) return null;
+  const { y } = contact;
   const share = (at: number): number => hypot(y[at], y[at + 1]) / figures.impulse;
   const [A, B] = [share(PAIR.tyresA), share(PAIR.tyresB)];
   return {

@@ -18,7 +18,7 @@ import { CENTRAL_STEPS, Kernel } from './kernel';
 import { carriedOn, meanBraking, targetOf, wayBetween } from './spin-travel';
 
 /** Position error, m, that a simulation of the central answer aims at, and how near it must come, m and rad. */
-const ERROR = 1e-7;
+export const ERROR = 1e-7;
 const MET = 2e-6;
 /** Two separations this near, m/s and rad/s, are one. */
 const SAME = 0.02;

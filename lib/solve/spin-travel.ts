@@ -10,6 +10,8 @@ export const DRAW_ERROR = 5e-5;
 /** A draw meets its rest pose when it comes this near, m and rad: a fraction of what any survey can tell. */
 const DRAW_MET = 5e-4;
 const MOST_STEPS = 12;
+/** How often a step that leads away from the pose is shortened. */
+const MOST_SHORTER = 3;
 /** Where the coarse simulation is too uneven to search on, m. */
 const FINER_ERROR = 1e-6;
 
@@ -145,7 +147,7 @@ function broyden(target: Target, from: number[], inverse: number[][]): number[] 
     if (now.size <= DRAW_MET) return s;
     if (!Number.isFinite(now.size)) return null;
     const full = times(H, now.r).map((d) => -d);
-    const trial = shortened(target, s, now.size, full);
+    const trial = shortened(target, s, now.r, now.size, full);
     improve(
       H,
       trial.step,
@@ -157,17 +159,27 @@ function broyden(target: Target, from: number[], inverse: number[][]): number[] 
   return null;
 }
 
-/** The step, halved a few times as long as it leads away from the pose. */
-function shortened(target: Target, s: readonly number[], size: number, full: readonly number[]) {
-  for (let share = 1; ; share /= 2) {
+/** The step, or as much of it as comes nearest to the pose if the miss changes evenly along it. */
+function shortened(target: Target, s: readonly number[], r: readonly number[], size: number, full: readonly number[]) {
+  for (let share = 1, tries = 0; ; tries++) {
     const step = full.map((d) => share * d);
     const met = missOf(
       target,
       s.map((v, i) => v + step[i]),
     );
-    if (met.size < size || share < 0.2) return { step, met };
+    if (met.size < size || tries === MOST_SHORTER) return { step, met };
+    share *= nearestShare(r, met.r);
   }
 }
+
+/** Where on the straight line from one miss to another the miss is least, kept to what is sensible. */
+function nearestShare(from: readonly number[], to: readonly number[]): number {
+  const change = to.map((v, i) => v - from[i]);
+  const share = -(from[0] * change[0] + from[1] * change[1] + from[2] * change[2]) / squareOf(change);
+  return Math.min(0.5, Math.max(0.05, share));
+}
+
+const squareOf = ([a, b, c]: readonly number[]): number => a * a + b * b + c * c;
 
 /** Sherman and Morrison: H += (step - H change) step' H / (step' H change). */
 function improve(H: number[][], step: readonly number[], change: readonly number[]): void {

@@ -35,3 +35,13 @@ export async function compare(ours: () => unknown, peer: () => unknown, rounds =
   }
   return { ours: median(mine), peer: median(theirs), ratio: median(theirs) / median(mine) };
 }
+
+/** A line of the bench. */
+export interface Line {
+  id: string;
+  what: string;
+  goal: string;
+  found: string;
+}
+
+export const times = (x: number): string => `${x.toFixed(x < 10 ? 2 : 0)} times`;

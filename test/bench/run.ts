@@ -7,7 +7,8 @@ import { type Outcome, solveCase } from '@/lib/solve-case';
 import { plainMonteCarlo } from '../support/plain-monte-carlo';
 import { plainSummary } from '../support/plain-summary';
 import { benchCase, benchProblem, plainDraws } from './cases';
-import { compare, medianTime } from './measure';
+import { type Line, compare, medianTime, times } from './measure';
+import { simulatedTravel } from './travel';
 import { mathjsMonteCarlo } from './with-mathjs';
 
 /**
@@ -18,13 +19,6 @@ import { mathjsMonteCarlo } from './with-mathjs';
 const casefile = benchCase();
 const draws = (n: number) => () => solveCase(casefile, { draws: n, sensitivity: false });
 const plain = (n: number) => () => plainMonteCarlo(casefile, 'directions', n, 0.95, plainDraws(casefile));
-
-interface Line {
-  id: string;
-  what: string;
-  goal: string;
-  found: string;
-}
 
 function bands(outcome: Outcome) {
   if (outcome.kind !== 'solved') throw new Error('the bench case was not solved');
@@ -55,8 +49,6 @@ async function seenToAgree(): Promise<string> {
     if (!(Math.abs(a - b) <= tolerance)) throw new Error(`${name}: ${a} against ${b}, more than ${tolerance} apart`);
   return `${checks.length} figures agree with the peers within five standard errors`;
 }
-
-const times = (x: number): string => `${x.toFixed(x < 10 ? 2 : 0)} times`;
 
 async function monteCarlo(): Promise<Line> {
   const n = 100_000;
@@ -160,6 +152,6 @@ async function sensitivity(): Promise<Line> {
 process.stdout.write(
   `${await seenToAgree()}\nNode ${process.version}, ${cpus().length} x ${cpus()[0]?.model ?? 'unknown processor'}\n\n`,
 );
-for (const bench of [monteCarlo, againstLibrary, statistics, throughWorker, growth, sensitivity])
+for (const bench of [monteCarlo, againstLibrary, statistics, throughWorker, growth, sensitivity, simulatedTravel])
   for (const { id, what, goal, found } of [await bench()].flat())
     process.stdout.write(`${id.padEnd(4)} ${what}\n     ${found}   (goal ${goal})\n`);

@@ -8,7 +8,7 @@ import type { HypothesisResult } from '@/lib/results/result';
 import { summarise } from '@/lib/results/summarise';
 import { solveFit } from '@/lib/solve/fit';
 import { here, runOn } from '@/lib/solve/lanes';
-import type { Outcome, SolveOptions } from './solve-case';
+import type { Outcome, SolveOptions } from '@/lib/results/outcome';
 
 type Hypothesis = NonNullable<CaseFile['hypotheses']>[number];
 

@@ -1,6 +1,6 @@
 import { summarise } from '@/lib/numerics/quantile';
 import type { FigureName } from '@/lib/solve/columns';
-import type { Solution } from '@/lib/solve/solve';
+import type { Solution } from '@/lib/solve/solution';
 import { RESULT_NAMES, type ResultName, isDirection, resultDimension } from './names';
 import type { Band } from './result';
 

@@ -1,4 +1,4 @@
-import type { Solution } from '@/lib/solve/solve';
+import type { Solution } from '@/lib/solve/solution';
 import type { FitResult } from './result';
 
 /** What the method fit says of itself, with the chi-square of its residuals; null for another method. */

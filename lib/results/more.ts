@@ -3,7 +3,7 @@ import { VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
 import { atan2, hypot } from '@/lib/numerics/elementary';
 import { PAIR } from '@/lib/mechanics/pair-motion';
 import { peakAcceleration } from '@/lib/mechanics/pulse';
-import type { Solution } from '@/lib/solve/solve';
+import type { Solution } from '@/lib/solve/solution';
 import type { Result } from './result';
 
 const DEGREES_PER_RADIAN = 180 / Math.PI;

@@ -2,7 +2,7 @@ import type { VehicleId } from '@/lib/casefile/schema';
 import { seatDeltaV } from '@/lib/mechanics/seat';
 import { summarise } from '@/lib/numerics/quantile';
 import { hypot } from '@/lib/numerics/elementary';
-import type { Solution } from '@/lib/solve/solve';
+import type { Solution } from '@/lib/solve/solution';
 import type { SeatResult } from './result';
 
 /** Delta-V at each seat of a vehicle: rigid-vehicle kinematics, m/s in vehicle axes; not the motion of an occupant. */

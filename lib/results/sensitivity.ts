@@ -1,4 +1,4 @@
-import type { Solution } from '@/lib/solve/solve';
+import type { Solution } from '@/lib/solve/solution';
 import type { Result } from './result';
 
 /** First-order and total Sobol' indices per traced result and input path. A result without spread has none. */

@@ -8,7 +8,7 @@ import type { Result } from './result';
 import { fitResult } from './fit';
 import { seatResults } from './seats';
 import { sensitivityOf } from './sensitivity';
-import type { Solution } from '@/lib/solve/solve';
+import type { Solution } from '@/lib/solve/solution';
 
 /** The version of the engine: it changes whenever a digit of any result may change. */
 export const ENGINE = 'retrodict 0.1.0';

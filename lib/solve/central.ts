@@ -5,8 +5,7 @@ import { legStartSpeedSquared } from '@/lib/mechanics/legs';
 import { type FigureName, columnOf, figuresOf } from './columns';
 import { CENTRAL_STEPS, Kernel } from './kernel';
 import type { Travels } from '@/lib/geometry/timed-path';
-import { travelsOf } from './travel-path';
-import { type SpinsFound, findSpins } from './spin-central';
+import { type SpinsFound, findSpins, travelsOf } from './spin-central';
 
 /** The answer with every input at its value. */
 export interface Central {

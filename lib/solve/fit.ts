@@ -9,7 +9,7 @@ import { type Central, solvedAt } from './central';
 import type { FigureName } from './columns';
 import { Kernel } from './kernel';
 import { placeParticles, standardised, unknownsOf, weighParticles } from './likelihood';
-import { type Solution, counted, joined } from './solve';
+import { type FitFound, type Solution, counted, joined } from './solution';
 import type { RunTasks, Task } from './task';
 
 /** Particles where the case leaves their number open, and at most in the second run, which is there to disagree. */
@@ -17,23 +17,6 @@ const PARTICLES = 4000;
 const SECOND = 1000;
 /** Particles a task. */
 const PER_TASK = { closed: 1024, simulated: 64 };
-
-/** What the weighing of the evidence came to. */
-export interface FitFound {
-  logEvidence: number;
-  effectiveSize: number;
-  acceptance: number;
-  temperatures: number;
-  /** Observed less predicted at the central state, in standard uncertainties, by path. */
-  residuals: Record<string, number>;
-  /** 1 less the share of its prior variance that is left of each unknown, by path. */
-  contraction: Record<string, number>;
-  secondRun: {
-    logEvidence: number;
-    /** Largest difference of a mean between both runs, over the standard uncertainty. */
-    disagreement: number;
-  };
-}
 
 export type Fitted = { kind: 'fitted'; solution: Solution } | { kind: 'refused'; reason: Issue };
 

@@ -1,10 +1,9 @@
 import type { Problem } from '@/lib/evidence/problem';
 import type { FigureName } from './columns';
 import type { Central } from './central';
-import type { FitFound } from './fit';
 import { BLOCK } from './kernel';
-import type { SobolIndices } from './sobol';
 import { MOST_BATCHES, batchSize, isSettled } from './adaptive';
+import { type Solution, counted, joined } from './solution';
 import type { DrawsDone, RunTasks, Task, TaskDone } from './task';
 
 /** Draws per task: what one worker does between two looks at the clock. */
@@ -22,20 +21,6 @@ export interface Settings {
   coverage: number;
   /** Figures whose spread is traced back to the inputs; none leaves the sensitivity out. */
   traced: FigureName[];
-}
-
-/** Everything that the draws and the central values of a problem give, before it is put into words. */
-export interface Solution {
-  problem: Problem;
-  central: Central;
-  draws: number;
-  /** Per figure, the values of the possible draws in order; NaN where the value does not exist. */
-  values: Record<FigureName, Float64Array>;
-  impossible: Record<string, number>;
-  traced: FigureName[];
-  sobol: SobolIndices[];
-  /** Of the method fit. */
-  fit: FitFound | null;
 }
 
 /** Solves a problem over its draws and, where asked, traces the spread of its figures back to the inputs. */
@@ -113,28 +98,4 @@ function sobolTasks(problem: Problem, figures: FigureName[]): Task[] {
   for (let i = 0; i < uncertain.length; i += slots)
     tasks.push({ kind: 'sobol', slots: uncertain.slice(i, i + slots), rows, figures });
   return tasks;
-}
-
-/** The values of all parts, one after another. */
-export function joined(parts: DrawsDone[]): Solution['values'] {
-  const names = Object.keys(parts[0].values) as FigureName[];
-  return Object.fromEntries(
-    names.map((name) => {
-      const whole = new Float64Array(parts.reduce((n, part) => n + part.values[name].length, 0));
-      let at = 0;
-      for (const part of parts) {
-        whole.set(part.values[name], at);
-        at += part.values[name].length;
-      }
-      return [name, whole];
-    }),
-  ) as Solution['values'];
-}
-
-/** The counts of all parts together. */
-export function counted(parts: DrawsDone[]): Solution['impossible'] {
-  const counts: Record<string, number> = {};
-  for (const part of parts)
-    for (const [reason, count] of Object.entries(part.impossible)) counts[reason] = (counts[reason] ?? 0) + count;
-  return counts;
 }

@@ -1,5 +1,6 @@
 import { VEHICLE_IDS, type VehicleId } from '@/lib/casefile/schema';
 import type { Problem, SpinSlots, SpinStart } from '@/lib/evidence/problem';
+import type { Travels } from '@/lib/geometry/timed-path';
 import { G } from '@/lib/mechanics/legs';
 import type { VehicleState } from '@/lib/mechanics/impact-backwards';
 import {
@@ -15,6 +16,7 @@ import { PAIR } from '@/lib/mechanics/pair-motion';
 import { TyreMotion } from '@/lib/mechanics/spin';
 import { atan2, cos, hypot, sin } from '@/lib/numerics/elementary';
 import { CENTRAL_STEPS, Kernel } from './kernel';
+import { travelPath } from './travel-path';
 import { carriedOn, meanBraking, targetOf, wayBetween } from './spin-travel';
 
 /** Position error, m, that a simulation of the central answer aims at, and how near it must come, m and rad. */
@@ -209,4 +211,17 @@ function intoLocal(m: readonly (readonly number[])[], c: number, s: number): num
     right[0].map((a, j) => right[1][j] * c - a * s),
     [...right[2]],
   ];
+}
+
+/** The central travel of every vehicle whose travel is simulated and was found. */
+export function travelsOf(spins: SpinsFound): Travels {
+  const travels: Travels = {};
+  for (const id of VEHICLE_IDS) {
+    const spin = spins[id];
+    const best = spin?.separations[0];
+    if (!spin || !best) continue;
+    const { motion, from, error } = spin.target;
+    travels[id] = travelPath(motion, { time: spin.elapsed, from, separation: best.separation }, error);
+  }
+  return travels;
 }

@@ -1,13 +1,9 @@
-import { VEHICLE_IDS } from '@/lib/casefile/schema';
-import type { TimedPath, TimedPose, Travels } from '@/lib/geometry/timed-path';
+import type { TimedPath, TimedPose } from '@/lib/geometry/timed-path';
 import type { Vec } from '@/lib/geometry/vector';
 import { slidingWheels } from '@/lib/mechanics/sliding';
 import { type TyreMotion, travelToRest } from '@/lib/mechanics/spin';
 import type { Pose, Separation } from '@/lib/mechanics/spin-backwards';
 import { cos, sin } from '@/lib/numerics/elementary';
-import type { SpinsFound } from './spin-central';
-
-export type { Travels } from '@/lib/geometry/timed-path';
 
 /** Equal stretches of time that a travel is sampled by. */
 const STRETCHES = 120;
@@ -23,19 +19,6 @@ export interface TravelStart {
 interface State {
   t: number;
   y: Float64Array;
-}
-
-/** The central travel of every vehicle whose travel is simulated and was found. */
-export function travelsOf(spins: SpinsFound): Travels {
-  const travels: Travels = {};
-  for (const id of VEHICLE_IDS) {
-    const spin = spins[id];
-    const best = spin?.separations[0];
-    if (!spin || !best) continue;
-    const { motion, from, error } = spin.target;
-    travels[id] = travelPath(motion, { time: spin.elapsed, from, separation: best.separation }, error);
-  }
-  return travels;
 }
 
 /** A travel from its start to rest, sampled evenly in time. `error` as in travelToRest. */

@@ -31,11 +31,12 @@ test('a case that lacks what its method needs is refused with each need', async 
   expect(await response.json()).toEqual({ error: needsOf(emptyCase()) });
 });
 
-test('what this version does not solve is said, at its place', async () => {
+test('a case that cannot be computed is answered with the reason, at its place', async () => {
   const casefile = await junction(100);
-  const response = await solve(JSON.stringify({ ...casefile, analysis: { ...casefile.analysis, method: 'fit' } }));
+  casefile.approach.B.direction = casefile.approach.A.direction;
+  const response = await solve(JSON.stringify(casefile));
   expect(response.status).toBe(422);
-  expect(await response.json()).toMatchObject({ error: [{ path: 'analysis.method' }] });
+  expect(await response.json()).toMatchObject({ error: [{ path: 'approach.B.direction' }] });
 });
 
 test('a bad file is refused as everywhere', async () => {

@@ -113,6 +113,8 @@ const ON: Case[] = [
 
 /** Checks of travel that is simulated to a rest pose. */
 const SIMULATED = ['restPose', 'otherTurns', 'secondContact'];
+/** Checks of the method fit: turned on and off in test/solve/fit.test.ts. */
+const OF_A_FIT = ['converged', 'priorDriven'];
 
 describe('simulated travel', () => {
   const simulated = async (...edits: Edit[]) => {
@@ -145,7 +147,7 @@ describe('on', () => {
   test.each(ON)('%s: %s', async (id, level, name, edits) => expect(await levelOf(id, name, ...edits)).toBe(level));
 
   test('every check is turned on here, with simulated travel, or among the further checks', () =>
-    expect(new Set([...ON.map(([id]) => id), ...SIMULATED, ...MORE_ON.map(({ id }) => id)])).toEqual(
+    expect(new Set([...ON.map(([id]) => id), ...SIMULATED, ...OF_A_FIT, ...MORE_ON.map(({ id }) => id)])).toEqual(
       new Set(CHECKS.map(({ id }) => id)),
     ));
 });

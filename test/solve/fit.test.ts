@@ -4,6 +4,8 @@ import { type Edit, applyEdit } from '@/lib/casefile/edit';
 import { parseCase } from '@/lib/casefile/parse';
 import type { CaseFile } from '@/lib/casefile/schema';
 import { readEvidence } from '@/lib/evidence/read-evidence';
+import type { CheckContext } from '@/lib/results/checks/check';
+import { converged } from '@/lib/results/checks/converged';
 import { resultSchema, type Result } from '@/lib/results/result';
 import { solveCase } from '@/lib/solve-case';
 import { type Lane, runOn } from '@/lib/solve/lanes';
@@ -68,6 +70,7 @@ describe('the method fit', () => {
       edited(CROSSING, set('departure.A', null), set('departure.B', null), set('recorded.B', { left: q(-9, 3) })),
     );
     expect(level(recordedOnly, 'priorDriven')).toBe('caution');
+    expect(level(sure, 'priorDriven')).toBe('pass');
   });
 
   test('rival accounts stand beside each other with their marginal likelihoods; a standing vehicle is speed 0 exactly', async () => {
@@ -136,6 +139,14 @@ describe('the method fit', () => {
     expect(observation?.value).toBeLessThan(4000);
     const [bounded, free] = [await solved(casefile), await solved(edited(CROSSING))];
     expect(bounded.bands.energyLost.median).toBeLessThan(free.bands.energyLost.median);
+  });
+
+  test('two runs that disagree fail the check and withhold the answer', () => {
+    const check = (disagreement: number, logEvidence: number) =>
+      converged.find({
+        solution: { fit: { logEvidence: 0, secondRun: { disagreement, logEvidence } } },
+      } as CheckContext)?.level;
+    expect([check(0.29, 0.9), check(0.31, 0), check(0, -1.1)]).toEqual(['pass', 'fail', 'fail']);
   });
 
   test('an observation without a spread is refused with its path', async () => {

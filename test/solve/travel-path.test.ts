@@ -7,7 +7,8 @@ import { G } from '@/lib/mechanics/legs';
 import { type Ground, TyreMotion, fourWheels } from '@/lib/mechanics/spin';
 import { solveCentral } from '@/lib/solve/central';
 import { restMisses } from '@/lib/solve/rest-miss';
-import { type TravelStart, travelPath, travelsOf } from '@/lib/solve/travel-path';
+import { travelsOf } from '@/lib/solve/spin-central';
+import { type TravelStart, travelPath } from '@/lib/solve/travel-path';
 
 const LEVEL: Ground = { friction: 0.7, frictionAt: null, grade: 0, uphill: 0 };
 const ERROR = 1e-7;

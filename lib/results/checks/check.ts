@@ -1,5 +1,5 @@
 import type { CaseFile } from '@/lib/casefile/schema';
-import type { Solution } from '@/lib/solve/solve';
+import type { Solution } from '@/lib/solve/solution';
 import type { ResultName } from '../names';
 import type { Band, Check, Level } from '../result';
 

@@ -6,9 +6,10 @@ import type { Answer } from './answer';
 
 /** Draws while a gesture is under way: coarse, and said to be. */
 const LIVE_DRAWS = 2048;
-/** The same where the travel of a vehicle is simulated: every draw is a search. */
-const LIVE_SIMULATED = 64;
-const isSimulated = ({ departure: { A, B } }: CaseFile): boolean => A?.kind === 'spin' || B?.kind === 'spin';
+/** The same where every draw is a search, or a particle that is moved many times. */
+const LIVE_SLOW = 64;
+const isSlow = ({ analysis, departure: { A, B } }: CaseFile): boolean =>
+  A?.kind === 'spin' || B?.kind === 'spin' || analysis.method === 'fit' || analysis.contact === 'lasting';
 /** Rest after the last edit before all draws are made, ms. */
 const REST = 80;
 /** A solve that takes longer shows its progress, ms. */
@@ -77,7 +78,7 @@ export function startAnswering(session: Session, pool: WorkerPool, show: (answer
         const of: CaseFile = liveWanted;
         liveWanted = null;
         settle(
-          await pool.solve(of, { draws: isSimulated(of) ? LIVE_SIMULATED : LIVE_DRAWS, sensitivity: false }).outcome,
+          await pool.solve(of, { draws: isSlow(of) ? LIVE_SLOW : LIVE_DRAWS, sensitivity: false }).outcome,
           of,
           'live',
         );

@@ -7,6 +7,11 @@ import styles from './ledger.module.css';
 const METHODS: [id: string, name: string, when: string][] = [
   ['directions', 'two known directions', 'Both directions of approach are known and their paths cross.'],
   ['restitution', 'known restitution', 'Restitution, impulse ratio and both yaw rates after contact are known.'],
+  [
+    'fit',
+    'all evidence together',
+    'Everything that is known is weighed together, however little; what is not stated is left open.',
+  ],
 ];
 
 const CONTACTS: [id: string, name: string, when: string][] = [
@@ -32,10 +37,7 @@ export function LedgerSettings() {
       <Choice
         label="Method"
         value={analysis.method}
-        options={[
-          ...METHODS.map(([id, name]) => [id, name] as const),
-          ...(analysis.method === 'fit' ? [['fit', 'fit: not solved by this version'] as const] : []),
-        ]}
+        options={[...METHODS.map(([id, name]) => [id, name] as const)]}
         onChoose={(method) => set('method', 'analysis.method', method)}
       />
       <p className={styles.hint}>{METHODS.find(([id]) => id === analysis.method)?.[2]}</p>

@@ -8,6 +8,7 @@ import { AGAINST, Against } from './against';
 import { AnswerHead } from './answer-head';
 import styles from './answer-panel.module.css';
 import { NoAnswer } from './no-answer';
+import { FitPanel, Rivals } from './fit-panel';
 import { PairFigures } from './pair-figures';
 import { ResultsTable } from './results-table';
 import { SpeedRows } from './speed-rows';
@@ -67,11 +68,17 @@ function Body({ answer, isTable }: { answer: Answer; isTable: boolean }) {
       )}
       <div className={styles.blocks} data-table={isTable && !isWithheld}>
         {isWithheld && <Withheld reasons={reasons} />}
-        {!isWithheld && isTable && <ResultsTable result={result} of={of} />}
+        {!isWithheld && isTable && (
+          <div>
+            <ResultsTable result={result} of={of} />
+            <FitPanel result={result} of={of} />
+          </div>
+        )}
         {!isWithheld && !isTable && (
           <>
             <SpeedRows result={result} shapes={shapes} of={of} />
             <PairFigures result={result} of={of} />
+            <Rivals result={result} />
           </>
         )}
         <Against result={result} of={of} />

@@ -74,6 +74,14 @@ const APPROACH: Line[] = [
   ['speed', 'known approach speed', 'speed', 'optional'],
 ];
 
+/** What only the method fit takes. */
+const FIT_CONTACT: Line[] = [
+  ['friction', 'Friction of the contact', 'ratio', 'optional'],
+  ['slide', 'Way slid along the plane', 'length', 'optional'],
+];
+const FIT_APPROACH: Line[] = [['slip', 'slip (direction less heading)', 'angle', 'optional']];
+const asksForFit = ({ analysis }: CaseFile): boolean => analysis.method === 'fit';
+
 const LEG: Line[] = [
   ['distance', 'distance', 'length'],
   ['friction', 'friction', 'ratio'],
@@ -106,9 +114,14 @@ export function fieldsOf(casefile: CaseFile): Field[] {
     field('impact.point.x', ['x', 'Contact point, x', 'length'], 'contact', 'contact.point'),
     field('impact.point.y', ['y', 'Contact point, y', 'length'], 'contact', 'contact.point'),
     ...CONTACT.map((line) => field(`impact.${line[0]}`, line, 'contact', 'contact.plane')),
+    ...(asksForFit(casefile) ? FIT_CONTACT : []).map((line) =>
+      field(`impact.${line[0]}`, line, 'contact', 'contact.plane'),
+    ),
     field('pulse', ['pulse', 'Contact duration', 'time', 'optional'], 'contact', 'contact.plane'),
     ...VEHICLE_IDS.flatMap((id) =>
-      APPROACH.map((line) => field(`approach.${id}.${line[0]}`, line, 'before', `approach.${id}`, `${id}:`)),
+      [...APPROACH, ...(asksForFit(casefile) ? FIT_APPROACH : [])].map((line) =>
+        field(`approach.${id}.${line[0]}`, line, 'before', `approach.${id}`, `${id}:`),
+      ),
     ),
     ...VEHICLE_IDS.flatMap((id) => departureFields(casefile, id)),
     ...VEHICLE_IDS.flatMap((id) => damageFields(casefile, id)),

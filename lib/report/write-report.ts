@@ -8,6 +8,7 @@ import { checksSection } from './checks-section';
 import { authorSection, reproduceSection } from './closing-sections';
 import { domainSection } from './domain-section';
 import { failuresOf } from './failures';
+import { fitSection } from './fit-section';
 import { type Issue, headerOf } from './header';
 import { inputsSection } from './inputs-section';
 import { assumptionsSection, methodSection } from './method-section';
@@ -41,6 +42,7 @@ export function writeReport(
     assumptionsSection(casefile),
     workedSection(casefile, result),
     resultsSection(casefile, result),
+    fitSection(casefile, result),
     sensitivitySection(result, (path) => labelOf(casefile, path)),
     checksSection(result),
     domainSection(casefile, result),

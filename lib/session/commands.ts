@@ -86,6 +86,7 @@ const toolCommand = (tool: ToolId): Command => ({
 const METHODS: [Method, string][] = [
   ['directions', 'two directions of approach'],
   ['restitution', 'restitution and impulse ratio'],
+  ['fit', 'all evidence together'],
 ];
 
 /** Only the choices that would change something. */

@@ -15,7 +15,7 @@ const FOLDERS = ['public/examples', 'test/cases'];
 const files = FOLDERS.flatMap((folder) => readdirSync(folder).map((name) => `${folder}/${name}`)).filter(
   (f) =>
     // A fit runs forward from many states; there are no lines to write out.
-    f.endsWith('.case.json') && !f.includes('/fit-'),
+    f.endsWith('.case.json') && !readFileSync(f, 'utf8').includes('"method": "fit"'),
 );
 
 function read(file: string): CaseFile {

@@ -106,7 +106,7 @@ export function invertFrom(target: Target, start: Separation, met: number): Inve
   return { met: now.size <= met, separation: { vx, vy, w }, rest: now.rest, miss: now.size };
 }
 
-type Missed = ReturnType<typeof missOf>;
+export type Missed = ReturnType<typeof missOf>;
 
 /** A step that comes nearer, with more damping as long as none does; null where none is found. */
 function lowered(

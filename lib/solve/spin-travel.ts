@@ -1,7 +1,7 @@
 import type { LocalSeparation, SpinSlots, SpinStart, VehicleSlots } from '@/lib/evidence/problem';
 import type { VehicleState } from '@/lib/mechanics/impact-backwards';
 import { brakingWithRolling } from '@/lib/mechanics/wheel';
-import { type Pose, type Target, farthest, invertFrom, missOf } from '@/lib/mechanics/spin-backwards';
+import { type Pose, type Missed, type Target, farthest, invertFrom, missOf } from '@/lib/mechanics/spin-backwards';
 import { cos, sin } from '@/lib/numerics/elementary';
 import { roadUnder } from './road';
 
@@ -10,6 +10,11 @@ export const DRAW_ERROR = 5e-5;
 /** A draw meets its rest pose when it comes this near, m and rad: a fraction of what any survey can tell. */
 const DRAW_MET = 5e-4;
 const MOST_STEPS = 12;
+/** Farther from the pose than this, m and rad, a simulation may err by so many times more. */
+const FAR = 0.01;
+const ROUGHER = 10;
+/** Longest step of a search over the size of the separation and one more, m/s and rad/s. */
+const BOLDEST = 0.15;
 /** How often a step that leads away from the pose is shortened. */
 const MOST_SHORTER = 3;
 /** Where the coarse simulation is too uneven to search on, m. */
@@ -138,16 +143,21 @@ function turnedRows(m: readonly (readonly number[])[], heading: number): number[
   ];
 }
 
-/** Broyden's good method on the inverse; null where it does not meet the pose. */
+/**
+ * Broyden's good method on the inverse; null where it does not meet the pose. Far from the pose the simulation is a rough one;
+ * only a fine one can meet it.
+ */
 function broyden(target: Target, from: number[], inverse: number[][]): number[] | null {
   const H = inverse.map((row) => [...row]);
+  const rough = { ...target, error: ROUGHER * target.error };
   let s = from;
-  let now = missOf(target, s);
+  let by = rough;
+  let now = missOf(by, s);
   for (let round = 0; round < MOST_STEPS; round++) {
-    if (now.size <= DRAW_MET) return s;
+    if (by === target && now.size <= DRAW_MET) return s;
     if (!Number.isFinite(now.size)) return null;
-    const full = times(H, now.r).map((d) => -d);
-    const trial = shortened(target, s, now.r, now.size, full);
+    by = now.size > FAR ? rough : target;
+    const trial = shortened(by, s, now, boundedStep(H, s, now.r));
     improve(
       H,
       trial.step,
@@ -159,16 +169,24 @@ function broyden(target: Target, from: number[], inverse: number[][]): number[] 
   return null;
 }
 
+/** Newton's step with the inverse H, no longer than the separation allows. */
+function boundedStep(H: number[][], s: readonly number[], r: readonly number[]): number[] {
+  const step = times(H, r).map((d) => -d);
+  const share = Math.min(1, (BOLDEST * (1 + Math.sqrt(squareOf(s)))) / Math.sqrt(squareOf(step)));
+  return step.map((d) => share * d);
+}
+
 /** The step, or as much of it as comes nearest to the pose if the miss changes evenly along it. */
-function shortened(target: Target, s: readonly number[], r: readonly number[], size: number, full: readonly number[]) {
+function shortened(target: Target, s: readonly number[], now: Missed, full: readonly number[]) {
+  const enough = Math.max(now.size, 4 * ROUGHER * target.error);
   for (let share = 1, tries = 0; ; tries++) {
     const step = full.map((d) => share * d);
     const met = missOf(
       target,
       s.map((v, i) => v + step[i]),
     );
-    if (met.size < size || tries === MOST_SHORTER) return { step, met };
-    share *= nearestShare(r, met.r);
+    if (met.size < enough || tries === MOST_SHORTER) return { step, met };
+    share *= nearestShare(now.r, met.r);
   }
 }
 

@@ -101,7 +101,7 @@ function inversions(count: number): Inversion[] {
 
 /** A draw's search for its separation against one simulation from what it finds. */
 async function perInversion(): Promise<Line> {
-  const all = inversions(500);
+  const all = inversions(1000);
   const found = all.filter(({ target, spin, body }) => separateDraw(target, spin, body));
   const simulate = ({ target, body }: Inversion) => missOf(target, [body.vx, body.vy, body.wMeasured]);
   if (found.length < 0.95 * all.length) throw new Error(`only ${found.length} of ${all.length} draws met their pose`);

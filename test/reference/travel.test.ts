@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { G, legStartSpeedSquared } from '@/lib/mechanics/legs';
 import { meanAcceleration, peakAcceleration } from '@/lib/mechanics/pulse';
+import { recorderUncertainty } from '@/lib/mechanics/recorder';
 
 /** Travel to rest and pulses, against printed values. */
 
@@ -106,3 +107,12 @@ describe('pulses', () => {
     expect(Math.abs(meanAcceleration(16 / 3.6, 0.091) / G - 5)).toBeLessThan(0.05);
   });
 });
+
+// 49 CFR 563.8, table III: a speed change is recorded in steps of 1 km/h and true to 10 %. A step alone has limits of 0.5
+// km/h, rectangular: 0.29 km/h (JCGM 100:2008, 4.3.7); the accuracy alone of 100 km/h is 10 / sqrt 3 = 5.77 km/h.
+test.each([
+  [0, 0.29],
+  [100, Math.hypot(5.77, 0.29)],
+])('a recorder that shows %i km/h: standard uncertainty %f km/h', (shown, wanted) =>
+  expect(Math.abs(recorderUncertainty(shown / 3.6) * 3.6 - wanted)).toBeLessThan(0.005),
+);

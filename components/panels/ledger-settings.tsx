@@ -37,7 +37,7 @@ export function LedgerSettings() {
       <Choice
         label="Method"
         value={analysis.method}
-        options={[...METHODS.map(([id, name]) => [id, name] as const)]}
+        options={METHODS.map(([id, name]) => [id, name] as const)}
         onChoose={(method) => set('method', 'analysis.method', method)}
       />
       <p className={styles.hint}>{METHODS.find(([id]) => id === analysis.method)?.[2]}</p>

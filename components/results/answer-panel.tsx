@@ -77,8 +77,10 @@ function Body({ answer, isTable }: { answer: Answer; isTable: boolean }) {
         {!isWithheld && !isTable && (
           <>
             <SpeedRows result={result} shapes={shapes} of={of} />
-            <PairFigures result={result} of={of} />
-            <Rivals result={result} />
+            <div>
+              <Rivals result={result} />
+              <PairFigures result={result} of={of} />
+            </div>
           </>
         )}
         <Against result={result} of={of} />

@@ -40,7 +40,7 @@ export function MissShapes({ misses, scene, view, theme, shown }: Props) {
         ))}
         <BoardLabel
           at={[x, y - ABOVE]}
-          text={`${vehicle} misses its rest by ${shown.length(distance(from, to))}, ${shown.angle(toDegrees(Math.abs(nearest.heading - measured.heading)))}`}
+          text={`${vehicle} misses its rest by ${shown.length(distance(from, to))} and ${shown.angle(toDegrees(Math.abs(nearest.heading - measured.heading)))}`}
           theme={theme}
           colour={theme.caution}
           strong

@@ -38,7 +38,7 @@ export function TravelLayer({ scene, view, theme, travels, clock }: Props) {
             theme={theme}
             dash={[4, 3]}
             opacity={1}
-            tinted
+            nosed
           />
         ))}
       </Group>

@@ -10,8 +10,8 @@ import styles from './travel-scrubber.module.css';
 import { usePlay } from './use-play';
 import { useReducedMotion } from './use-reduced-motion';
 
-/** One press of an arrow key, s. */
-const STEP = 0.01;
+/** Presses of an arrow key in a second. */
+const STEPS = 100;
 
 const seconds = (time: number): string => formatWithUnit(time, 'time', 'metric', { decimals: 2 });
 
@@ -22,7 +22,8 @@ const keepEnter = (event: KeyboardEvent): void => {
 
 /** Moves along the simulated travel: one time for both vehicles, from first contact to the last rest. */
 export function TravelScrubber({ travels, clock }: { travels: Travels; clock: TravelClock }) {
-  const end = endOf(travels);
+  // On a step of the range, which would else move its value to the step before.
+  const end = Math.ceil(endOf(travels) * STEPS) / STEPS;
   const time = useTravelTime(clock, end);
   const { playing, toggle, pause } = usePlay(clock, end);
   const isStill = useReducedMotion();
@@ -50,8 +51,8 @@ export function TravelScrubber({ travels, clock }: { travels: Travels; clock: Tr
         aria-label="Time from first contact"
         aria-valuetext={spoken(time, travels)}
         min={0}
-        max={Math.ceil(end / STEP) * STEP}
-        step={STEP}
+        max={end}
+        step={1 / STEPS}
         value={time}
         onChange={(event) => {
           pause();

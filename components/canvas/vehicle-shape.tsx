@@ -57,40 +57,30 @@ export function GhostShape({
   theme,
   dash,
   opacity,
-  tinted = false,
+  nosed = false,
 }: {
   vehicle: SceneVehicle;
   pose: ScenePose;
   theme: Theme;
   dash: number[];
   opacity: number;
-  tinted?: boolean;
+  /** With the mark of the nose, where one must see which way it faces. */
+  nosed?: boolean;
 }) {
   const { which, body } = vehicle;
-  const trace = (context: Context): void => tracePath(context, noseOf(vehicle), body.length, body.width);
-  const soft = which === 'A' ? theme.ASoft : theme.BSoft;
   return (
     <Group x={pose.x} y={pose.y} rotation={toDegrees(pose.heading)} opacity={opacity}>
-      {tinted && (
-        <Shape
-          sceneFunc={(context, shape) => {
-            trace(context);
-            context.fillShape(shape);
-          }}
-          fill={soft}
-          opacity={0.5}
-        />
-      )}
       <Shape
         sceneFunc={(context, shape) => {
-          trace(context);
+          tracePath(context, noseOf(vehicle), body.length, body.width);
           context.strokeShape(shape);
         }}
         stroke={theme[which]}
-        strokeWidth={1.25}
+        strokeWidth={nosed ? 1.75 : 1.25}
         strokeScaleEnabled={false}
         dash={dash}
       />
+      {nosed && <NoseMark vehicle={vehicle} colour={theme[which]} />}
     </Group>
   );
 }

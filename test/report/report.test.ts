@@ -4,6 +4,7 @@ import { parseCase } from '@/lib/casefile/parse';
 import type { CaseFile } from '@/lib/casefile/schema';
 import type { Block, Report } from '@/lib/report/report';
 import { writeReport } from '@/lib/report/write-report';
+import type { Travels } from '@/lib/geometry/timed-path';
 import type { Shapes } from '@/lib/results/bands';
 import type { Result } from '@/lib/results/result';
 import { solveCase } from '@/lib/solve-case';
@@ -12,15 +13,16 @@ interface Solved {
   casefile: CaseFile;
   result: Result;
   shapes: Shapes;
+  travels: Travels;
 }
 
-async function solvedExample(name: string, units: 'metric' | 'us' = 'metric'): Promise<Solved> {
+async function solvedExample(name: string, units: 'metric' | 'us' = 'metric', draws = 4000): Promise<Solved> {
   const parsed = parseCase(readFileSync(`public/examples/${name}.case.json`));
   if (!parsed.ok) throw new Error('the example is not valid');
   const casefile: CaseFile = { ...parsed.casefile, display: { units, paper: 'A4' } };
-  const outcome = await solveCase(casefile, { draws: 4000 });
+  const outcome = await solveCase(casefile, { draws, sensitivity: draws > 100 });
   if (outcome.kind !== 'solved') throw new Error('the example is not solved');
-  return { casefile, result: outcome.result, shapes: outcome.shapes };
+  return { casefile, result: outcome.result, shapes: outcome.shapes, travels: outcome.travels };
 }
 
 const blocksOf = (report: Report): Block[] => report.sections.flatMap((section) => section.blocks);
@@ -170,4 +172,42 @@ test('a speed that reaches down to nothing is given as an upper bound, not with 
   const [headline] = only(writeReport(casefile, result, shapes), 'headline');
   expect(headline.figures[1].value).toBe(`at most ${(band.shortest[1] * 3.6).toFixed(1)}`);
   expect(headline.figures[1].interval).toContain(`median ${(band.median * 3.6).toFixed(1)} km/h`);
+});
+
+describe('the nudge example, whose travel is simulated', () => {
+  let solved: Solved;
+  beforeAll(async () => {
+    solved = await solvedExample('nudge', 'us', 100);
+  });
+
+  test('prints the travel of both vehicles in the units of the case, from contact to rest, and draws their paths', () => {
+    const { casefile, result, shapes, travels } = solved;
+    const report = writeReport(casefile, result, shapes, {}, travels);
+    const section = report.sections.find(({ id }) => id === 'travel');
+    const [table] = section?.blocks ?? [];
+    if (table?.kind !== 'table') throw new Error('there is no table of the travel');
+    expect(table.caption).toContain('illustration of one computed case');
+    expect(table.columns.map(({ title }) => title)).toEqual(['Time, s', 'x, ft', 'y, ft', 'Heading, °', 'Speed, mph']);
+    expect(table.rows).toHaveLength(24);
+    // 1 ft = 0.3048 m exactly.
+    const cells = (k: number): string[] => (table.rows[k] as { cells: string[] }).cells;
+    expect(cells(1).slice(0, 2)).toEqual(['0.00', `\u2212${(1.94 / 0.3048).toFixed(2)}`]);
+    expect(cells(11).slice(1, 4)).toEqual([`\u2212${(1.27 / 0.3048).toFixed(2)}`, (0.12 / 0.3048).toFixed(2), '0.6']);
+    expect(cells(23)[3]).toBe('128.0');
+    const [{ drawing }] = only(report, 'plan');
+    const paths = drawing.items.filter((item) => item.kind === 'line' && item.points.length > 60);
+    expect(paths).toHaveLength(2);
+  });
+
+  test('withholds it with the other figures when a check fails', () => {
+    const { casefile, result, shapes, travels } = solved;
+    const report = writeReport(casefile, failed(result), shapes, {}, travels);
+    expect(report.sections.some(({ id }) => id === 'travel')).toBe(false);
+  });
+});
+
+test('a case whose travel is given by legs has no section on simulated travel', async () => {
+  const { casefile, result, shapes, travels } = await solvedExample('junction');
+  expect(travels).toEqual({});
+  expect(writeReport(casefile, result, shapes, {}, travels).sections.some(({ id }) => id === 'travel')).toBe(false);
 });

@@ -4,7 +4,7 @@ import { AnswerStrip } from './drawing';
 import { solveCommand } from './printed';
 
 /** The same case and seed: the same bytes from the command, over HTTP and from the workers of a tab, however many. */
-for (const name of ['junction', 'queue'])
+for (const name of ['junction', 'queue', 'rivals'])
   test(`${name}: command, HTTP, one worker and four give the same bytes`, async ({ page, request }) => {
     const text = await readFile(`public/examples/${name}.case.json`, 'utf8');
     const command = (await solveCommand(text)).trim();

@@ -77,7 +77,7 @@ function Body({ answer, isTable }: { answer: Answer; isTable: boolean }) {
         {!isWithheld && !isTable && (
           <>
             <SpeedRows result={result} shapes={shapes} of={of} />
-            <div>
+            <div className={styles.contact}>
               <Rivals result={result} />
               <PairFigures result={result} of={of} />
             </div>

@@ -20,7 +20,8 @@ export function FitPanel({ result, of }: { result: Result; of: CaseFile }) {
 
 /** The accounts against each other in words; their figures stand in the table. */
 export function Rivals({ result }: { result: Result }) {
-  const words = rivalWords(result);
+  // Where the verbal scale comes from stands in the table and in the report.
+  const words = rivalWords(result).slice(0, -1);
   if (words.length === 0) return null;
   return (
     <section className={styles.panel} aria-label="Rival accounts">

@@ -32,7 +32,10 @@ export function fitSection(casefile: CaseFile, result: Result): Section | null {
 }
 
 const howItWent = ({ temperatures, acceptance, effectiveSize, logEvidence, secondRun }: FitResult): string =>
-  `${temperatures} temperatures, ${Math.round(100 * acceptance)} % of the moves taken, ${effectiveSize} states that differ; log of the marginal likelihood ${logEvidence.toFixed(1)}, in the second run ${secondRun.logEvidence.toFixed(1)}; the mean speeds of both runs differ by ${secondRun.disagreement.toFixed(2)} standard uncertainties.`;
+  `${temperatures} temperatures, ${Math.round(100 * acceptance)} % of the moves taken, ${effectiveSize} states that differ; log of the marginal likelihood ${signed(logEvidence)}, in the second run ${signed(secondRun.logEvidence)}; the mean speeds of both runs differ by ${secondRun.disagreement.toFixed(2)} standard uncertainties.`;
+
+/** One decimal, with a true minus and no negative nothing. */
+const signed = (x: number): string => (Math.abs(x) < 0.05 ? '0.0' : x.toFixed(1).replace('-', '−'));
 
 /** Predicted against observed, per piece of evidence. */
 export function observationsTable(casefile: CaseFile, fit: FitResult): Table {
@@ -44,7 +47,7 @@ export function observationsTable(casefile: CaseFile, fit: FitResult): Table {
       { title: 'Residual in standard uncertainties', kind: 'number' },
     ],
     rows: Object.entries(fit.residuals).map(([path, residual]) => ({
-      cells: [labelOf(casefile, path), residual.toFixed(1).replace('-', '−')],
+      cells: [labelOf(casefile, path), signed(residual)],
     })),
   };
 }
@@ -100,7 +103,7 @@ export function rivalsTable(casefile: CaseFile, { hypotheses, coverage }: Result
         says ? `${name}: ${says}` : name,
         speed(bands['A.approachSpeed']),
         speed(bands['B.approachSpeed']),
-        logEvidence === undefined ? '–' : logEvidence.toFixed(1).replace('-', '−'),
+        logEvidence === undefined ? '–' : signed(logEvidence),
       ],
     })),
   };

@@ -21,7 +21,12 @@ const HOW: Record<Method, string[]> = {
     'The speed at which the contact points part, divided by the restitution, is the speed at which they closed. With the stated impulse ratio that fixes the impulse.',
     'The impulse takes each vehicle from its motion after contact back to its motion before. Directions of approach and yaw rates before contact are results here, to be held against the road.',
   ],
-  fit: ['Everything that is known is weighed together against a model run forward from approach to rest.'],
+  fit: [
+    'Every uncertain value is an unknown with its stated spread as what is known beforehand; an approach speed that nothing is stated of is flat from 0 to 45 m/s, a restitution from 0 to 1, a contact friction from 0 to 1.5.',
+    'From each state of the unknowns the collision is run forward: approach, contact with restitution and friction (instant, or lasting with the tyres pushing), separation, and where a rest pose is stated, simulated travel to rest.',
+    'What that predicts is held against every piece of evidence, each once, with a normal distribution of its stated spread. Legs give one such piece for each vehicle, the separation speed, carried over from their own inputs.',
+    'The states that explain the evidence are found by sequential Monte Carlo with a tempered likelihood and adaptive steps, which also gives the marginal likelihood that rival accounts are compared by.',
+  ],
 };
 
 const SOURCES = [

@@ -27,7 +27,7 @@ function leftOut({ solution: { problem, central } }: CheckContext): Finding | nu
     advice:
       level === 'pass'
         ? undefined
-        : problem.method === 'directions'
+        : problem.method !== 'restitution'
           ? 'Let the contact last (with its duration stated), so that the tyres are reckoned in; else take the answer as less certain than its interval says, and state it in the report.'
           : 'At this speed take the answer as less certain than its interval says, and state it in the report.',
     paths: ['pulse'],

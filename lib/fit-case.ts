@@ -1,4 +1,4 @@
-import { DEFAULT_COVERAGE, DEFAULT_SEED } from '@/lib/casefile/defaults';
+import { DEFAULT_COVERAGE, DEFAULT_PARTICLES, DEFAULT_SEED } from '@/lib/casefile/defaults';
 import { applyEdit } from '@/lib/casefile/edit';
 import { needsOf } from '@/lib/casefile/needs';
 import type { CaseFile } from '@/lib/casefile/schema';
@@ -12,14 +12,11 @@ import type { Outcome, SolveOptions } from '@/lib/results/outcome';
 
 type Hypothesis = NonNullable<CaseFile['hypotheses']>[number];
 
-/** Particles where the case leaves their number open. */
-const PARTICLES = 4000;
-
 /** A case of the method fit to its result: the case itself, and each rival account that it states. */
 export async function fitCase(casefile: CaseFile, problem: Problem, options: SolveOptions): Promise<Outcome> {
   const { analysis } = casefile;
   const coverage = analysis.coverage ?? DEFAULT_COVERAGE;
-  const draws = options.draws ?? analysis.draws ?? PARTICLES;
+  const draws = options.draws ?? analysis.draws ?? DEFAULT_PARTICLES;
   const run = options.run ?? runOn([here]);
   const rivals = casefile.hypotheses ?? [];
   const share = 1 / (1 + rivals.length);

@@ -16,6 +16,10 @@ export type { Shapes } from '@/lib/results/bands';
 export type { Outcome } from '@/lib/results/outcome';
 export type { RestMiss } from '@/lib/solve/rest-miss';
 
+/** The case with another number of draws, where one is asked for. */
+const withDraws = (casefile: CaseFile, draws: number | undefined): CaseFile =>
+  draws === undefined ? casefile : { ...casefile, analysis: { ...casefile.analysis, draws } };
+
 /**
  * The whole computation: a valid case to its result. Never throws for a case, whatever stands in it; rejects only when
  * `run` does (cancelled, a worker lost).
@@ -23,7 +27,7 @@ export type { RestMiss } from '@/lib/solve/rest-miss';
 export async function solveCase(casefile: CaseFile, options: SolveOptions = {}): Promise<Outcome> {
   const { analysis } = casefile;
   const method = options.method ?? analysis.method;
-  const lacking = needsOf(casefile, method);
+  const lacking = needsOf(withDraws(casefile, options.draws), method);
   if (lacking.length > 0) return { kind: 'invalid', issues: lacking };
 
   const asked = readEvidence(casefile, method, options.seed ?? analysis.seed ?? DEFAULT_SEED);

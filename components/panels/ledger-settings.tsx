@@ -1,7 +1,7 @@
 'use client';
 import { useSession } from '@/components/hooks/use-session';
 import { EntryField } from '@/components/ui/entry-field';
-import { DEFAULT_COVERAGE, DEFAULT_DRAWS, DEFAULT_SEED } from '@/lib/casefile/defaults';
+import { DEFAULT_COVERAGE, DEFAULT_DRAWS, DEFAULT_PARTICLES, DEFAULT_SEED } from '@/lib/casefile/defaults';
 import styles from './ledger.module.css';
 
 const METHODS: [id: string, name: string, when: string][] = [
@@ -54,7 +54,7 @@ export function LedgerSettings() {
       )}
       <Figure
         label="Draws"
-        text={String(analysis.draws ?? DEFAULT_DRAWS)}
+        text={String(analysis.draws ?? (analysis.method === 'fit' ? DEFAULT_PARTICLES : DEFAULT_DRAWS))}
         onEnter={(typed) =>
           typed.trim() === 'auto'
             ? set('draws', 'analysis.draws', 'auto')

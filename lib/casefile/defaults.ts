@@ -5,6 +5,10 @@ export const DEFAULT_SOURCE = 'default, not measured';
 /** The source given to a value that was set by drawing. */
 export const DRAWN_SOURCE = 'drawn on the board';
 
+/** Particles of a fit where the case leaves their number open, and the most that it takes. */
+export const DEFAULT_PARTICLES = 4000;
+export const MOST_PARTICLES = 200_000;
+
 export const DEFAULT_DRAWS = 20_000;
 export const DEFAULT_SEED = 1;
 export const DEFAULT_COVERAGE = 0.95;

@@ -1,3 +1,4 @@
+import { MOST_PARTICLES } from './defaults';
 import type { Issue } from './issue';
 import type { CaseFile, Departure, Method, Quantity, VehicleId } from './schema';
 import { VEHICLE_IDS } from './schema';
@@ -48,6 +49,11 @@ const BY_METHOD: Record<Method, (casefile: CaseFile) => Issue[]> = {
   ],
 
   fit: (casefile) => {
+    const { draws } = casefile.analysis;
+    if (typeof draws === 'number' && draws > MOST_PARTICLES)
+      return [
+        { path: 'analysis.draws', says: `must be at most ${MOST_PARTICLES} with the method fit, found ${draws}` },
+      ];
     const observations = observationsOf(casefile);
     if (observations.length === 0)
       return [{ path: 'departure', says: 'the method fit needs at least one observation' }];

@@ -32,7 +32,8 @@ const KEPT = 0.5;
 /** Moves at a temperature go on until every particle has moved this often on average; at the last one longer. */
 const MOVED = { along: 2, last: 6 };
 const MOST_ROUNDS = 25;
-const MOST_TEMPERATURES = 400;
+/** A temperature is raised by at least this, so that a run ends; where the evidence is that sharp the two runs will disagree. */
+const LEAST_STEP = 1e-4;
 
 /** No particle of the prior is possible. */
 export class NothingPossible extends Error {}
@@ -51,7 +52,7 @@ export async function temper(
   if (!logL.some((value) => value > -Infinity)) throw new NothingPossible();
   const walk = { scale: 0.6, tried: 0, taken: 0, rounds: 0 };
   let [beta, logEvidence, temperatures] = [0, 0, 0];
-  while (beta < 1 && temperatures < MOST_TEMPERATURES) {
+  while (beta < 1) {
     const next = nextTemperature(logL, beta);
     const weights = weightsOf(logL, next - beta);
     logEvidence += weights.logMean;
@@ -110,7 +111,7 @@ function nextTemperature(logL: Float64Array, beta: number): number {
     if (isKept(middle)) low = middle;
     else high = middle;
   }
-  return beta + Math.max(low, 1e-12);
+  return Math.min(1, beta + Math.max(low, LEAST_STEP));
 }
 
 const effectiveSize = (share: Float64Array): number => 1 / share.reduce((sum, w) => sum + w * w, 0);

@@ -1,3 +1,4 @@
+import { DEFAULT_PARTICLES } from '@/lib/casefile/defaults';
 import type { Issue } from '@/lib/casefile/issue';
 import type { Problem } from '@/lib/evidence/problem';
 import { log } from '@/lib/numerics/elementary';
@@ -12,8 +13,7 @@ import { placeParticles, standardised, unknownsOf, weighParticles } from './like
 import { type FitFound, type Solution, counted, joined } from './solution';
 import type { RunTasks, Task } from './task';
 
-/** Particles where the case leaves their number open, and at most in the second run, which is there to disagree. */
-const PARTICLES = 4000;
+/** Particles at most in the second run, which is there to disagree. */
 const SECOND = 1000;
 /** Particles a task. */
 const PER_TASK = { closed: 1024, simulated: 64 };
@@ -34,7 +34,7 @@ export async function solveFit(
   run: RunTasks,
   onProgress?: (done: number) => void,
 ): Promise<Fitted> {
-  const n = asked === 'auto' ? PARTICLES : asked;
+  const n = asked === 'auto' ? DEFAULT_PARTICLES : asked;
   const weigh = weigher(problem, run);
   const likelihood = { dimension: unknownsOf(problem).length, weigh };
   if (likelihood.dimension === 0)

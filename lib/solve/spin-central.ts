@@ -139,7 +139,7 @@ function distinct(found: Inversion[]): Inversion[] {
   return kept;
 }
 
-/** Retardations, as shares of friction, and turns of the course, rad, that a search begins from. */
+/** Retardations, as shares of friction, and turns off the straight way to rest, rad, that a search begins from. */
 const SHARES = [1, 0.5, 0.15];
 const TURNS = [0, 0.25, -0.25];
 

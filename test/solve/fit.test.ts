@@ -149,6 +149,11 @@ describe('the method fit', () => {
     expect([check(0.29, 0.9), check(0.31, 0), check(0, -1.1)]).toEqual(['pass', 'fail', 'fail']);
   });
 
+  test('more particles than can be held are refused with the path', async () => {
+    const outcome = await solveCase(edited(CROSSING, set('analysis.draws', 200_001)));
+    expect(outcome).toMatchObject({ kind: 'invalid', issues: [{ path: 'analysis.draws' }] });
+  });
+
   test('an observation without a spread is refused with its path', async () => {
     const outcome = await solveCase(edited(CROSSING, set('departure.A.direction', q(19))));
     expect(outcome).toMatchObject({ kind: 'invalid', issues: [{ path: 'departure.A.direction' }] });

@@ -31,6 +31,10 @@ interface Doing {
   openNumbers: () => boolean;
 }
 
+/** Enter presses a tool; it must not open the numbers of what is selected instead. */
+const isTool = (target: EventTarget): boolean =>
+  target instanceof Element && target.closest('[role="toolbar"]') !== null;
+
 /** Keys on the board and on its list of things: nudge, turn, delete, duplicate, step back. A held key is one step of undo. */
 export function useBoardKeys({ cancel, key, say, openNumbers }: Doing) {
   const session = useSessionStore();
@@ -103,6 +107,7 @@ export function useBoardKeys({ cancel, key, say, openNumbers }: Doing) {
   return {
     onKeyDown: (event: KeyboardEvent) => {
       if (event.target instanceof HTMLInputElement || event.target instanceof HTMLSelectElement) return;
+      if (event.key === 'Enter' && isTool(event.target)) return;
       say(null);
       if (handled(event)) event.preventDefault();
     },

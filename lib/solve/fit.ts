@@ -11,6 +11,7 @@ import type { FigureName } from './columns';
 import { Kernel } from './kernel';
 import { placeParticles, standardised, unknownsOf, weighParticles } from './likelihood';
 import { type FitFound, type Solution, counted, joined } from './solution';
+import { isSimulated } from './solve';
 import type { RunTasks, Task } from './task';
 
 /** Particles at most in the second run, which is there to disagree. */
@@ -55,9 +56,6 @@ export async function solveFit(
 }
 
 const refused = (path: string, says: string): Fitted => ({ kind: 'refused', reason: { path, says } });
-
-const isSimulated = ({ lasting, vehicles: { A, B } }: Problem): boolean =>
-  lasting !== null || A.departure.kind === 'spin' || B.departure.kind === 'spin';
 
 /** Cuts particles into tasks. */
 function cut(problem: Problem, z: Float64Array, kind: 'weigh' | 'figures'): Task[] {

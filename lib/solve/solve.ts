@@ -87,7 +87,7 @@ function drawTasks(from: number, draws: number, perTask = DRAWS_PER_TASK): Task[
 }
 
 /** Whether a draw takes simulations: of the travel, or of a contact that lasts. */
-const isSimulated = ({ lasting, vehicles: { A, B } }: Problem): boolean =>
+export const isSimulated = ({ lasting, vehicles: { A, B } }: Problem): boolean =>
   lasting !== null || A.departure.kind === 'spin' || B.departure.kind === 'spin';
 
 function sobolTasks(problem: Problem, figures: FigureName[]): Task[] {

@@ -130,7 +130,7 @@ test('an example is kept once: edited or deleted, it does not come back as it wa
 
 test('the examples that come with the program are valid and keep the names of their files', async () => {
   await loadExamples(store, 'public/examples');
-  expect((await listCases(store)).map(({ id }) => id).sort()).toEqual(['junction', 'nudge', 'queue']);
+  expect((await listCases(store)).map(({ id }) => id).sort()).toEqual(['junction', 'nudge', 'queue', 'rivals']);
 });
 
 test('the probe writes', async () => {

@@ -48,6 +48,27 @@ class ImmediateDialect extends SqliteDialect {
   }
 }
 
+/** Between two tries to open a file that another process is opening, ms. */
+const PAUSE = 25;
+
+/**
+ * Does what SQLite refuses as busy without waiting: two processes that open one file at once quarrel over its journal
+ * mode, and the timeout is not consulted there.
+ */
+function patiently(work: () => void): void {
+  for (let waited = 0; ; waited += PAUSE)
+    try {
+      work();
+      return;
+    } catch (error) {
+      if (!isBusy(error) || waited >= BUSY_TIMEOUT) throw error;
+      Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, PAUSE);
+    }
+}
+
+const isBusy = (error: unknown): boolean =>
+  error instanceof Error && 'code' in error && String(error.code).startsWith('SQLITE_BUSY');
+
 /**
  * Opens (and if need be makes) the database in a folder. Every commit is on disk before it is answered: write-ahead log
  * with a full sync. The only home of the database driver.
@@ -55,7 +76,8 @@ class ImmediateDialect extends SqliteDialect {
 export async function openDatabase(folder: string): Promise<Kysely<Tables>> {
   mkdirSync(folder, { recursive: true });
   const raw = new Database(join(folder, 'cases.db'), { timeout: BUSY_TIMEOUT });
-  for (const setting of ['journal_mode = WAL', 'synchronous = FULL', 'foreign_keys = ON']) raw.pragma(setting);
+  for (const setting of ['journal_mode = WAL', 'synchronous = FULL', 'foreign_keys = ON'])
+    patiently(() => raw.pragma(setting));
   const db = new Kysely<Tables>({ dialect: new ImmediateDialect({ database: raw }) });
   await migrate(db);
   return db;
